@@ -1,0 +1,108 @@
+package law
+
+import "strings"
+
+// ColumnInfo describes a column of the catalogue: everything a law may read.
+type ColumnInfo struct {
+	Name  string
+	Unit  string // VOUnit spelling; empty for a pure number
+	Words string // for a column of codes: which word list, "kind", "place", ...
+	Doc   string
+	// Low <= value <= High is what the host may send. Infinite is allowed
+	// where it says so; see each Doc.
+	Low, High float64
+}
+
+const inf = 1e308 * 10
+
+// columns of objects, of chance and of one-off questions.
+var columns = []ColumnInfo{
+	{Name: "kind", Words: "kind", Doc: "what the object is"},
+	{Name: "place", Words: "place", Doc: "bound, adrift or central"},
+	{Name: "origin", Words: "origin", Doc: "founded, or merged out of others"},
+	{Name: "composition", Words: "composition", Doc: "what it is mainly made of"},
+	{Name: "mass", Unit: "solMass", Doc: "present mass", Low: 0, High: 1e20},
+	{Name: "birth_mass", Unit: "solMass", Doc: "mass at the last change of kind or merger", Low: 0, High: 1e20},
+	{Name: "metals", Doc: "heavy elements by mass (Sun: 0.02)", Low: 0, High: 1},
+	{Name: "radius", Unit: "km", Doc: "radius of the object", Low: 0, High: 1e20},
+	{Name: "u", Doc: "a uniform draw, 0 < u < 1", Low: 0, High: 1},
+	{Name: "e", Doc: "a unit exponential draw", Low: 0, High: 800},
+	{Name: "log10_date", Unit: "yr", Doc: "log10 of years since the Big Bang", Low: -inf, High: inf},
+	{Name: "log10_age", Unit: "yr", Doc: "log10 of years since it became what it is", Low: -inf, High: inf},
+	{Name: "log10_since", Unit: "yr", Doc: "log10 of years since dark energy began to decay; -Inf: it has not", Low: -inf, High: inf},
+	{Name: "log10_four_volume", Unit: "yr4", Doc: "log10 of the four-volume of the past light cone, c = 1", Low: -inf, High: inf},
+	{Name: "ln_a", Doc: "natural log of the scale factor, 0 today", Low: -inf, High: inf},
+	{Name: "separation", Unit: "AU", Doc: "semi-major axis", Low: 0, High: 1e20},
+	{Name: "eccentricity", Doc: "orbital eccentricity", Low: 0, High: 1},
+}
+
+// GalaxyValues are the columns a rate may read. Counts and masses are of the
+// real galaxy, not of the sample. Each of the first five also exists per
+// kind, as number_white_dwarf and so on.
+//
+//	number, mass_bound          objects bound, their mass (unborn ones count)
+//	sum_C                       sum over bound objects of susceptibility to clock C
+//	sum_sought_C                sum of how much they are sought, encounter clocks
+//	reading_C                   the clock's reading
+//	carried_off                 mass carried off by ejection and infall
+//	central_mass                mass of the central hole
+//	log10_date                  date
+//	founded_number, founded_mass, founded_radius, founded_dispersion
+//	                            the galaxy at the start: N0, M0 (solMass), R0 (pc), v0 (km/s)
+//	galaxy_radius, galaxy_dispersion
+//	                            what the frame law answers now; not for the frame law itself
+func galaxyValue(name string) (ColumnInfo, bool) {
+	c := ColumnInfo{Name: name, Low: 0, High: inf}
+	switch name {
+	case "log10_date":
+		return ColumnInfo{Name: name, Unit: "yr", Doc: "log10 of years since the Big Bang", Low: -inf, High: inf}, true
+	case "carried_off", "central_mass", "founded_mass":
+		c.Unit = "solMass"
+		return c, true
+	case "founded_number":
+		return c, true
+	case "founded_radius", "galaxy_radius":
+		c.Unit = "pc"
+		return c, true
+	case "founded_dispersion", "galaxy_dispersion":
+		c.Unit = "km/s"
+		return c, true
+	}
+	for _, p := range []string{"number", "mass_bound"} {
+		if name == p || strings.HasPrefix(name, p+"_") {
+			if p == "mass_bound" {
+				c.Unit = "solMass"
+			}
+			return c, true
+		}
+	}
+	for _, p := range []string{"sum_", "reading_"} {
+		if strings.HasPrefix(name, p) && len(name) > len(p) {
+			return c, true
+		}
+	}
+	return ColumnInfo{}, false
+}
+
+// ColumnNamed finds an input column for a question of a role. Columns of a
+// pair end in _1 and _2.
+func ColumnNamed(question, name string) (ColumnInfo, bool) {
+	if question == "rate" {
+		return galaxyValue(name)
+	}
+	base := name
+	if question == "meet" || question == "merge" {
+		if s, ok := strings.CutSuffix(name, "_1"); ok {
+			base = s
+		} else if s, ok := strings.CutSuffix(name, "_2"); ok {
+			base = s
+		}
+	}
+	for _, c := range columns {
+		if c.Name == base {
+			c.Name = name
+			return c, true
+		}
+	}
+	return ColumnInfo{}, false
+}
