@@ -1,6 +1,9 @@
 package law
 
-import "strings"
+import (
+	"math"
+	"strings"
+)
 
 // ColumnInfo describes a column of the catalogue: everything a law may read.
 type ColumnInfo struct {
@@ -13,7 +16,7 @@ type ColumnInfo struct {
 	Low, High float64
 }
 
-const inf = 1e308 * 10
+var inf = math.Inf(1)
 
 // columns of objects, of chance and of one-off questions.
 var columns = []ColumnInfo{
