@@ -39,6 +39,10 @@ type Card struct {
 	// Kinds this law adds to the run.
 	Kinds []Kind
 
+	// Idle says that this law never does anything (the law "none" of an
+	// optional process): the engine does not ask it.
+	Idle bool
+
 	// Tolerance is 0 for a law that gives the same bits on every machine of
 	// one architecture, else the relative size of what may differ.
 	Tolerance float64
@@ -50,7 +54,9 @@ type Question struct {
 	// Inputs are the columns it reads, by their names in the catalogue.
 	Inputs []string
 	// Words the answer gives chances or shares for: kinds for die, clocks of
-	// other laws for divert. Other questions have none.
+	// other laws for divert. Other questions have none. What divert takes
+	// falls to the central hole, under the word of the card's outcome at the
+	// same index, or "swallowed".
 	Words []string
 }
 
