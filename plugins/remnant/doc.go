@@ -1,0 +1,2 @@
+// Package remnant holds the laws of process remnant: what light stars leave.
+package remnant
