@@ -1,8 +1,6 @@
 package evaporation
 
 import (
-	"math"
-
 	"wane/sim/law"
 	"wane/sim/num"
 	"wane/sim/physics/hole"
@@ -36,8 +34,8 @@ func (page) Describe() law.Card {
 		Parameters: []law.Parameter{{
 			Name: "lightest_neutrino", Unit: "eV", Log10: true,
 			Doc: "mass of the lightest neutrino; the other two follow from the measured splittings",
-			Low: -6, High: math.Log10(0.45), Preset: -3,
-			Citation: "preset: assumption; upper end: KATRIN Collaboration 2025, Science 388, 180 (from memory)",
+			Low: -6, High: -0.3468, Preset: -3,
+			Citation: "preset: assumption; upper end, 0.45 eV: KATRIN Collaboration 2025, Science 388, 180 (from memory)",
 		}},
 	}
 }
