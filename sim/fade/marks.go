@@ -1,0 +1,102 @@
+package fade
+
+import "math"
+
+// Marks are the fade dates of one population, in the unit of its entries and
+// exits. A date that is not reached is +Inf.
+type Marks struct {
+	// Peak is the largest count, PeakAt the first date at which it is
+	// reached. Peak is 0 when there never was a member for any length of
+	// time; then all dates are +Inf.
+	Peak   int
+	PeakAt float64
+	// Half and Hundredth are the dates after which the count never again
+	// exceeds Peak/2 and Peak/100 as real numbers: with a peak of 3, Half is
+	// when it last falls from 2 to 1.
+	Half, Hundredth float64
+	// Last is the date of the last exit, if nobody remains.
+	Last float64
+	// Remaining is the count at the end of time: those that never leave.
+	Remaining int
+	// LastIndex is the index in exits of the last finite exit, of several at
+	// one date the highest; -1 if there is none. It is set even if some remain.
+	LastIndex int
+}
+
+// Scratch is the memory of a search, to be kept by one worker and used again.
+// The zero value is ready. It is not safe for concurrent use.
+type Scratch struct {
+	bins []bin
+	slot []int32 // per bin: its run, or -1
+	runs []run
+	keys []uint64 // dates of the bins looked into, as keys
+	tmp  []uint64
+}
+
+// Find returns the marks of a population.
+//
+// Shapes: entries and exits in any order and independent of each other; an
+// object may have several pairs. Exits may be fewer than entries: those
+// missing never leave. Neither is changed.
+// Domain: any number; an entry or exit of +Inf never happens. NaN is not
+// allowed. Exits must not precede their own entries.
+// Error: none; dates are those given.
+// Cost: two passes over each list and a sort of a few of its elements. No
+// allocation once the scratch has seen a population as large.
+func (s *Scratch) Find(entries, exits []float64) Marks {
+	in, out := scan(entries), scan(exits)
+	m := Marks{Remaining: in.n - out.n, LastIndex: out.lastIndex}
+	m.PeakAt, m.Half, m.Hundredth, m.Last = inf, inf, inf, inf
+	switch {
+	case in.n == 0:
+		return m
+	case out.n == 0 || in.last < out.first:
+		// Everybody is in before the first leaves: marks are order
+		// statistics of the exits.
+		m.Peak, m.PeakAt = in.n, in.last
+		m.Half, m.Hundredth = s.orderStatistics(exits, out, in.n-in.n/2, in.n-in.n/100)
+	default:
+		s.search(&m, entries, exits, in, out)
+	}
+	if m.Remaining == 0 && m.Peak > 0 {
+		m.Last = out.last
+	}
+	return m
+}
+
+var inf = math.Inf(1)
+
+// extent is where the finite dates of a list lie.
+type extent struct {
+	n           int
+	first, last float64 // +Inf, -Inf when n = 0
+	lastIndex   int
+}
+
+func scan(dates []float64) extent {
+	e := extent{n: len(dates), first: inf, last: -inf, lastIndex: -1}
+	for i, v := range dates {
+		if v > math.MaxFloat64 {
+			e.n--
+			continue
+		}
+		if v < e.first {
+			e.first = v
+		}
+		if v >= e.last {
+			e.last, e.lastIndex = v, i
+		}
+	}
+	return e
+}
+
+// key is an integer that orders as the date does. Both zeros have one key.
+func key(date float64) uint64 {
+	b := math.Float64bits(date + 0)
+	return b ^ (uint64(int64(b)>>63) | 1<<63)
+}
+
+// date is the inverse of key.
+func date(key uint64) float64 {
+	return math.Float64frombits(key ^ (^uint64(int64(key)>>63) | 1<<63))
+}
