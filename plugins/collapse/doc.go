@@ -1,3 +1,3 @@
-// Package collapse holds the laws of process collapse: what heavy stars 
+// Package collapse holds the laws of process collapse: what heavy stars
 // leave.
 package collapse

@@ -1,3 +1,3 @@
-// Package massfunction holds the laws of process mass-function: the masses 
+// Package massfunction holds the laws of process mass-function: the masses
 // objects are born with.
 package massfunction

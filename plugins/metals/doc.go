@@ -1,3 +1,3 @@
-// Package metals holds the laws of process metals: the heavy elements 
+// Package metals holds the laws of process metals: the heavy elements
 // objects are born with.
 package metals

@@ -1,3 +1,3 @@
-// Package starformation holds the laws of process star-formation: when 
+// Package starformation holds the laws of process star-formation: when
 // objects are born.
 package starformation
