@@ -1,5 +1,7 @@
 package draw
 
+import "math/bits"
+
 // layer is one layer of the ziggurat: bits j < inside are under the curve
 // without a look at it, and x = (j + 1/2) width.
 type layer struct {
@@ -33,8 +35,10 @@ func (s Stream) Exp(object uint64, generation, number uint32) float64 {
 // Exps fills dst with the Exp of objects first, first+1, ...
 func (s Stream) Exps(dst []float64, first uint64, generation, number uint32) {
 	c := s.column(generation, number)
+	name, turned := c+first*phi, bits.RotateLeft64(c, halfRotation)
 	for i := range dst {
-		z := state(c, first+uint64(i))
+		z := mix(name) ^ turned
+		name += phi
 		b := mix(z)
 		l := &layerTable[b&255]
 		j := b >> 11
@@ -63,14 +67,27 @@ func outside(z, b uint64) float64 {
 			tail += edgeTable[baseEdge].x
 			continue
 		}
-		right, left := edgeTable[i], edgeTable[i+1]
-		y := right.y + float64(uniform(b)*(left.y-right.y))
-		if y < float64(right.y*expSmall(right.x-x)) {
+		if underCurve(edgeTable[i], edgeTable[i+1], x, uniform(b)) {
 			return tail + x
 		}
 		z += rejectStep
 		b = mix(z)
 	}
+}
+
+// underCurve reports whether a point of a layer, at x and at share u of the
+// layer's height, lies under e^-x. The chord from above and two terms of the
+// series from below settle nearly all points before the exponential is needed.
+func underCurve(right, left edge, x, u float64) bool {
+	t := right.x - x
+	if float64(u*(right.x-left.x)) >= t {
+		return false
+	}
+	y := right.y + float64(u*(left.y-right.y))
+	if below := t + float64(float64(t*t)/2); y < right.y+float64(right.y*below) {
+		return true
+	}
+	return y < float64(right.y*expSmall(t))
 }
 
 // expSmall returns e^t for 0 ≤ t ≤ 0.8, the widest layer, to a few ulp: the

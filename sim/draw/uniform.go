@@ -1,5 +1,7 @@
 package draw
 
+import "math/bits"
+
 // Uniform returns a number between 0 and 1, neither end included.
 //
 //	u = (j + 1/2) 2^-53,  j the upper 53 bits
@@ -15,8 +17,10 @@ func (s Stream) Uniform(object uint64, generation, number uint32) float64 {
 // Uniforms fills dst with the Uniform of objects first, first+1, ...
 func (s Stream) Uniforms(dst []float64, first uint64, generation, number uint32) {
 	c := s.column(generation, number)
+	name, turned := c+first*phi, bits.RotateLeft64(c, halfRotation)
 	for i := range dst {
-		dst[i] = uniform(mix(state(c, first+uint64(i))))
+		dst[i] = uniform(mix(mix(name) ^ turned))
+		name += phi
 	}
 }
 
