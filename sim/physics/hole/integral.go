@@ -38,7 +38,7 @@ const (
 // hole above 1e6 times the mass at which the first massive particle joins,
 // late switches change the life by under 1e-17, and the closed form is used.
 //
-// Source: Page 1976, section VI.
+// Source: Page 1976, integrated over the life.
 func (e *Emission) Log10Lifetime(m float64) float64 {
 	switch {
 	case !(m > 0):

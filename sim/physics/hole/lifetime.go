@@ -25,7 +25,7 @@ const BlackBodyAlpha = 1 / (15360 * math.Pi)
 // Domain: m > 0, alpha >= 0; -Inf for m <= 0 or alpha = 0.
 // Error: 2.2e-5, all from G, beside that of alpha.
 //
-// Source: Page 1976, eq. 6.
+// Source: Page 1976.
 func Log10LossRate(m, alpha float64) float64 {
 	if !(m > 0) || !(alpha > 0) {
 		return math.Inf(-1)
@@ -42,7 +42,7 @@ func Log10LossRate(m, alpha float64) float64 {
 // Domain: m > 0, alpha > 0; -Inf for m <= 0, +Inf for alpha = 0.
 // Error: 2.2e-5 in t, all from G, beside that of alpha.
 //
-// Source: Page 1976, eq. 7; with [BlackBodyAlpha] 5120 pi G^2 m^3/(hbar c^4).
+// Source: Page 1976; with [BlackBodyAlpha] 5120 pi G^2 m^3/(hbar c^4).
 // Checked by testdata/published/holes.csv.
 func Log10Lifetime(m, alpha float64) float64 {
 	switch {

@@ -24,7 +24,7 @@ const (
 // Error: 1e-3 against the totals that Page prints for spin 1/2, 1, 2. The
 // values come from integrating the radial wave equation for l <= 6.
 //
-// Source: Page 1976, table I and eqs. 25-28; recomputed.
+// Source: Page 1976 (totals), recomputed.
 func StateAlpha(s Spin) float64 {
 	switch s {
 	case Scalar:

@@ -78,7 +78,7 @@ func Log10Wait(m, end, log10Tau float64) float64 {
 // Domain: share 1/3 .. 1 (the rest leaves as neutrinos).
 // Error: 2.2e-5 from G in the solar mass, beside that of share.
 //
-// Source: Adams & Laughlin 1997, eq. 4.25. Checked by nucleon.csv.
+// Source: Adams & Laughlin 1997, section IV. Checked by nucleon.csv.
 func Power(m, share, log10Tau float64) float64 {
 	return share * m * constant.Sun * constant.C * constant.C * num.Exp10(-log10Tau-constant.Log10Year)
 }
