@@ -11,28 +11,35 @@ const (
 	maxBins = 1 << 15
 )
 
-// grid divides the keys from low up into bins of 2^shift keys.
+// grid divides the keys low to low + span into bins of 2^shift keys.
 type grid struct {
-	low   uint64
-	shift uint
-	bins  int
+	low, span uint64
+	shift     uint
+	bins      int
 }
 
 // newGrid covers first..last with about n/8 bins.
 func newGrid(first, last float64, n int) grid {
-	g := grid{low: key(first), bins: minBins}
+	g := grid{low: key(first), span: key(last) - key(first), bins: minBins}
 	for g.bins < maxBins && g.bins < n/8 {
 		g.bins *= 2
 	}
-	if span := bits.Len64(key(last) - g.low); span > bits.Len(uint(g.bins))-1 {
-		g.shift = uint(span - bits.Len(uint(g.bins)) + 1)
-	}
+	lg := bits.Len(uint(g.bins)) - 1
+	g.shift = uint(max(bits.Len64(g.span), lg) - lg)
 	return g
 }
 
-// of returns the bin of a date not before the first. A date beyond the last,
-// such as +Inf, has a bin beyond the grid.
-func (g grid) of(date float64) uint64 { return (key(date) - g.low) >> (g.shift & 63) }
+// beyond is the bin of dates that are not on the grid.
+const beyond = ^uint64(0)
+
+// of returns the bin of a date.
+func (g grid) of(date float64) uint64 {
+	k := key(date) - g.low
+	if k > g.span {
+		return beyond
+	}
+	return k >> (g.shift & 63)
+}
 
 // orderStatistics returns the j-th and the k-th smallest date (from 1), +Inf
 // if there are fewer finite ones: a histogram of the leading bits, and a sort
@@ -49,7 +56,7 @@ func (s *Scratch) orderStatistics(dates []float64, e extent, j, k int) (jth, kth
 			bins[b].out++
 		}
 	}
-	var binJ, binK = ^uint64(0), ^uint64(0)
+	binJ, binK := beyond-1, beyond-1
 	var sizeJ, sizeK int
 	for b, before := 0, 0; b < len(bins); b++ {
 		n := int(bins[b].out)
