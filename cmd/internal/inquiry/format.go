@@ -1,0 +1,36 @@
+package inquiry
+
+import (
+	"math"
+	"strconv"
+	"strings"
+)
+
+// Format prints a value with its unit, for people.
+func Format(v Value) string {
+	switch {
+	case v.Word != "":
+		return v.Word
+	case v.Log10 && math.IsInf(v.Number, 1):
+		return "never"
+	case v.Log10 && math.IsInf(v.Number, -1):
+		return strings.TrimSpace("0 " + v.Unit)
+	case v.Log10 && v.Number > 1e6:
+		return strings.TrimSpace("10^(10^" + strconv.FormatFloat(math.Log10(v.Number), 'f', 3, 64) + ") " + v.Unit)
+	case v.Log10:
+		s := "10^" + strconv.FormatFloat(v.Number, 'f', 3, 64) + " " + v.Unit
+		if math.Abs(v.Number) < 15 {
+			s += " (" + short(power(v.Number), 4) + " " + v.Unit + ")"
+		}
+		return strings.TrimSpace(s)
+	}
+	return strings.TrimSpace(short(v.Number, 5) + " " + v.Unit)
+}
+
+// short prints a number to some digits, 1.5e-9 rather than 1.5e-09.
+func short(v float64, digits int) string {
+	s := strconv.FormatFloat(v, 'g', digits, 64)
+	s = strings.Replace(s, "e+0", "e", 1)
+	s = strings.Replace(s, "e+", "e", 1)
+	return strings.Replace(s, "e-0", "e-", 1)
+}
