@@ -2,89 +2,7 @@ package law
 
 import (
 	"fmt"
-	"math"
 )
-
-// output is one answer column and what it may hold.
-type output struct {
-	name  string
-	words bool
-	rule  rule
-}
-
-// rule is the set of numbers an answer column may hold.
-type rule uint8
-
-const (
-	finite     rule = iota
-	wait            // a number or +Inf
-	logZero         // a number or -Inf
-	hazard          // a number, -Inf or +Inf (the end is certain)
-	positive        // finite, > 0
-	atLeast0        // finite, >= 0
-	chance          // 0 .. 1, the chance columns of a row sum to 1
-	share           // 0 .. 1
-	growOrLose      // survivors' mass: finite, >= 0
-)
-
-func (r rule) holds(v float64) bool {
-	switch r {
-	case wait:
-		return v == v && v > math.Inf(-1)
-	case logZero:
-		return v < math.Inf(1)
-	case hazard:
-		return v == v
-	case positive:
-		return v > 0 && v < math.Inf(1)
-	case atLeast0, growOrLose:
-		return v >= 0 && v < math.Inf(1)
-	case chance, share:
-		return v >= 0 && v <= 1
-	}
-	return v-v == 0
-}
-
-func (r rule) String() string {
-	return [...]string{
-		"a finite number", "a number or +Inf (never)", "a number or -Inf (zero)", "a number or an infinity",
-		"a finite number > 0", "a finite number >= 0", "0 .. 1", "0 .. 1", "a finite number >= 0",
-	}[r]
-}
-
-func outputsOf(c Card, question string) []output {
-	names := c.Outputs(question)
-	out := make([]output, len(names))
-	for i, n := range names {
-		out[i] = output{name: n, rule: ruleOf(question, n)}
-		switch n {
-		case "kind", "kind_1", "kind_2", "composition", "composition_1", "composition_2", "outcome":
-			out[i].words = true
-		}
-	}
-	return out
-}
-
-func ruleOf(question, column string) rule {
-	switch {
-	case column == "wait":
-		return wait
-	case column == "log10_dark", column == "log10_temperature",
-		len(column) > 10 && column[:10] == "log10_rate", column == "log10_rate":
-		return logZero
-	case column == "log10_hazard":
-		return hazard
-	case len(column) > 7 && column[:7] == "chance_":
-		return chance
-	case len(column) > 6 && column[:6] == "share_", column == "heat", column == "stop":
-		return share
-	case column == "mass" && question == "mass", column == "radius":
-		return positive
-	case column == "curvature", column == "log10_date":
-		return finite
-	}
-	return atLeast0
-}
 
 // Fault is one thing wrong with an answer. Row is -1 when it concerns the
 // whole answer.
@@ -111,14 +29,18 @@ func (f *Fault) Error() string {
 
 // Ask asks the law a question and checks the answer. This is the one place
 // where answers are checked: for length, order of columns, finiteness, range,
-// words, and chances that sum to 1. The batch's Parameters and Kinds are
-// filled in here.
+// words, chances that sum to 1, and mass that does not come from nowhere. The
+// batch's Parameters and Kinds are filled in here; its columns must be those
+// of the card, in that order.
 func (u *Use) Ask(question string, in Batch) (Batch, error) {
 	want, ok := u.outputs[question]
 	if !ok {
 		return Batch{}, &Fault{Law: u.ID(), Question: question, Row: -1, Got: "a question that is not on its card", Want: "one of its own"}
 	}
 	in.Parameters, in.Kinds = u.Parameters, u.kinds
+	if f := u.checkInput(question, in); f != nil {
+		return Batch{}, f
+	}
 	if in.Rows == 0 {
 		return emptyAnswer(want), nil
 	}
@@ -177,7 +99,34 @@ func (u *Use) check(question string, want []output, in, out Batch) *Fault {
 		}
 	}
 	if firstChance >= 0 {
-		return u.checkChances(question, firstChance, want, in, out)
+		if f := u.checkChances(question, firstChance, want, in, out); f != nil {
+			return f
+		}
+	}
+	return u.checkMass(question, in, out)
+}
+
+// checkInput finds a column that the host left out, misplaced or cut short.
+func (u *Use) checkInput(question string, in Batch) *Fault {
+	want := u.inputs[question]
+	bad := func(column, got, wanted string) *Fault {
+		return &Fault{Law: u.ID(), Question: question, Column: column, Row: -1, Got: got, Want: wanted}
+	}
+	if len(in.Columns) != len(want) {
+		return bad("", fmt.Sprintf("a batch of %d columns", len(in.Columns)), fmt.Sprintf("the %d that the card reads", len(want)))
+	}
+	for i, w := range want {
+		c := &in.Columns[i]
+		if c.Name != w.name {
+			return bad(w.name, fmt.Sprintf("a batch with column %q in its place", c.Name), "the order of the card")
+		}
+		n := len(c.Values)
+		if w.words {
+			n = len(c.Words)
+		}
+		if n != in.Rows {
+			return bad(w.name, fmt.Sprintf("a batch with %d values in it", n), fmt.Sprintf("one in each of %d rows", in.Rows))
+		}
 	}
 	return nil
 }
@@ -230,40 +179,4 @@ func (u *Use) checkChances(question string, first int, want []output, in, out Ba
 
 func (u *Use) rowFault(question, column string, row int, in Batch, got, want string) *Fault {
 	return &Fault{Law: u.ID(), Question: question, Column: column, Row: row, Object: in.Object(row), Got: got, Want: want}
-}
-
-// Object puts a row into words, for messages: its columns and values.
-func (b Batch) Object(row int) string {
-	s := ""
-	for _, c := range b.Columns {
-		if s != "" {
-			s += ", "
-		}
-		switch {
-		case c.Words == nil:
-			s += fmt.Sprintf("%s %.6g", c.Name, c.Values[row])
-			if info, ok := ColumnNamed("", c.Name); ok && info.Unit != "" {
-				s += " " + info.Unit
-			}
-		default:
-			s += wordOf(b, c.Name, c.Words[row])
-		}
-	}
-	return s
-}
-
-func wordOf(b Batch, column string, code uint8) string {
-	list := b.Kinds
-	switch {
-	case len(column) >= 5 && column[:5] == "place":
-		list = PlaceWords
-	case len(column) >= 6 && column[:6] == "origin":
-		list = OriginWords
-	case len(column) >= 11 && column[:11] == "composition":
-		list = CompositionWords
-	}
-	if int(code) < len(list) {
-		return list[code]
-	}
-	return fmt.Sprintf("%s %d", column, code)
 }

@@ -40,7 +40,7 @@ var columns = []ColumnInfo{
 }
 
 // GalaxyValues are the columns a rate may read. Counts and masses are of the
-// real galaxy, not of the sample. Each of the first five also exists per
+// real galaxy, not of the sample. Numbers, masses and sums also exist per
 // kind, as number_white_dwarf and so on.
 //
 //	number, mass_bound          objects bound, their mass (unborn ones count)
@@ -108,4 +108,58 @@ func ColumnNamed(question, name string) (ColumnInfo, bool) {
 		}
 	}
 	return ColumnInfo{}, false
+}
+
+// object is every column of an object.
+var object = []string{"kind", "mass", "composition", "metals", "radius", "place", "origin"}
+
+// mayRead tells whether the host can fill a column for a question.
+func mayRead(r Role, question, column string) bool {
+	if _, known := ColumnNamed(question, column); !known {
+		return false
+	}
+	switch question {
+	case "density":
+		return contains([]string{"ln_a", "log10_date", "log10_since"}, column)
+	case "end":
+		return contains([]string{"log10_date", "log10_four_volume"}, column)
+	case "mass", "birth":
+		return column == "u"
+	case "metals":
+		return column == "log10_date" || column == "u"
+	case "sort", "die":
+		return column == "mass" || column == "metals"
+	case "live":
+		return contains([]string{"kind", "mass", "metals", "composition"}, column)
+	case "remain":
+		return contains([]string{"kind", "mass", "metals", "u"}, column)
+	case "rate":
+		return true
+	case "meet", "merge":
+		return readsPair(question, column)
+	case "shine":
+		return contains([]string{"kind", "mass", "composition", "log10_age"}, column)
+	case "wear":
+		return contains(object, column) || column == "birth_mass"
+	case "foretell":
+		if r == Turning {
+			return contains(object, column) || column == "u" || column == "e"
+		}
+		return contains(object, column) || column == "birth_mass"
+	}
+	return contains(object, column)
+}
+
+func readsPair(question, column string) bool {
+	base, first := strings.CutSuffix(column, "_1")
+	if !first {
+		base, _ = strings.CutSuffix(column, "_2")
+	}
+	if base == column {
+		if question == "meet" {
+			return column == "u"
+		}
+		return column == "separation" || column == "eccentricity"
+	}
+	return contains(object, base)
 }

@@ -1,6 +1,7 @@
 package law
 
 import (
+	"errors"
 	"fmt"
 	"sort"
 )
@@ -27,7 +28,7 @@ func NewRegistry(laws ...Law) (*Registry, error) {
 func (r *Registry) Add(l Law) error {
 	c := l.Describe()
 	if faults := CheckCard(c); len(faults) > 0 {
-		return fmt.Errorf("law %s/%s: %w", c.Process, c.Name, faults[0])
+		return fmt.Errorf("law %s/%s: %w", c.Process, c.Name, errors.Join(faults...))
 	}
 	if r.laws[c.Process] == nil {
 		r.laws[c.Process] = map[string]Law{}

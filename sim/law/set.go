@@ -13,10 +13,16 @@ type Set struct {
 }
 
 // NewSet resolves laws into a run's set: word lists are merged, and limits that name
-// another law's parameter are looked up. It returns every fault it finds.
+// another law's parameter are looked up. It returns every fault it finds. A
+// Use belongs to one Set; change its parameters before, not after.
 func NewSet(uses ...*Use) (*Set, []error) {
 	s := &Set{uses: map[string]*Use{}, Kinds: append([]string(nil), KindWords...)}
 	var faults []error
+	type madeBy struct {
+		composition uint8
+		law         string
+	}
+	made := map[string]madeBy{}
 	for _, u := range uses {
 		if _, twice := s.uses[u.Card.Process]; twice {
 			faults = append(faults, fmt.Errorf("process %s: two laws", u.Card.Process))
@@ -26,8 +32,14 @@ func NewSet(uses ...*Use) (*Set, []error) {
 		for _, k := range u.Card.Kinds {
 			if !contains(s.Kinds, k.Name) {
 				s.Kinds = append(s.Kinds, k.Name)
+				made[k.Name] = madeBy{k.Composition, u.ID()}
+			} else if m, ok := made[k.Name]; ok && m.composition != k.Composition {
+				faults = append(faults, fmt.Errorf("kind %q: laws %s and %s disagree on what it is made of", k.Name, m.law, u.ID()))
 			}
 		}
+	}
+	if len(s.Kinds) > NoWord {
+		faults = append(faults, fmt.Errorf("%d kinds of object: at most %d", len(s.Kinds), NoWord))
 	}
 	for _, u := range uses {
 		u.kinds = s.Kinds

@@ -3,12 +3,15 @@ package law
 import "fmt"
 
 // Use is one law as a run uses it: the law, its card, and the values of its
-// parameters. It is safe for concurrent use.
+// parameters. Set its parameters, then make it part of one Set; from then on
+// it must not be changed and is safe for concurrent use.
 type Use struct {
 	Law        Law
 	Card       Card
 	Parameters []float64 // in the order of the card
 
+	role    Role
+	inputs  map[string][]input
 	outputs map[string][]output
 	limits  [2]float64 // of Accepts, resolved
 	kinds   []string   // word list of the run
@@ -22,19 +25,32 @@ func NewUse(l Law) *Use {
 	for i, p := range c.Parameters {
 		u.Parameters[i] = p.Preset
 	}
-	u.outputs = map[string][]output{}
+	p, _ := ProcessNamed(c.Process)
+	u.role = p.Role
+	u.inputs, u.outputs = map[string][]input{}, map[string][]output{}
 	for _, q := range c.Questions {
+		u.inputs[q.Name] = inputsOf(q)
 		u.outputs[q.Name] = outputsOf(c, q.Name)
 	}
 	u.limits = [2]float64{-inf, inf}
-	if l := c.Accepts.Low; l.Set && l.Parameter == "" {
-		u.limits[0] = l.Value
-	}
-	if h := c.Accepts.High; h.Set && h.Parameter == "" {
-		u.limits[1] = h.Value
-	}
+	u.resolve()
 	u.bind()
 	return u
+}
+
+// resolve sets the limits that hang on this law alone. Those that hang on
+// another process's parameter stay open until the law is part of a Set.
+func (u *Use) resolve() {
+	for side, l := range []Limit{u.Card.Accepts.Low, u.Card.Accepts.High} {
+		if !l.Set {
+			continue
+		}
+		if l.Parameter == "" {
+			u.limits[side] = l.Value
+		} else if v, ok := u.Parameter(l.Parameter); ok {
+			u.limits[side] = v
+		}
+	}
 }
 
 // ID is process/name.
@@ -68,6 +84,7 @@ func (u *Use) Set(name string, value float64) error {
 			return fmt.Errorf("law %s: parameter %s: %v %s is outside %v .. %v", u.ID(), name, value, p.Unit, low, high)
 		}
 		u.Parameters[i] = value
+		u.resolve()
 		return nil
 	}
 	return fmt.Errorf("law %s: no parameter %q", u.ID(), name)

@@ -1,0 +1,105 @@
+package law
+
+import (
+	"math"
+	"strings"
+)
+
+// output is one answer column and what it may hold.
+type output struct {
+	name  string
+	words bool
+	rule  rule
+}
+
+// rule is the set of numbers an answer column may hold.
+type rule uint8
+
+const (
+	finite   rule = iota
+	wait          // a number or +Inf
+	logZero       // a number or -Inf
+	hazard        // a number, -Inf or +Inf (the end is certain)
+	positive      // finite, > 0
+	atLeast0      // finite, >= 0
+	chance        // 0 .. 1, the chance columns of a row sum to 1
+	share         // 0 .. 1
+	yesNo         // 0 or 1
+)
+
+func (r rule) holds(v float64) bool {
+	switch r {
+	case wait:
+		return v == v && v > math.Inf(-1)
+	case logZero:
+		return v < math.Inf(1)
+	case hazard:
+		return v == v
+	case positive:
+		return v > 0 && v < math.Inf(1)
+	case atLeast0:
+		return v >= 0 && v < math.Inf(1)
+	case yesNo:
+		return v == 0 || v == 1
+	case chance, share:
+		return v >= 0 && v <= 1
+	}
+	return v-v == 0
+}
+
+func (r rule) String() string {
+	return [...]string{
+		"a finite number", "a number or +Inf (never)", "a number or -Inf (zero)", "a number or an infinity",
+		"a finite number > 0", "a finite number >= 0", "0 .. 1", "0 .. 1", "0 or 1",
+	}[r]
+}
+
+// input is one column the law reads.
+type input struct {
+	name  string
+	words bool
+}
+
+func inputsOf(q Question) []input {
+	in := make([]input, len(q.Inputs))
+	for i, n := range q.Inputs {
+		info, _ := ColumnNamed(q.Name, n)
+		in[i] = input{name: n, words: info.Words != ""}
+	}
+	return in
+}
+
+func outputsOf(c Card, question string) []output {
+	names := c.Outputs(question)
+	out := make([]output, len(names))
+	for i, n := range names {
+		out[i] = output{name: n, rule: ruleOf(question, n)}
+		switch n {
+		case "kind", "kind_1", "kind_2", "composition", "composition_1", "composition_2", "outcome":
+			out[i].words = true
+		}
+	}
+	return out
+}
+
+func ruleOf(question, column string) rule {
+	switch {
+	case column == "wait":
+		return wait
+	case column == "log10_dark", column == "log10_temperature", strings.HasPrefix(column, "log10_rate"):
+		return logZero
+	case column == "log10_hazard":
+		return hazard
+	case strings.HasPrefix(column, "chance_"):
+		return chance
+	case strings.HasPrefix(column, "share_"), column == "heat":
+		return share
+	case column == "stop":
+		return yesNo
+	case column == "mass" && question == "mass", column == "radius":
+		return positive
+	case column == "curvature", column == "log10_date":
+		return finite
+	}
+	return atLeast0
+}
