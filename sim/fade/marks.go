@@ -50,9 +50,9 @@ func (s *Scratch) Find(entries, exits []float64) Marks {
 	switch {
 	case in.n == 0:
 		return m
-	case out.n == 0 || in.last < out.first:
+	case out.n == 0 || in.last < out.first && out.first > 0:
 		// Everybody is in before the first leaves: marks are order
-		// statistics of the exits.
+		// statistics of the exits. (With negative dates: see below, slower.)
 		m.Peak, m.PeakAt = in.n, in.last
 		m.Half, m.Hundredth = s.orderStatistics(exits, out, in.n-in.n/2, in.n-in.n/100)
 	default:
@@ -75,16 +75,25 @@ type extent struct {
 
 func scan(dates []float64) extent {
 	e := extent{n: len(dates), first: inf, last: -inf, lastIndex: -1}
+	// first <= date < last is one comparison of bits, if first > 0.
+	low, span := uint64(0), uint64(0)
 	for i, v := range dates {
+		if math.Float64bits(v)-low < span {
+			continue
+		}
 		if v > math.MaxFloat64 {
 			e.n--
 			continue
 		}
 		if v < e.first {
-			e.first = v
+			e.first, low, span = v, 0, 0
 		}
 		if v >= e.last {
 			e.last, e.lastIndex = v, i
+		}
+		if e.first > 0 {
+			low = math.Float64bits(e.first)
+			span = math.Float64bits(e.last) - low
 		}
 	}
 	return e

@@ -1,62 +1,51 @@
 package fade
 
 import (
+	"math"
 	"math/bits"
 	"slices"
 )
 
-// Bins hold eight dates on average; more of them would leave the cache.
-const (
-	minBins = 64
-	maxBins = 1 << 15
-)
-
-// grid divides the keys low to low + span into bins of 2^shift keys.
+// grid divides the keys from low up into bins of 2^shift keys.
 type grid struct {
-	low, span uint64
-	shift     uint
-	bins      int
+	low   uint64
+	shift uint
+	bins  int
 }
 
-// newGrid covers first..last with about n/8 bins.
-func newGrid(first, last float64, n int) grid {
-	g := grid{low: key(first), span: key(last) - key(first), bins: minBins}
-	for g.bins < maxBins && g.bins < n/8 {
-		g.bins *= 2
-	}
-	lg := bits.Len(uint(g.bins)) - 1
-	g.shift = uint(max(bits.Len64(g.span), lg) - lg)
-	return g
+// newGrid covers first..last with a bin for every eight of n dates, but with
+// no more than most, a power of two: the bins should stay in the cache.
+func newGrid(first, last float64, n, most int) grid {
+	lg := min(max(bits.Len(uint(n/8)), 6), bits.Len(uint(most))-1)
+	span := bits.Len64(key(last) - key(first))
+	return grid{low: key(first), shift: uint(max(span, lg) - lg), bins: 1 << lg}
 }
 
-// beyond is the bin of dates that are not on the grid.
-const beyond = ^uint64(0)
+// of returns the bin of a date not before the first. A date beyond the last,
+// such as +Inf, is in the last bin or in none.
+func (g grid) of(date float64) uint64 { return (key(date) - g.low) >> (g.shift & 63) }
 
-// of returns the bin of a date.
-func (g grid) of(date float64) uint64 {
-	k := key(date) - g.low
-	if k > g.span {
-		return beyond
-	}
-	return k >> (g.shift & 63)
+// ofPositive is of, quicker, for dates > 0.
+func (g grid) ofPositive(date float64) uint64 {
+	return (math.Float64bits(date) - (g.low ^ 1<<63)) >> (g.shift & 63)
 }
 
-// orderStatistics returns the j-th and the k-th smallest date (from 1), +Inf
-// if there are fewer finite ones: a histogram of the leading bits, and a sort
-// of the bins they lie in.
+// orderStatistics returns the j-th and the k-th smallest of dates > 0 (from
+// 1, j <= k), +Inf if there are fewer finite ones: a histogram of the leading
+// bits, and a sort of the bins they lie in.
 func (s *Scratch) orderStatistics(dates []float64, e extent, j, k int) (jth, kth float64) {
 	jth, kth = inf, inf
 	if j > e.n { // then k > e.n too
 		return jth, kth
 	}
-	g := newGrid(e.first, e.last, e.n)
+	g := newGrid(e.first, e.last, e.n, 1<<12)
 	bins := s.clearBins(g.bins)
 	for _, v := range dates {
-		if b := g.of(v); b < uint64(len(bins)) {
+		if b := g.ofPositive(v); b < uint64(len(bins)) {
 			bins[b].out++
 		}
 	}
-	binJ, binK := beyond-1, beyond-1
+	binJ, binK := ^uint64(0), ^uint64(0)
 	var sizeJ, sizeK int
 	for b, before := 0, 0; b < len(bins); b++ {
 		n := int(bins[b].out)
@@ -74,7 +63,7 @@ func (s *Scratch) orderStatistics(dates []float64, e extent, j, k int) (jth, kth
 	s.keys = grow(s.keys, sizeJ+sizeK)
 	inJ, inK := s.keys[:0:sizeJ], s.keys[sizeJ:sizeJ:sizeJ+sizeK]
 	for _, v := range dates {
-		b := g.of(v)
+		b := g.ofPositive(v)
 		if b == binJ {
 			inJ = append(inJ, key(v))
 		}

@@ -1,5 +1,7 @@
 package fade
 
+import "math"
+
 // bin counts the entries and exits whose dates share their leading bits.
 type bin struct{ in, out uint32 }
 
@@ -22,15 +24,15 @@ func (r *run) most() int { return r.before + r.in }
 // all its entries. So only those bins are looked into that may hold the peak
 // or the last fall through a half or a hundredth of it.
 func (s *Scratch) search(m *Marks, entries, exits []float64, in, out extent) {
-	g := newGrid(min(in.first, out.first), max(in.last, out.last), in.n+out.n)
+	g := newGrid(min(in.first, out.first), max(in.last, out.last), in.n+out.n, 1<<15)
 	bins := s.clearBins(g.bins)
 	for _, v := range entries {
-		if b := g.of(v); b < uint64(len(bins)) {
+		if b := g.of(v); v <= math.MaxFloat64 && b < uint64(len(bins)) {
 			bins[b].in++
 		}
 	}
 	for _, v := range exits {
-		if b := g.of(v); b < uint64(len(bins)) {
+		if b := g.of(v); v <= math.MaxFloat64 && b < uint64(len(bins)) {
 			bins[b].out++
 		}
 	}
@@ -116,7 +118,7 @@ func (s *Scratch) gather(g grid, entries, exits []float64) {
 	for side, dates := range [2][]float64{entries, exits} {
 		for _, v := range dates {
 			b := g.of(v)
-			if b >= uint64(len(s.slot)) || s.slot[b] < 0 {
+			if v > math.MaxFloat64 || b >= uint64(len(s.slot)) || s.slot[b] < 0 {
 				continue
 			}
 			r := &s.runs[s.slot[b]]
