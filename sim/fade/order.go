@@ -21,15 +21,6 @@ func newGrid(first, last float64, n, most int) grid {
 	return grid{low: key(first), shift: uint(max(span, lg) - lg), bins: 1 << lg}
 }
 
-// of returns the bin of a date not before the first. A date beyond the last,
-// such as +Inf, is in the last bin or in none.
-func (g grid) of(date float64) uint64 { return (key(date) - g.low) >> (g.shift & 63) }
-
-// ofPositive is of, quicker, for dates > 0.
-func (g grid) ofPositive(date float64) uint64 {
-	return (math.Float64bits(date) - (g.low ^ 1<<63)) >> (g.shift & 63)
-}
-
 // orderStatistics returns the j-th and the k-th smallest of dates > 0 (from
 // 1, j <= k), +Inf if there are fewer finite ones: a histogram of the leading
 // bits, and a sort of the bins they lie in.
@@ -40,44 +31,61 @@ func (s *Scratch) orderStatistics(dates []float64, e extent, j, k int) (jth, kth
 	}
 	g := newGrid(e.first, e.last, e.n, 1<<12)
 	bins := s.clearBins(g.bins)
-	for _, v := range dates {
-		if b := g.ofPositive(v); b < uint64(len(bins)) {
-			bins[b].out++
-		}
-	}
+	g.countPositive(bins, dates)
 	binJ, binK := ^uint64(0), ^uint64(0)
 	var sizeJ, sizeK int
 	for b, before := 0, 0; b < len(bins); b++ {
-		n := int(bins[b].out)
+		n := int(bins[b])
 		if before < j && j <= before+n {
 			binJ, sizeJ = uint64(b), n
 			j -= before
 		}
 		if before < k && k <= before+n {
-			binK, sizeK = uint64(b), n
 			k -= before
+			if binK = uint64(b); binK != binJ {
+				sizeK = n
+			}
 			break
 		}
 		before += n
 	}
 	s.keys = grow(s.keys, sizeJ+sizeK)
-	inJ, inK := s.keys[:0:sizeJ], s.keys[sizeJ:sizeJ:sizeJ+sizeK]
-	for _, v := range dates {
-		b := g.ofPositive(v)
-		if b == binJ {
-			inJ = append(inJ, key(v))
-		}
-		if b == binK {
-			inK = append(inK, key(v))
-		}
-	}
+	inJ, inK := s.keys[:sizeJ], s.keys[sizeJ:]
+	g.collect(dates, binJ, binK, inJ, inK)
 	s.sort(inJ)
 	jth = date(inJ[j-1])
-	if sizeK > 0 {
+	switch {
+	case binK == binJ:
+		kth = date(inJ[k-1])
+	case sizeK > 0:
 		s.sort(inK)
 		kth = date(inK[k-1])
 	}
 	return jth, kth
+}
+
+// countPositive counts dates > 0. A date beyond the last, such as +Inf, is in
+// the last bin or in none.
+func (g grid) countPositive(bins []bin, dates []float64) {
+	low, shift := g.low^1<<63, g.shift
+	for _, v := range dates {
+		if b := (math.Float64bits(v) - low) >> (shift & 63); b < uint64(len(bins)) {
+			bins[b]++
+		}
+	}
+}
+
+// collect copies the keys of two bins of dates > 0.
+func (g grid) collect(dates []float64, binJ, binK uint64, inJ, inK []uint64) {
+	low, shift := g.low^1<<63, g.shift
+	for _, v := range dates {
+		b := (math.Float64bits(v) - low) >> (shift & 63)
+		if b == binJ {
+			inJ[0], inJ = key(v), inJ[1:]
+		} else if b == binK {
+			inK[0], inK = key(v), inK[1:]
+		}
+	}
 }
 
 // smallSort is the length up to which a comparison sort is quicker.

@@ -2,8 +2,12 @@ package fade
 
 import "math"
 
-// bin counts the entries and exits whose dates share their leading bits.
-type bin struct{ in, out uint32 }
+// bin counts the dates that share their leading bits: entries in its lower
+// half, exits in its upper half.
+type bin uint64
+
+func (b bin) in() int  { return int(uint32(b)) }
+func (b bin) out() int { return int(b >> 32) }
 
 // run is a bin that is looked into: its dates lie in keys[at:], entries
 // first, then exits.
@@ -26,16 +30,8 @@ func (r *run) most() int { return r.before + r.in }
 func (s *Scratch) search(m *Marks, entries, exits []float64, in, out extent) {
 	g := newGrid(min(in.first, out.first), max(in.last, out.last), in.n+out.n, 1<<15)
 	bins := s.clearBins(g.bins)
-	for _, v := range entries {
-		if b := g.of(v); v <= math.MaxFloat64 && b < uint64(len(bins)) {
-			bins[b].in++
-		}
-	}
-	for _, v := range exits {
-		if b := g.of(v); v <= math.MaxFloat64 && b < uint64(len(bins)) {
-			bins[b].out++
-		}
-	}
+	g.count(bins, entries, 1)
+	g.count(bins, exits, 1<<32)
 	low, high := s.peakBounds()
 	if high <= 0 {
 		return
@@ -53,8 +49,8 @@ func (s *Scratch) search(m *Marks, entries, exits []float64, in, out extent) {
 func (s *Scratch) peakBounds() (low, high int) {
 	c := 0
 	for _, b := range s.bins {
-		high = max(high, c+int(b.in))
-		c += int(b.in) - int(b.out)
+		high = max(high, c+b.in())
+		c += b.in() - b.out()
 		low = max(low, c)
 	}
 	return low, high
@@ -71,10 +67,10 @@ func (s *Scratch) chooseRuns(low, high, remaining int) {
 	for i, b := range s.bins {
 		s.slot[i] = -1
 		// A bin that can only equal low, after low was reached, can't matter.
-		if most := c + int(b.in); b.in > 0 && most > 0 && (most > low || most == low && !reached) {
+		if most := c + b.in(); b.in() > 0 && most > 0 && (most > low || most == low && !reached) {
 			s.slot[i] = 0
 		}
-		c += int(b.in) - int(b.out)
+		c += b.in() - b.out()
 		reached = reached || c == low
 	}
 	s.chooseFalls(low/2, high/2, remaining)
@@ -84,12 +80,12 @@ func (s *Scratch) chooseRuns(low, high, remaining int) {
 	for i, b := range s.bins {
 		if s.slot[i] == 0 {
 			s.slot[i] = int32(len(s.runs))
-			r := run{bin: uint64(i), before: c, at: at, in: int(b.in), out: int(b.out)}
+			r := run{bin: uint64(i), before: c, at: at, in: b.in(), out: b.out()}
 			r.fill = [2]int{at, at + r.in}
 			at += r.in + r.out
 			s.runs = append(s.runs, r)
 		}
-		c += int(b.in) - int(b.out)
+		c += b.in() - b.out()
 	}
 	s.keys = grow(s.keys, at)
 }
@@ -103,8 +99,8 @@ func (s *Scratch) chooseFalls(low, high, remaining int) {
 	}
 	for i := len(s.bins) - 1; i >= 0; i-- {
 		b := s.bins[i]
-		c += int(b.out) - int(b.in) // now before it
-		if b.out > 0 && c+int(b.in) > low {
+		c += b.out() - b.in() // now before it
+		if b.out() > 0 && c+b.in() > low {
 			s.slot[i] = 0
 		}
 		if c > high { // whatever the level, the fall is here or later
@@ -113,17 +109,35 @@ func (s *Scratch) chooseFalls(low, high, remaining int) {
 	}
 }
 
+// count adds unit to the bin of each finite date.
+func (g grid) count(bins []bin, dates []float64, unit bin) {
+	low, shift := g.low, g.shift
+	for _, v := range dates {
+		b := (key(v) - low) >> (shift & 63)
+		if b < uint64(len(bins)) && v <= math.MaxFloat64 {
+			bins[b] += unit
+		}
+	}
+}
+
 // gather collects the dates of the chosen bins.
 func (s *Scratch) gather(g grid, entries, exits []float64) {
 	for side, dates := range [2][]float64{entries, exits} {
-		for _, v := range dates {
-			b := g.of(v)
-			if v > math.MaxFloat64 || b >= uint64(len(s.slot)) || s.slot[b] < 0 {
-				continue
-			}
-			r := &s.runs[s.slot[b]]
+		g.choose(s.slot, dates, func(slot int32, v float64) {
+			r := &s.runs[slot]
 			s.keys[r.fill[side]] = key(v)
 			r.fill[side]++
+		})
+	}
+}
+
+// choose yields the dates in bins with a slot.
+func (g grid) choose(slots []int32, dates []float64, yield func(slot int32, v float64)) {
+	low, shift := g.low, g.shift
+	for _, v := range dates {
+		b := (key(v) - low) >> (shift & 63)
+		if b < uint64(len(slots)) && slots[b] >= 0 && v <= math.MaxFloat64 {
+			yield(slots[b], v)
 		}
 	}
 }
