@@ -1,0 +1,144 @@
+package sky
+
+import (
+	"math"
+
+	"wane/sim/num"
+)
+
+// tail continues a piece of sky from s on with constant eps:
+//
+//	1/H = 1/H_s + eps (t - t_s),  a ~ H^(-1/eps);  a ~ exp(H t) for eps = 0
+//
+// For eps < 0 it ends in a rip, when 1/H is zero.
+type tail struct {
+	s, x, logH, eps float64
+	logK            [4]float64 // log10 K0..K3, in yr^1..yr^4
+	logEta          float64
+	still           bool // H t << 1: space has come to rest for a while
+}
+
+// powers returns c0..c2 with K_j = c_j / H^(j+1) when eps is constant.
+func powers(eps float64) (c0, c1, c2 float64) {
+	c0 = 1 / (3 + eps)
+	c1 = c0 / (2 + 2*eps)
+	return c0, c1, 2 * c1 / (1 + 3*eps)
+}
+
+// turned returns log10 of H_s (t - t_s).
+func (t *tail) turned(s float64) float64 {
+	if t.logH == zero {
+		return zero
+	}
+	return num.Sub10(s, t.s) + t.logH
+}
+
+// grown returns x - x_s; +Inf beyond the range of numbers and after a rip.
+func (t *tail) grown(s float64) float64 {
+	u := t.turned(s)
+	if u == zero {
+		return 0
+	}
+	if t.eps == 0 {
+		return num.Exp10(u)
+	}
+	v := u + num.Log10(math.Abs(t.eps))
+	if t.eps < 0 {
+		if v >= 0 {
+			return inf
+		}
+		return num.Log1p(-num.Exp10(v)) / t.eps
+	}
+	if v > 20 {
+		return v * num.Ln10 / t.eps
+	}
+	return num.Log1p(num.Exp10(v)) / t.eps
+}
+
+// rip returns log10 of since at which space tears apart; +Inf if it does not.
+func (t *tail) rip() float64 {
+	if t.eps >= 0 {
+		return inf
+	}
+	return num.Add10(t.s, -t.logH-num.Log10(-t.eps))
+}
+
+func (t *tail) lnA(s float64) float64 { return t.x + t.grown(s) }
+
+func (t *tail) hubble(s float64) float64 {
+	if t.eps == 0 {
+		return t.logH
+	}
+	return t.logH - t.eps*t.grown(s)/num.Ln10
+}
+
+// fourVolume returns log10 K3.
+func (t *tail) fourVolume(s float64) float64 {
+	k3 := t.logK[3]
+	if t.eps < 0 { // what the last moments add is next to nothing
+		return num.Add10(k3, num.Log10(3)+t.logK[2]+num.Sub10(math.Min(s, t.rip()), t.s))
+	}
+	from := t.s
+	if t.still {
+		// Space at rest until 1/H has passed, then the power law. The junction
+		// is monotone; log10 K3 is up to 0.5 off around it.
+		d := math.Min(num.Sub10(s, t.s), -t.logH)
+		k3 = num.Add10(k3, num.Log10(3)+t.logK[2]+d)
+		k3 = num.Add10(k3, num.Log10(3)+t.logK[1]+2*d)
+		k3 = num.Add10(num.Add10(k3, t.logK[0]+3*d), 4*d-num.Log10(4))
+		if from = num.Add10(t.s, -t.logH); s <= from {
+			return k3
+		}
+	}
+	_, _, c2 := powers(t.eps)
+	if t.eps == 0 {
+		return num.Add10(k3, num.Log10(3*c2)-3*t.logH+num.Sub10(s, from))
+	}
+	scale := -4*t.logH + num.Log10(3*c2/(4*t.eps))
+	return num.Add10(k3, num.Sub10(scale+4*t.eps*t.grown(s)/num.Ln10, scale+4*t.eps*t.grown(from)/num.Ln10))
+}
+
+// comoving returns log10 of the comoving particle horizon, ly.
+func (t *tail) comoving(s float64) float64 {
+	if t.logH == zero { // at rest for ever
+		return num.Add10(t.logEta, num.Sub10(s, t.s)-t.x/num.Ln10)
+	}
+	unit := -t.x/num.Ln10 - t.logH
+	return num.Add10(t.logEta, unit+t.reach(t.grown(s)))
+}
+
+// reach returns log10 of int e^(-y) (H_s/H) dy from 0 to dx: the comoving way
+// of light in units of its first 1/(a H).
+func (t *tail) reach(dx float64) float64 {
+	e := t.eps - 1
+	switch {
+	case e == 0:
+		return num.Log10(dx)
+	case e < 0:
+		return num.Log10(num.Expm1(e*dx) / e)
+	case e*dx > 40:
+		return (e*dx - num.Log(e)) / num.Ln10
+	}
+	return num.Log10(num.Expm1(e*dx) / e)
+}
+
+// horizon returns log10 of the event horizon in ly, if the piece lasts for
+// ever: c/H / (1 - eps), +Inf without acceleration.
+func (t *tail) horizon(s float64) float64 {
+	if t.eps > 1-margin {
+		return inf
+	}
+	return -t.hubble(s) - num.Log10(1-t.eps)
+}
+
+// chain returns log10 K_j.
+func (t *tail) chain(j int, s float64) float64 {
+	if j == 3 {
+		return t.fourVolume(s)
+	}
+	if t.eps < 0 || t.still {
+		return t.logK[j]
+	}
+	c0, c1, c2 := powers(t.eps)
+	return num.Log10([3]float64{c0, c1, c2}[j]) - float64(j+1)*t.hubble(s)
+}
