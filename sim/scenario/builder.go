@@ -1,0 +1,270 @@
+package scenario
+
+import (
+	"fmt"
+	"math"
+	"sort"
+	"strings"
+
+	"wane/sim/galaxy"
+	"wane/sim/law"
+)
+
+// Defaults of the keys that a scenario may leave out.
+const (
+	defaultRealisations = 20
+	defaultSeed         = 1
+)
+
+// builder applies layers of settings, one on top of the other.
+type builder struct {
+	report
+	reg *law.Registry
+	s   *Scenario
+
+	broken bool             // a file could not be read: what is missing is no fault
+	at     map[string]place // where each setting was last given
+	doubt  map[string]bool  // processes whose law was faulty: their parameters are not judged
+}
+
+func newBuilder(reg *law.Registry, defaults map[string]string) (*builder, error) {
+	b := &builder{reg: reg, at: map[string]place{}, doubt: map[string]bool{}, s: &Scenario{
+		Realisations: defaultRealisations,
+		Seed:         defaultSeed,
+		Until:        math.Inf(1),
+		Laws:         map[string]string{},
+		Parameters:   map[string]map[string]float64{},
+		from:         map[string]string{},
+	}}
+	b.s.Populations = galaxy.Default()
+	for process, name := range defaults {
+		if _, ok := reg.Find(process, name); !ok {
+			return nil, fmt.Errorf("scenario: the default law %s/%s is not registered", process, name)
+		}
+		b.s.Laws[process] = name
+	}
+	return b, nil
+}
+
+// apply applies one file.
+func (b *builder) apply(root *node) {
+	b.unknownKeys(root, "", "base", "title", "question", "until", "realisations", "seed", "galaxy", "laws", "parameters", "populations")
+	for _, key := range []string{"title", "question"} {
+		if n := root.field(key); n != nil && n.form != aText {
+			b.fault(n.at, "%s: got %s, want a text", key, n.form)
+		}
+	}
+	b.run(root)
+	if t := b.table(root, "galaxy"); t != nil {
+		b.unknownKeys(t, "galaxy", galaxyKeys()...)
+		for _, name := range t.names {
+			b.galaxyValue(name, t.fields[name])
+		}
+	}
+	b.laws(b.table(root, "laws"))
+	b.parameters(b.table(root, "parameters"))
+	b.populations(b.table(root, "populations"))
+}
+
+// describe takes title and question from the scenario's own file.
+func (b *builder) describe(leaf *node) {
+	for key, into := range map[string]*string{"title": &b.s.Title, "question": &b.s.Question} {
+		if n := leaf.field(key); n != nil && n.form == aText {
+			*into = n.text
+		}
+	}
+}
+
+// table returns the table at a key, nil if there is none.
+func (b *builder) table(t *node, key string) *node {
+	n := t.field(key)
+	if n != nil && n.form != aTable {
+		b.fault(n.at, "%s: got %s, want a table, [%s]", key, n.form, key)
+		return nil
+	}
+	return n
+}
+
+// unknownKeys reports keys of a table that mean nothing.
+func (b *builder) unknownKeys(t *node, in string, known ...string) {
+	for _, name := range t.names {
+		if contains(known, name) {
+			continue
+		}
+		n := t.fields[name]
+		what := fmt.Sprintf("unknown key %q", name)
+		if n.form == aTable {
+			what = fmt.Sprintf("unknown table %q", name)
+		}
+		if in != "" {
+			what = in + ": " + what
+		}
+		hint := among(name, known)
+		if in == "" && contains(galaxyKeys(), name) {
+			hint = "(it belongs in [galaxy])"
+		} else if _, ok := law.ProcessNamed(name); ok && in == "" {
+			hint = fmt.Sprintf("(a law is chosen in [laws], its parameters are set in [parameters.%s])", name)
+		}
+		b.fault(n.key, "%s %s", what, hint)
+	}
+}
+
+// set remembers where a setting comes from.
+func (b *builder) set(key string, at place) {
+	b.at[key] = at
+	b.s.from[key] = at.file
+}
+
+func (b *builder) run(root *node) {
+	if n := root.field("until"); n != nil {
+		b.until(n)
+	}
+	if n := root.field("realisations"); n != nil {
+		if v, ok := b.whole("realisations", n, 1, maxRealisations); ok {
+			b.s.Realisations = int(v)
+			b.set("realisations", n.at)
+		}
+	}
+	if n := root.field("seed"); n != nil {
+		if v, ok := b.whole("seed", n, 0, math.MaxUint64); ok {
+			b.s.Seed = v
+			b.set("seed", n.at)
+		}
+	}
+}
+
+// until reads the date at which the run ends.
+func (b *builder) until(n *node) {
+	v := math.Inf(1)
+	if n.text != "never" || n.form == aNumber {
+		var ok bool
+		if v, ok = b.quantity("until", n, "yr", true, 0, 1e300); !ok {
+			return
+		}
+	}
+	b.s.Until = v
+	b.set("until", n.at)
+}
+
+// override applies the settings of the command line.
+func (b *builder) override(o Overrides) {
+	laws := newTable(place{file: "--law"})
+	for _, text := range o.Laws {
+		process, name, ok := strings.Cut(text, "=")
+		at := place{file: "--law " + process}
+		if !ok || process == "" || name == "" {
+			b.fault(place{file: "--law " + text}, `want process=name, such as "nucleon-decay=stable"`)
+			continue
+		}
+		laws.put(b, strings.TrimSpace(process), &node{form: aLoose, at: at, key: at, text: strings.TrimSpace(name)})
+	}
+	galaxies, parameters := newTable(place{file: "--set"}), newTable(place{file: "--set"})
+	for _, text := range o.Sets {
+		key, value, ok := strings.Cut(text, "=")
+		process, name, dotted := strings.Cut(strings.TrimSpace(key), ".")
+		at := place{file: "--set " + key}
+		if !ok || !dotted || process == "" || name == "" {
+			b.fault(place{file: "--set " + text}, `want process.parameter=value or galaxy.key=value, such as "galaxy.radius=8kpc"`)
+			continue
+		}
+		n := &node{form: aLoose, at: at, key: at, text: strings.TrimSpace(value)}
+		if process == "galaxy" {
+			galaxies.put(b, name, n)
+			continue
+		}
+		if parameters.field(process) == nil {
+			parameters.add(process, newTable(at))
+		}
+		parameters.field(process).put(b, name, n)
+	}
+	b.unknownKeys(galaxies, "galaxy", galaxyKeys()...)
+	for _, name := range galaxies.names {
+		b.galaxyValue(name, galaxies.fields[name])
+	}
+	b.laws(laws)
+	b.parameters(parameters)
+	b.overrideRun(o)
+}
+
+// put adds a setting of the command line, which may come once.
+func (n *node) put(b *builder, name string, child *node) {
+	if n.field(name) != nil {
+		b.fault(child.at, "given twice")
+		return
+	}
+	n.add(name, child)
+}
+
+func (b *builder) overrideRun(o Overrides) {
+	loose := func(flag, text string) *node {
+		at := place{file: flag}
+		return &node{form: aLoose, at: at, key: at, text: text}
+	}
+	if o.Realisations != 0 {
+		if v, ok := b.whole("realisations", loose("--realisations", fmt.Sprint(o.Realisations)), 1, maxRealisations); ok {
+			b.s.Realisations = int(v)
+			b.set("realisations", place{file: "--realisations"})
+		}
+	}
+	if o.Objects != 0 {
+		b.galaxyValue("sample", loose("--objects", fmt.Sprint(o.Objects)))
+	}
+	if o.Seed != nil {
+		b.s.Seed = *o.Seed
+		b.set("seed", place{file: "--seed"})
+	}
+	if o.Until != "" {
+		b.until(loose("--until", o.Until))
+	}
+}
+
+// finish makes the checks that need everything, and fills in the rest.
+func (b *builder) finish(leaf *node) {
+	top := place{leaf.at.file, 1, 1}
+	b.galaxyWhole(top)
+	if len(b.faults) > 0 {
+		return
+	}
+	b.presets()
+	set, err := b.s.Set(b.reg)
+	if err != nil {
+		for _, line := range strings.Split(err.Error(), "\n") {
+			b.fault(place{file: top.file}, "%s", line)
+		}
+		return
+	}
+	b.impossible(set)
+	b.s.seal(b.reg)
+}
+
+// presets completes the parameters of the laws in use with their presets.
+func (b *builder) presets() {
+	b.s.versions = map[string]string{}
+	for process, name := range b.s.Laws {
+		l, ok := b.reg.Find(process, name)
+		if !ok {
+			continue // none
+		}
+		card := l.Describe()
+		b.s.versions[process] = card.Version
+		values := b.s.Parameters[process]
+		if values == nil && len(card.Parameters) > 0 {
+			values = map[string]float64{}
+			b.s.Parameters[process] = values
+		}
+		for _, p := range card.Parameters {
+			if _, ok := values[p.Name]; !ok {
+				values[p.Name] = p.Preset
+			}
+		}
+	}
+}
+
+func sortedKeys[V any](m map[string]V) []string {
+	keys := make([]string, 0, len(m))
+	for k := range m {
+		keys = append(keys, k)
+	}
+	sort.Strings(keys)
+	return keys
+}
