@@ -1,3 +1,3 @@
-// Package browndwarfcooling holds the laws of process brown-dwarf-cooling: 
+// Package browndwarfcooling holds the laws of process brown-dwarf-cooling:
 // how brown dwarfs cool.
 package browndwarfcooling

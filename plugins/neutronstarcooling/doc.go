@@ -1,3 +1,3 @@
-// Package neutronstarcooling holds the laws of process neutron-star-cooling: 
+// Package neutronstarcooling holds the laws of process neutron-star-cooling:
 // how neutron stars cool.
 package neutronstarcooling

@@ -1,3 +1,3 @@
-// Package whitedwarfcooling holds the laws of process white-dwarf-cooling: 
+// Package whitedwarfcooling holds the laws of process white-dwarf-cooling:
 // how white dwarfs cool.
 package whitedwarfcooling

@@ -1,0 +1,136 @@
+package cooling
+
+import (
+	"math"
+
+	"wane/sim/num"
+	"wane/sim/physics/constant"
+	"wane/sim/physics/structure"
+)
+
+// Ions are what a white dwarf is made of.
+type Ions struct{ Z, A float64 }
+
+// Mixtures. Carbon-oxygen and oxygen-neon are taken as one kind of ion each,
+// and elements heavier than neon are left out: assumptions.
+func HeliumIons() Ions       { return Ions{2, 4} }
+func CarbonOxygenIons() Ions { return Ions{7, 14} }
+func OxygenNeonIons() Ions   { return Ions{9, 18} }
+
+// Envelope holds what a cooling white dwarf's surface and freezing are
+// described by; see the package for the symbols.
+type Envelope struct {
+	Ratio    float64 // r0, at 0.6 solar masses and 8841 km: 600 .. 1010
+	Exponent float64 // q: 1/7 .. 2
+	Freezing float64 // Gamma: 175 .. 230
+	Latent   float64 // heat of freezing an ion over k T_melt: 0.77, or 0 for none
+}
+
+// DefaultEnvelope is the envelope law of [ShapiroTeukolsky1983] carried on to
+// T = 0 without change (assumption), and freezing at Gamma = 175 with a latent
+// heat of 0.77 k T_melt an ion (from memory).
+func DefaultEnvelope() Envelope {
+	return Envelope{Ratio: 1010, Exponent: 1.0 / 7, Freezing: 175, Latent: 0.77}
+}
+
+// Dwarf is a white dwarf as its cooling sees it. It never changes once made.
+type Dwarf struct {
+	mass, radius float64 // solar masses, km
+	ions         Ions
+	exponent     float64
+	ratio        float64 // T_c/T at 5000 K
+	debye        float64 // theta, K
+	melting      float64 // K
+	ionHeat      float64 // 3k for all ions, J/K
+	electronHeat float64 // heat capacity of all electrons over T_c, J/K^2
+	latentHeat   float64 // of all ions over T_melt, J/K
+}
+
+// knee is where the two pieces of the envelope law meet, K.
+const knee = 5000
+
+// densityOverMean is the density that stands for the whole dwarf, over its
+// mean density: assumption, about the mass-weighted mean.
+const densityOverMean = 2.2
+
+// debyeOverPlasma is theta over the ion plasma temperature: assumption, from
+// the mean phonon frequencies of a Coulomb crystal.
+const debyeOverPlasma = 0.45
+
+// latentSpread is the factor in interior temperature, from the melting
+// temperature down, over which a dwarf freezes: from the centre outwards, as
+// the density falls. Assumption; it moves no date below 1000 K.
+const latentSpread = 1.25
+
+// fineStructure is e^2/(4 pi eps0 hbar c). Source: CODATA 2022.
+const fineStructure = 7.2973525643e-3
+
+// NewDwarf returns the dwarf of mass m.
+//
+//	n       = rho/(A m_u), rho = 2.2 x mean density
+//	theta   = 0.45 (hbar/k) sqrt(4 pi n Z^2 e^2/m_ion)
+//	T_melt  = Z^2 e^2/(Gamma a k), a = (3/(4 pi n))^1/3
+//	C_ions  = 3k Debye(theta/T_c) an ion, C_electrons = Z pi^2 k^2 T_c sqrt(1+x^2)/(m_e c^2 x^2), x = p_F/(m_e c)
+//	ratio   = r0 [(R/8841 km)^2 (0.6/M)]^2/7
+//
+// Units: m in solar masses.
+// Domain: 0.001 <= m <= 1.44; radius of [structure.WhiteDwarfRadius].
+// Error: one density for the whole dwarf and one kind of ion: 10 to 20 % in
+// heat.
+// Source: [ShapiroTeukolsky1983], chs. 3 and 4.
+func NewDwarf(m float64, ions Ions, env Envelope) Dwarf {
+	const kB, hbar, c = constant.Boltzmann, constant.HBar, constant.C
+	r := structure.WhiteDwarfRadius(m)
+	d := Dwarf{mass: m, radius: r, ions: ions, exponent: env.Exponent}
+	d.ratio = env.Ratio * num.Pow(r/8841*(r/8841)*0.6/m, 2.0/7)
+	ion := ions.A * constant.AtomicMass
+	n := densityOverMean * structure.MeanDensity(m, r) * 1000 / ion
+	z2e2 := ions.Z * ions.Z * fineStructure * hbar * c
+	d.debye = debyeOverPlasma * hbar / kB * math.Sqrt(4*math.Pi*n*z2e2/ion)
+	a := num.Pow(3/(4*math.Pi*n), 1.0/3)
+	d.melting = z2e2 / (a * kB * env.Freezing)
+	x := hbar * num.Pow(3*math.Pi*math.Pi*n*ions.Z, 1.0/3) / (constant.ElectronMass * c)
+	count := m * constant.Sun / ion
+	d.ionHeat, d.latentHeat = 3*kB*count, env.Latent*kB*count
+	d.electronHeat = count * ions.Z * math.Pi * math.Pi * kB * kB * math.Sqrt(1+x*x) / (constant.ElectronMass * c * c * x * x)
+	return d
+}
+
+// DebyeTemperature returns theta, K.
+func (d Dwarf) DebyeTemperature() float64 { return d.debye }
+
+// MeltingTemperature returns the interior temperature at which Gamma reaches
+// the freezing value, K.
+func (d Dwarf) MeltingTemperature() float64 { return d.melting }
+
+// Interior returns the interior temperature behind an effective temperature,
+// and how it changes: d T_c/d ln T.
+//
+//	T_c/T = r (T/5000)^1/7 above 5000 K, 1 + (r - 1)(T/5000)^q below
+//
+// Units: K.
+// Domain: t > 0.
+// Error: 0.2 to 0.3 dex at 5000 K between envelopes; not known far below.
+// Source: [ShapiroTeukolsky1983], eq. 4.1.11, above the knee; below it an
+// assumption that r0 and q span.
+func (d Dwarf) Interior(t float64) (core, slope float64) {
+	if t > knee {
+		core = t * d.ratio * num.Pow(t/knee, 1.0/7)
+		return core, core * 8 / 7
+	}
+	excess := (d.ratio - 1) * num.Pow(t/knee, d.exponent)
+	return t * (1 + excess), t * (1 + (1+d.exponent)*excess)
+}
+
+// HeatCapacity returns the heat capacity of the whole dwarf, J/K, at interior
+// temperature core, K: ions, electrons, and the heat of freezing, given off
+// smoothly between the melting temperature and 1/1.25 of it.
+func (d Dwarf) HeatCapacity(core float64) float64 {
+	heat := d.ionHeat*Debye(d.debye/core) + d.electronHeat*core
+	const width = 1 - 1/latentSpread
+	u := (1 - core/d.melting) / width
+	if u > 0 && u < 1 { // the integral of 30 u^2 (1-u)^2 is 1
+		heat += d.latentHeat / width * 30 * u * u * (1 - u) * (1 - u)
+	}
+	return heat
+}
