@@ -6,22 +6,16 @@ import (
 	"sort"
 	"strings"
 
-	"wane/cmd/internal/near"
 	"wane/sim/law"
 )
-
-// Parser reads a quantity such as "10Msun" into the given unit; with log10 set
-// the result is its log10, and numbers beyond float64 are allowed.
-type Parser func(text, unit string, log10 bool) (float64, error)
 
 // Inquiry is what is asked, of which law.
 type Inquiry struct {
 	Registry *law.Registry
 	Defaults map[string]string // process to law, for ranges that hang on other laws
-	Parse    Parser
-	ID       string   // process/name
-	Question string   // empty: every question the inputs suffice for
-	Given    []string // key=value
+	ID       string            // process/name
+	Question string            // empty: every question the inputs suffice for
+	Given    []string          // key=value
 }
 
 // Value is one named number or word of an answer.
@@ -108,7 +102,7 @@ func Find(r *law.Registry, id string) (law.Law, error) {
 		c := l.Describe()
 		ids = append(ids, c.Process+"/"+c.Name)
 	}
-	return nil, fmt.Errorf("law %q is not known%s", id, near.Ask(id, ids))
+	return nil, fmt.Errorf("law %q is not known%s", id, Meant(id, ids))
 }
 
 func newKinds(c law.Card) []string {
@@ -151,7 +145,7 @@ func (a *asking) questions() ([]law.Question, error) {
 			names = append(names, q.Name)
 		}
 		return nil, fmt.Errorf("law %s: no question %q (it answers: %s)%s", a.use.ID(), a.Question,
-			strings.Join(names, ", "), near.Ask(a.Question, names))
+			strings.Join(names, ", "), Meant(a.Question, names))
 	}
 	order := map[string]int{"foretell": 1, "live": 1, "die": 1, "heat": 2, "remain": 2, "wear": 3, "expose": 1, "rate": 2, "divert": 3, "meet": 3}
 	out := append([]law.Question(nil), a.use.Card.Questions...)
@@ -241,6 +235,7 @@ func (a *asking) collect(out *Answer, q law.Question, in, answer law.Batch, show
 		shown["out "+c.name] = true
 		out.Outputs = append(out.Outputs, a.value(c, answer.Columns[i]))
 	}
+	a.shining(out, q, answer)
 }
 
 // value reads the first row of a column for people: times stay logarithms,

@@ -43,7 +43,9 @@ func outputColumn(c law.Card, question, raw string) column {
 	case raw == "log10_rate":
 		out.name, out.unit = "mass_rate", "solMass/yr"
 	case strings.HasPrefix(raw, "log10_rate_"):
-		out.unit = "1/yr"
+		out.unit = "yr-1"
+	case raw == "log10_dark":
+		out.name = "dark_energy" // of the critical density today
 	case raw == "heat":
 		out.name = "heat_share"
 	case raw == "radius":

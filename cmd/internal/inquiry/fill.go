@@ -101,13 +101,9 @@ func (a *asking) fillRadius(c column, rows int, s *sweep) ([]float64, bool) {
 	if err != nil || !ok {
 		return nil, false
 	}
-	compositions, ok, err := a.fillWords(column{raw: "composition", list: "composition"}, rows, s)
-	if err != nil || !ok {
-		return nil, false
-	}
 	out := make([]float64, rows)
 	for i := range out {
-		out[i] = radius(kinds[i], mass[i], compositions[i])
+		out[i] = radius(a.kinds[kinds[i]], mass[i])
 	}
 	a.why[c.raw] = "by its structure"
 	return out, true

@@ -7,9 +7,10 @@ import (
 	"strconv"
 	"strings"
 
-	"wane/cmd/internal/near"
 	"wane/sim/law"
 	"wane/sim/num"
+	"wane/sim/scenario"
+	"wane/sim/scenario/quantity"
 )
 
 func power(log10 float64) float64 { return num.Exp10(log10) }
@@ -72,7 +73,7 @@ func (a *asking) read(questions []law.Question, key, text string) error {
 		}
 	}
 	known := a.keys(questions)
-	return fmt.Errorf("%s: unknown (known: %s)%s", key, strings.Join(known, ", "), near.Ask(key, known))
+	return fmt.Errorf("%s: unknown (known: %s)%s", key, strings.Join(known, ", "), Meant(key, known))
 }
 
 // keys is everything that may be given.
@@ -110,35 +111,20 @@ func (a *asking) readParameter(p law.Parameter, key, text string) error {
 			}
 		}
 		if !found {
-			return fmt.Errorf("%s: %q is none of %s%s", key, text, strings.Join(p.Words, ", "), near.Ask(text, p.Words))
+			return fmt.Errorf("%s: %q is none of %s%s", key, text, strings.Join(p.Words, ", "), Meant(text, p.Words))
 		}
 	} else {
 		var err error
-		if number, err = a.Parse(text, p.Unit, p.Log10); err != nil {
+		if number, err = quantity.ParseFor(text, p.Unit, p.Log10); err != nil {
 			return fmt.Errorf("%s: %w", key, err)
 		}
 	}
 	if err := a.use.Set(p.Name, number); err != nil {
-		return fmt.Errorf("%s: %s is outside %s", key, text, Range(p))
+		return fmt.Errorf("%s: %s is outside %s", key, text, scenario.Range(p))
 	}
 	v.Number = number
 	a.set = append(a.set, v)
 	return nil
-}
-
-// Range is the allowed range of a parameter in words.
-func Range(p law.Parameter) string {
-	if len(p.Words) > 0 {
-		return strings.Join(p.Words, ", ")
-	}
-	format := func(v float64) string {
-		s := strconv.FormatFloat(v, 'g', 6, 64)
-		if p.Log10 && !math.IsInf(v, 0) {
-			s = "10^" + s
-		}
-		return strings.ReplaceAll(s, "e+", "e")
-	}
-	return strings.TrimSpace(format(p.Low) + " .. " + format(p.High) + " " + p.Unit)
 }
 
 func (a *asking) readInput(question string, c column, key, text string) error {
@@ -160,14 +146,14 @@ func (a *asking) readInput(question string, c column, key, text string) error {
 // number reads the value of a column. The name of the catalogue itself,
 // log10_age, takes the bare logarithm.
 func (a *asking) number(c column, key, text string) (float64, error) {
-	if c.log10 && canonical(key) == c.raw {
+	if c.log10 && strings.HasPrefix(c.raw, "log10_") && canonical(key) == c.raw {
 		v, err := strconv.ParseFloat(text, 64)
 		if err != nil || math.IsNaN(v) {
 			return 0, fmt.Errorf("%s: %q: want a number, the log10 of %s", key, text, c.unit)
 		}
 		return v, nil
 	}
-	v, err := a.Parse(text, c.unit, c.log10)
+	v, err := quantity.ParseFor(text, c.unit, c.log10)
 	if err != nil {
 		return 0, fmt.Errorf("%s: %w", key, err)
 	}
@@ -182,7 +168,7 @@ func (a *asking) readWord(c column, text string) error {
 			return nil
 		}
 	}
-	return fmt.Errorf("%s: %q is none of %s%s", c.name, text, strings.Join(list, ", "), near.Ask(text, list))
+	return fmt.Errorf("%s: %q is none of %s%s", c.name, text, strings.Join(list, ", "), Meant(text, list))
 }
 
 func (a *asking) readTarget(question string, c column, key, text string) error {
@@ -195,4 +181,21 @@ func (a *asking) readTarget(question string, c column, key, text string) error {
 	}
 	a.target = &target{question: question, column: c, value: v, key: key}
 	return nil
+}
+
+// Meant is a question to append to a message about an unknown word, or
+// nothing when no known word is near.
+func Meant(word string, known []string) string {
+	if n := scenario.Nearest(canonical(word), known); n != "" {
+		return fmt.Sprintf(" (did you mean %q?)", n)
+	}
+	if n := scenario.Nearest(word, known); n != "" {
+		return fmt.Sprintf(" (did you mean %q?)", n)
+	}
+	for _, k := range known {
+		if len(word) >= 3 && strings.HasPrefix(canonical(k), canonical(word)) {
+			return fmt.Sprintf(" (did you mean %q?)", k)
+		}
+	}
+	return ""
 }

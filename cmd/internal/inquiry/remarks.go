@@ -1,11 +1,56 @@
 package inquiry
 
 import (
+	"math"
+
 	"wane/sim/law"
+	"wane/sim/num"
+	"wane/sim/physics/constant"
+	"wane/sim/physics/structure"
 )
 
-// radius of an object, km; 0 where it is not known.
-func radius(kind uint8, mass float64, composition uint8) float64 { return 0 }
+// radius of an object, km; 0 where the kind has none.
+func radius(kind string, mass float64) float64 {
+	switch kind {
+	case "star":
+		return structure.MainSequenceRadius(mass)
+	case "brown-dwarf":
+		return structure.BrownDwarfRadius(mass)
+	case "white-dwarf":
+		return structure.WhiteDwarfRadius(mass)
+	case "neutron-star":
+		return structure.NeutronStarRadius(mass)
+	case "black-hole", "central-hole":
+		return structure.HoleRadius(mass)
+	case "relic":
+		return structure.WhiteDwarfRadiusOf(mass, ironPerElectron)
+	}
+	return 0
+}
+
+// ironPerElectron is the nucleons per electron of iron, 56/26.
+const ironPerElectron = 56. / 26
+
+// luminosity of a sphere of r km at a temperature of log10 K, log10 of solar
+// luminosities: 4 pi R^2 sigma T^4 (Stefan and Boltzmann).
+func luminosity(r, log10T float64) float64 {
+	metres := r * 1000
+	return num.Log10(4*math.Pi*metres*metres*constant.StefanBoltzmann/constant.SunL) + 4*log10T
+}
+
+// shining adds the luminosity to an answer of question shine.
+func (a *asking) shining(out *Answer, q law.Question, answer law.Batch) {
+	if q.Name != "shine" {
+		return
+	}
+	r, ok := a.fillRadius(column{raw: "radius"}, 1, nil)
+	if !ok || !(r[0] > 0) {
+		return
+	}
+	l := luminosity(r[0], answer.Columns[0].Values[0])
+	out.Outputs = append(out.Outputs, a.value(column{name: "luminosity", unit: "solLum", log10: true}, law.Column{Values: []float64{l}}))
+	delete(a.why, "radius")
+}
 
 // remarks adds what the roles leave unsaid.
 func (a *asking) remarks(out *Answer) {

@@ -31,7 +31,7 @@ func (a *asking) turnRound() error {
 		return err
 	}
 	a.numbers[unknown.raw] = given{value: x}
-	a.why[unknown.raw] = "found: it leads to " + a.target.key + " as given"
+	a.why[unknown.raw] = "found from " + a.target.key
 	return nil
 }
 

@@ -38,14 +38,14 @@ func (p *page) closing(s *ensemble.Summary) {
 		for i, l := range s.Laws {
 			names[i] = l.Process + "/" + l.Name
 		}
-		for _, l := range wrap(strings.Join(names, ", "), Width-4) {
+		for _, l := range Wrap(strings.Join(names, ", "), Width-4) {
 			p.line("    " + l)
 		}
 	}
 }
 
 func (p *page) paragraph(text string) {
-	for i, l := range wrap(text, Width-2) {
+	for i, l := range Wrap(text, Width-2) {
 		if i > 0 {
 			l = "  " + l
 		}

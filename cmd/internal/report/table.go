@@ -96,7 +96,7 @@ func (p *page) stacked(head [5]string, rows []row) {
 
 func (p *page) remarks(remarks []string) {
 	for _, remark := range remarks {
-		for i, l := range wrap(remark, Width-6) {
+		for i, l := range Wrap(remark, Width-6) {
 			indent := "    "
 			if i > 0 {
 				indent = "      "

@@ -50,7 +50,7 @@ func (p *page) line(text string) {
 func (p *page) entry(term, text string) {
 	const column = 14
 	first := fmt.Sprintf("%-*s", column, term)
-	for i, l := range wrap(text, Width-column) {
+	for i, l := range Wrap(text, Width-column) {
 		if i > 0 {
 			first = strings.Repeat(" ", column)
 		}
@@ -98,9 +98,9 @@ func grouped(n int64) string {
 	return t
 }
 
-// wrap breaks a text into lines of at most width columns at its blanks. A word
+// Wrap breaks a text into lines of at most width columns at its blanks. A word
 // that is longer stands alone.
-func wrap(text string, width int) []string {
+func Wrap(text string, width int) []string {
 	var lines []string
 	line := ""
 	for _, word := range strings.Fields(text) {

@@ -1,0 +1,92 @@
+// Package cli is the command line of Wane: one file per command.
+//
+// Everything that touches files, terminals, signals and the wall clock is
+// here. What a command answers goes to standard output and is valid JSON with
+// --json; warnings, progress and faults go to standard error.
+package cli
+
+import (
+	"context"
+	"errors"
+	"fmt"
+	"io"
+	"io/fs"
+	"os"
+	"os/signal"
+	"strings"
+	"syscall"
+
+	"github.com/spf13/cobra"
+
+	"wane/sim/law"
+)
+
+// Program is what the commands work with. Its fields let a test put other
+// laws or streams in their place.
+type Program struct {
+	Out, Err io.Writer
+	Builtin  func() (*law.Registry, error)
+	Defaults func() map[string]string // process to law
+	Embedded fs.FS                    // scenarios that need no file
+	Run      RunFunc
+}
+
+// Main runs the command line and returns the exit code. The first interrupt
+// ends a run at the next finished realisation; the second one kills.
+func (p *Program) Main(args []string) int {
+	ctx, stop := signal.NotifyContext(context.Background(), os.Interrupt, syscall.SIGTERM)
+	defer stop()
+	go func() {
+		<-ctx.Done()
+		stop()
+	}()
+	root := p.root()
+	root.SetArgs(args)
+	root.SetOut(p.Out)
+	root.SetErr(p.Err)
+	cmd, err := root.ExecuteContextC(ctx)
+	if err == nil {
+		return ExitOK
+	}
+	var failure *fault
+	if !errors.As(err, &failure) {
+		failure = &fault{code: ExitBadInput, err: err}
+		if !strings.Contains(err.Error(), "\n") {
+			defer fmt.Fprintf(p.Err, "see: %s --help\n", cmd.CommandPath())
+		}
+	}
+	if failure.err != nil {
+		fmt.Fprintln(p.Err, "wane: "+strings.ReplaceAll(failure.Error(), "\n", "\nwane: "))
+	}
+	return failure.code
+}
+
+// settings are the flags that every command has.
+type settings struct {
+	json, quiet bool
+}
+
+func (p *Program) root() *cobra.Command {
+	s := &settings{}
+	root := &cobra.Command{
+		Use:   "wane",
+		Short: "When the stars, dead suns and black holes of a galaxy fade, and what takes them",
+		Long: "Wane works out when each population of a galaxy fades in the far future: its stars, brown and white\n" +
+			"dwarfs, neutron stars and black holes. It plays many random histories under exchangeable laws and\n" +
+			"reports when half, all but a hundredth, and the last of each are gone, with error bars and the culprit.",
+		Example: "  wane run lantern-reach\n" +
+			"  wane run lantern-reach --law nucleon-decay=stable --out stable\n" +
+			"  wane laws evaporation/page\n" +
+			"  wane ask evaporation/page mass=10Msun",
+		SilenceErrors:     true,
+		SilenceUsage:      true,
+		Args:              cobra.NoArgs,
+		RunE:              func(c *cobra.Command, _ []string) error { return c.Help() },
+		DisableAutoGenTag: true,
+	}
+	root.PersistentFlags().BoolVar(&s.json, "json", false, "print JSON instead of text")
+	root.PersistentFlags().BoolVarP(&s.quiet, "quiet", "q", false, "print the answer only: no progress, no warnings, no remarks")
+	root.SetHelpTemplate(root.HelpTemplate() + exitCodes)
+	root.AddCommand(p.run(s), p.check(s), p.scenarios(s), p.laws(s), p.ask(s), p.schema(s), p.version(s))
+	return root
+}

@@ -1,0 +1,180 @@
+package cli
+
+import (
+	"bytes"
+	"context"
+	"errors"
+	"fmt"
+
+	"github.com/spf13/cobra"
+
+	"wane/cmd/internal/report"
+	"wane/sim/ensemble"
+	"wane/sim/law"
+	"wane/sim/scenario"
+)
+
+// RunFunc runs a scenario on so many workers (0: as many as the machine has)
+// and tells how many realisations are done. When ctx ends it returns what is
+// finished, marked as interrupted.
+type RunFunc func(ctx context.Context, sc *scenario.Scenario, reg *law.Registry, workers int, progress func(done, total int)) (*ensemble.Summary, error)
+
+// runFlags are the flags of run as they are given.
+type runFlags struct {
+	laws, sets   []string
+	realisations int
+	objects      int64
+	seed         uint64
+	workers      int
+	until        string
+	out          string
+	force        bool
+}
+
+func (p *Program) run(s *settings) *cobra.Command {
+	var f runFlags
+	c := &cobra.Command{
+		Use:   "run scenario",
+		Short: "Run a scenario and print when each population fades",
+		Long: `Run a scenario, a .toml file or the name of an embedded one ('wane scenarios'), and print the fade
+summary: for each population its peak, and the dates from which it never again exceeds half and a
+hundredth of that, and at which its last member goes; what took its members; and which law each last
+date hangs on.
+
+The same scenario, seed and laws give the same answer for any number of workers. An interrupt ends
+the run: what is finished is reported, labelled as such, and the exit code is 130.
+
+With --out DIR, the folder holds summary.json, its JSON Schema, summary.txt and manifest.json (version,
+resolved scenario and digest, laws with versions and parameters, seed, Go version, architecture), whole
+or not at all.`,
+		Example: "  wane run lantern-reach\n" +
+			"  wane run scenarios/lantern-reach.toml --realisations 100 --seed 7\n" +
+			"  wane run lantern-reach --law evaporation=black-body\n" +
+			"  wane run lantern-reach --set nucleon-decay.lifetime=1e35yr --set galaxy.radius=8kpc\n" +
+			"  wane run little-lamp --until 1e20yr --out little --force\n" +
+			"  wane run lantern-reach --json | jq '.populations[] | {name, last: .marks.last}'",
+		Args: func(_ *cobra.Command, args []string) error {
+			if len(args) != 1 {
+				return fmt.Errorf("run: want one scenario, not %d; 'wane scenarios' lists those that are built in", len(args))
+			}
+			return nil
+		},
+		ValidArgsFunction: p.completeScenario,
+		RunE: func(c *cobra.Command, args []string) error {
+			o, err := f.overrides(c)
+			if err != nil {
+				return err
+			}
+			return p.runScenario(c.Context(), s, args[0], o, &f)
+		},
+	}
+	flags := c.Flags()
+	flags.StringArrayVar(&f.laws, "law", nil, "use this law, as process=name (may be repeated)")
+	flags.StringArrayVar(&f.sets, "set", nil, "set a parameter, as process.parameter=value or galaxy.radius=8kpc (may be repeated)")
+	flags.IntVar(&f.realisations, "realisations", 0, "random histories (default: the scenario's)")
+	flags.Int64Var(&f.objects, "objects", 0, "objects to simulate (default: the scenario's)")
+	flags.Uint64Var(&f.seed, "seed", 0, "seed of all draws (default: the scenario's)")
+	flags.IntVar(&f.workers, "workers", 0, "realisations computed at a time (default: one a core)")
+	flags.StringVar(&f.until, "until", "", "end at this date, such as 1e20yr, or never (default: the scenario's)")
+	flags.StringVar(&f.out, "out", "", "write the answer to this new folder")
+	flags.BoolVar(&f.force, "force", false, "let --out replace an earlier run's folder")
+	return c
+}
+
+// overrides turns the flags into settings, and reports all faults together.
+func (f *runFlags) overrides(c *cobra.Command) (scenario.Overrides, error) {
+	var faults []error
+	bad := func(format string, a ...any) { faults = append(faults, fmt.Errorf(format, a...)) }
+	given := c.Flags().Changed
+	if given("realisations") && f.realisations < 1 {
+		bad("--realisations %d: want at least 1", f.realisations)
+	}
+	if given("objects") && f.objects < 1 {
+		bad("--objects %d: want at least 1", f.objects)
+	}
+	if given("workers") && f.workers < 1 {
+		bad("--workers %d: want at least 1", f.workers)
+	}
+	if given("out") && f.out == "" {
+		bad("--out: want a folder")
+	}
+	if f.force && f.out == "" {
+		bad("--force: it has no effect without --out")
+	}
+	if given("until") && f.until == "" {
+		bad("--until: want a date such as 1e20yr, or never")
+	}
+	o := scenario.Overrides{Laws: f.laws, Sets: f.sets, Realisations: f.realisations, Objects: f.objects, Until: f.until}
+	if given("seed") {
+		o.Seed = &f.seed
+	}
+	return o, errors.Join(faults...)
+}
+
+func (p *Program) runScenario(ctx context.Context, s *settings, which string, o scenario.Overrides, f *runFlags) error {
+	sc, registry, err := p.load(s, which, o)
+	if err != nil {
+		return err
+	}
+	if f.out != "" {
+		if err := mayWrite(f.out, f.force); err != nil {
+			return bad(err)
+		}
+	}
+	bar := newBar(p.Err, s.quiet)
+	summary, err := p.Run(ctx, sc, registry, f.workers, bar.set)
+	bar.close()
+	if err != nil {
+		if ctx.Err() != nil && errors.Is(err, ctx.Err()) {
+			return &fault{ExitInterrupted, errors.New("interrupted before the first realisation was finished")}
+		}
+		return failed(err)
+	}
+	if summary.Interrupted && summary.Realisations == 0 {
+		return &fault{ExitInterrupted, errors.New("interrupted before the first realisation was finished")}
+	}
+	if err := p.printSummary(s, summary); err != nil {
+		return failed(err)
+	}
+	if f.out != "" {
+		files, err := runFiles(sc, registry, summary)
+		if err == nil {
+			err = writeFolder(f.out, f.force, files)
+		}
+		if err != nil {
+			return failed(err)
+		}
+		if !s.quiet {
+			fmt.Fprintln(p.Err, "wane: written to "+f.out)
+		}
+	}
+	if summary.Interrupted {
+		return &fault{ExitInterrupted, fmt.Errorf("interrupted: %d of %d realisations were finished",
+			summary.Realisations, summary.Requested)}
+	}
+	return nil
+}
+
+func (p *Program) printSummary(s *settings, summary *ensemble.Summary) error {
+	if s.json {
+		return report.JSON(p.Out, summary)
+	}
+	return report.Text(p.Out, summary, styleFor(p.Out))
+}
+
+// runFiles is what --out writes.
+func runFiles(sc *scenario.Scenario, registry *law.Registry, summary *ensemble.Summary) (map[string][]byte, error) {
+	var text, data, manifest bytes.Buffer
+	if err := report.Text(&text, summary, report.Style{}); err != nil {
+		return nil, err
+	}
+	if err := report.JSON(&data, summary); err != nil {
+		return nil, err
+	}
+	if err := printJSON(&manifest, manifestOf(sc, registry, summary)); err != nil {
+		return nil, err
+	}
+	return map[string][]byte{
+		"summary.txt": text.Bytes(), "summary.json": data.Bytes(), "summary.schema.json": report.Schema, manifestName: manifest.Bytes(),
+	}, nil
+}
