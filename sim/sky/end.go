@@ -67,11 +67,12 @@ func (r rates) ruling(g float64) (eps float64, ok bool) {
 	return 0, false
 }
 
-// agrees asks the law along the tail, as far as ln a is a number.
+// agrees asks the law along the tail, as far as ln a is a number, on points
+// close enough not to step over a spell of dark energy.
 func (m *march) agrees(t *tail) (bool, error) {
 	var points []where
 	var at []float64
-	for d := 0.125; t.s+d <= tailFarthest; d *= 2 {
+	for d := 0.125; t.s+d <= tailFarthest; d += math.Max(0.125, d/16) {
 		s := t.s + d
 		if rip := t.rip(); rip < inf {
 			s = num.Add10(t.s, num.Sub10(rip, t.s)+num.Log10(-num.Expm1(-d)))
