@@ -43,9 +43,11 @@ func (p *Program) completeAsk(c *cobra.Command, args []string, begun string) ([]
 		return nil, quiet
 	}
 	var out []string
+	seen := map[string]bool{}
 	add := func(name, doc string) {
 		key := strings.TrimPrefix(name, "log10_") + "="
-		if strings.HasPrefix(key, begun) {
+		if strings.HasPrefix(key, begun) && !seen[key] {
+			seen[key] = true
 			out = append(out, key+"\t"+doc)
 		}
 	}

@@ -41,7 +41,10 @@ func outputColumn(c law.Card, question, raw string) column {
 	case raw == "log10_temperature":
 		out.unit = "K"
 	case raw == "log10_rate":
-		out.name, out.unit = "mass_rate", "solMass/yr"
+		out.name, out.unit = "loss_rate", "solMass/yr"
+		if strings.HasPrefix(c.Wears, "gain") {
+			out.name = "gain_rate"
+		}
 	case strings.HasPrefix(raw, "log10_rate_"):
 		out.unit = "yr-1"
 	case raw == "log10_dark":

@@ -3,6 +3,7 @@ package report
 import (
 	"fmt"
 	"math"
+	"sort"
 	"strings"
 
 	"wane/sim/ensemble"
@@ -23,7 +24,7 @@ func (p *page) closing(s *ensemble.Summary) {
 	for _, note := range s.Notes {
 		p.paragraph(sentence(note))
 	}
-	p.paragraph(fmt.Sprintf("Of the founded mass every part is accounted for to %s.", closesTo(s.LedgerClosesTo)))
+	p.paragraph(ledger(s))
 	if len(s.Inactive) > 0 {
 		p.line("")
 		p.line(p.style.heading("Inactive"))
@@ -110,6 +111,27 @@ func beyondTelling(s *ensemble.Summary) bool {
 		}
 	}
 	return false
+}
+
+// ledger says where the founded mass is at the end.
+func ledger(s *ensemble.Summary) string {
+	l := s.Ledger
+	closes := "the mass ledger closes to " + closesTo(s.LedgerClosesTo)
+	if !(l.Founded > 0) {
+		return sentence(closes)
+	}
+	places := []struct {
+		name string
+		mass float64
+	}{{"radiated", l.Radiated}, {"gas", l.Gas}, {"adrift", l.Adrift}, {"bound", l.Bound}, {"in the central hole", l.Central}}
+	sort.SliceStable(places, func(i, j int) bool { return places[i].mass > places[j].mass })
+	var parts []string
+	for _, x := range places {
+		if x.mass > 0 {
+			parts = append(parts, x.name+" "+percent(x.mass/l.Founded))
+		}
+	}
+	return fmt.Sprintf("Of %s Msun founded, at the end: %s; %s.", Count(l.Founded, 3), strings.Join(parts, ", "), closes)
 }
 
 func closesTo(mismatch float64) string {

@@ -122,22 +122,39 @@ func rowOf(s *ensemble.Summary, population ensemble.Population) row {
 	for i, m := range marks {
 		r.cells[0][2+i], r.cells[1][2+i] = markCells(m.Mark)
 	}
-	if c := causes(population.Causes); c != "" {
-		r.remarks = append(r.remarks, "taken by: "+c)
+	if about := about(population); about != "" {
+		r.remarks = append(r.remarks, about)
 	}
+	var without []string
 	for _, m := range marks {
 		switch {
 		case math.IsNaN(m.Date):
-			r.remarks = append(r.remarks, m.name+" not reached: "+reason(m.Mark))
+			without = append(without, m.name)
 		case m.Cut > 0:
 			r.remarks = append(r.remarks, fmt.Sprintf("%s not reached in %s of the realisations; the date is of the others",
 				m.name, percent(m.Cut)))
 		}
 	}
+	if len(without) > 0 {
+		r.remarks = append(r.remarks, strings.Join(without, ", ")+" not reached: "+reason(population.Last))
+	}
 	if real := realLast(s, population); real != "" {
 		r.remarks = append(r.remarks, real)
 	}
 	return r
+}
+
+// about says what a population counts, where its name does not, and what
+// became of its members.
+func about(population ensemble.Population) string {
+	var parts []string
+	if c := population.Condition; c != "" && c+"s" != population.Name && c != population.Name {
+		parts = append(parts, "counts "+c)
+	}
+	if c := causes(population.Causes); c != "" {
+		parts = append(parts, "fate: "+c)
+	}
+	return strings.Join(parts, "; ")
 }
 
 // reason is why a mark was never reached.
@@ -153,6 +170,9 @@ func markCells(m ensemble.Mark) (above, below string) {
 		return "not reached", ""
 	}
 	s := show(m.Date, m.Error)
+	if s.margin() == "" {
+		return s.date(m.Date), ""
+	}
 	return s.date(m.Date) + s.margin(), s.interval(m.Low, m.High)
 }
 
@@ -183,8 +203,8 @@ func realLast(s *ensemble.Summary, population ensemble.Population) string {
 	how := show(population.RealLast, population.Last.Error)
 	of := fmt.Sprintf("the last of all %s", Count(population.PeakCount, peakDigits(s, population.PeakCount)))
 	beyond := population.RealLast - population.Last.Date
-	if beyond < math.Pow10(-how.places)/2 {
-		return of + " goes no later than that of the sample"
+	if math.Abs(beyond) < math.Pow10(-how.places)/2 {
+		return of + " goes at the same date, within its error"
 	}
 	if how.double {
 		return fmt.Sprintf("%s goes at about %s", of, how.date(population.RealLast))
