@@ -1,0 +1,145 @@
+package hole
+
+import (
+	"fmt"
+	"math"
+	"os"
+	"os/exec"
+	"strconv"
+	"strings"
+	"testing"
+
+	"wane/sim/physics/constant"
+	"wane/testdata/published"
+)
+
+// sets are the species of the literature, by the name the rows use.
+func sets() map[string]*Emission {
+	return map[string]*Emission{
+		"photons-gravitons":        NewEmission(Light()),
+		"one-massless-neutrino":    NewEmission(Light(), MasslessNeutrinos(1)),
+		"page-1976":                NewEmission(Light(), MasslessNeutrinos(2)),
+		"three-massless-neutrinos": NewEmission(Light(), MasslessNeutrinos(3)),
+	}
+}
+
+func TestPublished(t *testing.T) {
+	alpha := func(set string) float64 {
+		if set == "black-body" {
+			return BlackBodyAlpha
+		}
+		e, ok := sets()[set]
+		if !ok {
+			t.Fatalf("unknown set %q", set)
+		}
+		return e.Massless()
+	}
+	for _, row := range published.Rows(t, "holes.csv") {
+		set := row.Inputs["set"]
+		mass := func() float64 { return row.Number(t, "mass_Msun") }
+		switch q := row.Inputs["quantity"]; q {
+		case "temperature":
+			row.Check(t, Temperature(mass()))
+		case "thermal-energy":
+			row.Check(t, Temperature(mass())*constant.Boltzmann/constant.EV)
+		case "alpha":
+			row.Check(t, alpha(set))
+		case "fraction-page-1976":
+			var part float64
+			switch set {
+			case "neutrinos":
+				part = MasslessNeutrinos(2)[0].Alpha()
+			case "photons":
+				part = Light()[0].Alpha()
+			case "gravitons":
+				part = Light()[1].Alpha()
+			}
+			row.Check(t, part/alpha("page-1976"))
+		case "lifetime-natural":
+			// G^2 M^3/(hbar c^4) is 1/lossUnit years at one solar mass.
+			row.Check(t, math.Pow(10, Log10Lifetime(mass(), alpha(set)))*lossUnit)
+		case "log10-lifetime":
+			row.Check(t, Log10Lifetime(mass(), alpha(set)))
+		case "lifetime":
+			row.Check(t, math.Pow(10, Log10Lifetime(mass(), alpha(set)))*constant.Year)
+		default:
+			t.Errorf("%s: unknown quantity %q", row.Where(), q)
+		}
+	}
+}
+
+// TestMasslessSetLivesByClosedForm holds the integral to the closed form.
+func TestMasslessSetLivesByClosedForm(t *testing.T) {
+	for name, e := range sets() {
+		for _, m := range []float64{1e-30, 1, 1e12} {
+			if got, want := e.Log10Lifetime(m), Log10Lifetime(m, e.Massless()); got != want {
+				t.Errorf("%s, %v Msun: got %v, want %v", name, m, got, want)
+			}
+		}
+	}
+}
+
+// TestLifeIsIntegralOfLoss compares the quadrature with mpmath's (30 digits)
+// of the same integral, from far above the first switch to far below the last.
+func TestLifeIsIntegralOfLoss(t *testing.T) {
+	e := NewEmission(Light(), Neutrinos(1e-3), Massive())
+	masses := []string{"1e-25", "1e-19", "5e-18", "1e-16", "1e-13", "3e-10", "1e-9", "2.5e-8", "1e-6", "0.02", "0.03", "10", "1e12"}
+	args := append([]string{"testdata/lifetime.py"}, masses...)
+	out, err := exec.Command("/usr/bin/python3", args...).Output()
+	if err != nil {
+		if os.Getenv("WANE_REQUIRE") == "1" {
+			t.Fatalf("mpmath is required: %v", err)
+		}
+		t.Skipf("no mpmath: %v", err)
+	}
+	lines := strings.Fields(string(out))
+	if len(lines) != len(masses) {
+		t.Fatalf("lifetime.py printed %d values for %d masses", len(lines), len(masses))
+	}
+	for i, s := range masses {
+		m, _ := strconv.ParseFloat(s, 64)
+		want, err := strconv.ParseFloat(lines[i], 64)
+		if err != nil {
+			t.Fatal(err)
+		}
+		// 1e-12 in ln t, and the rounding of the logarithm itself.
+		if got := e.Log10Lifetime(m); math.Abs(got-want) > 1e-12+2e-16*math.Abs(want) {
+			t.Errorf("%s Msun: log10 life %.15g, mpmath %.15g, difference %.1e", s, got, want, got-want)
+		}
+	}
+}
+
+func TestCorners(t *testing.T) {
+	e := NewEmission(Light(), Neutrinos(1e-3), Massive())
+	inf := math.Inf(1)
+	for _, c := range []struct {
+		what      string
+		got, want float64
+	}{
+		{"temperature of nothing", Temperature(0), inf},
+		{"log10 temperature of a hole that is gone", Log10Temperature(0), -inf},
+		{"loss of nothing", Log10LossRate(0, 1e-5), -inf},
+		{"loss without particles", Log10LossRate(1, 0), -inf},
+		{"life of nothing", e.Log10Lifetime(0), -inf},
+		{"life without particles", NewEmission().Log10Lifetime(1), inf},
+	} {
+		if c.got != c.want {
+			t.Errorf("%s: got %v, want %v", c.what, c.got, c.want)
+		}
+	}
+	if !math.IsNaN(Temperature(-1)) {
+		t.Error("a negative mass has a temperature")
+	}
+	// At the extremes of float64 the logarithms stay finite.
+	for _, m := range []float64{5e-324, 1e300} {
+		if l := e.Log10Lifetime(m); l-l != 0 {
+			t.Errorf("life of %v Msun: %v", m, l)
+		}
+	}
+}
+
+func ExampleEmission_Log10Lifetime() {
+	e := NewEmission(Light())
+	fmt.Printf("10 Msun: 10^%.3f yr\n", e.Log10Lifetime(10))
+	// Output: 10 Msun: 10^70.064 yr
+}
