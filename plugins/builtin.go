@@ -1,0 +1,80 @@
+// Package plugins lists the laws Wane is built with.
+package plugins
+
+import (
+	"wane/plugins/browndwarfcooling"
+	"wane/plugins/collapse"
+	"wane/plugins/curvature"
+	"wane/plugins/darkenergydecay"
+	"wane/plugins/ejection"
+	"wane/plugins/evaporation"
+	"wane/plugins/expansion"
+	"wane/plugins/infall"
+	"wane/plugins/lifetime"
+	"wane/plugins/massfunction"
+	"wane/plugins/metals"
+	"wane/plugins/neutronstarcooling"
+	"wane/plugins/nucleondecay"
+	"wane/plugins/orbitaldecay"
+	"wane/plugins/remnant"
+	"wane/plugins/starformation"
+	"wane/plugins/substellarlimit"
+	"wane/plugins/vacuumdecay"
+	"wane/plugins/warmth"
+	"wane/plugins/whitedwarfcooling"
+	"wane/sim/law"
+)
+
+// Builtin returns a registry of every built-in law, in the order of
+// [law.Processes], the default of each process first.
+func Builtin() (*law.Registry, error) {
+	return law.NewRegistry(
+		expansion.LambdaCDM(),
+		vacuumdecay.None(),
+		darkenergydecay.None(),
+		massfunction.Kroupa(),
+		starformation.Exponential(),
+		metals.Solar(),
+		substellarlimit.Fixed(),
+		lifetime.Table(),
+		remnant.Cummings(),
+		collapse.Raithel(),
+		whitedwarfcooling.MestelDebye(),
+		neutronstarcooling.Minimal(),
+		browndwarfcooling.BurrowsLiebert(),
+		warmth.DarkMatter(), warmth.None(),
+		ejection.Contracting(), ejection.Balanced(),
+		infall.Branching(),
+		orbitaldecay.Peters(),
+		nucleondecay.GrandUnified(), nucleondecay.Stable(),
+		evaporation.Page(), evaporation.BlackBody(),
+		curvature.None(),
+	)
+}
+
+// Defaults returns the default law of each process, by process. A process that
+// is not in it has no built-in law yet, and a run does without.
+func Defaults() map[string]string {
+	return map[string]string{
+		"expansion":            "lambda-cdm",
+		"vacuum-decay":         "none",
+		"dark-energy-decay":    "none",
+		"mass-function":        "kroupa",
+		"star-formation":       "exponential",
+		"metals":               "solar",
+		"substellar-limit":     "fixed",
+		"lifetime":             "table",
+		"remnant":              "cummings",
+		"collapse":             "raithel",
+		"white-dwarf-cooling":  "mestel-debye",
+		"neutron-star-cooling": "minimal",
+		"brown-dwarf-cooling":  "burrows-liebert",
+		"warmth":               "dark-matter",
+		"ejection":             "contracting",
+		"infall":               "branching",
+		"orbital-decay":        "peters",
+		"nucleon-decay":        "grand-unified",
+		"evaporation":          "page",
+		"curvature":            "none",
+	}
+}
