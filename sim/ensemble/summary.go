@@ -30,9 +30,9 @@ type Summary struct {
 // the real galaxy.
 type Population struct {
 	Name      string
-	Condition string // in words
-	PeakCount float64
-	PeakDate  float64 // log10 yr, NaN: it never had a member
+	Condition string  // in words
+	PeakCount float64 // median; 0 if most realisations have no member
+	PeakDate  float64 // median, log10 yr; NaN: it never had a member
 	Half      Mark
 	Hundredth Mark
 	Last      Mark
@@ -44,21 +44,23 @@ type Population struct {
 	RealLast float64
 }
 
-// Mark is one fade date over the ensemble, log10 yr.
+// Mark is one fade date over the ensemble, log10 yr. Quantiles are over all
+// realisations in which the population had a member; those that did not reach
+// the mark count as later than any date.
 type Mark struct {
-	Date   float64 // median over realisations that reached it; NaN: never
-	Low    float64 // 5 % quantile between realisations
-	High   float64 // 95 % quantile
-	Error  float64 // Monte Carlo error of Date, dex
+	Date   float64 // median; NaN: half of the realisations or more did not reach it
+	Low    float64 // 5 % quantile between realisations; +Inf: not reached
+	High   float64 // 95 % quantile; +Inf: not reached
+	Error  float64 // Monte Carlo error of Date, dex; NaN or +Inf: can't be told
 	Cut    float64 // share of realisations that did not reach it
 	Reason string  // why Date is NaN
 }
 
 // Cause is one way members left a population.
 type Cause struct {
-	Process  string
+	Process  string // empty for Remaining
 	Outcome  string
-	Fraction float64
+	Fraction float64 // of all stays in all realisations; they sum to 1
 }
 
 // LedgerMeans is the mean over realisations of where the mass went, solar masses.
