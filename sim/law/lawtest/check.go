@@ -1,0 +1,160 @@
+package lawtest
+
+import (
+	"fmt"
+	"math/rand/v2"
+	"slices"
+	"testing"
+
+	"wane/sim/law"
+)
+
+// Finding is one rule the law breaks.
+type Finding struct {
+	Check    string // the rule, one of the words of the package's doc
+	Question string // empty when it is about the law as a whole
+	Detail   string // what was asked and what came back
+}
+
+func (f Finding) String() string {
+	if f.Question == "" {
+		return f.Check + ": " + f.Detail
+	}
+	return f.Check + ": question " + f.Question + ": " + f.Detail
+}
+
+// Option changes how a law is checked.
+type Option func(*settings)
+
+type settings struct {
+	foretell float64
+	among    []law.Law
+}
+
+// ForetellWithin sets how far, relatively, the foretold wait may be from the
+// integral of the wear. The default is 1e-6. Say in the test why it is more.
+func ForetellWithin(relative float64) Option { return func(s *settings) { s.foretell = relative } }
+
+// Among names laws that run beside this one: where its range hangs on another
+// process's parameter ("collapse.m_up"), the first law of that process among
+// them sets it, and its parameters may matter to their ranges alone.
+func Among(laws ...law.Law) Option { return func(s *settings) { s.among = laws } }
+
+// Run checks a law and fails the test for each rule it breaks.
+func Run(t testing.TB, l law.Law, options ...Option) {
+	t.Helper()
+	c := l.Describe()
+	for _, f := range Check(l, options...) {
+		t.Errorf("law %s/%s: %s", c.Process, c.Name, f)
+	}
+}
+
+// Check takes a law through the whole kit and returns what it found, at most
+// one finding a rule and question where one tells enough.
+func Check(l law.Law, options ...Option) []Finding {
+	s := settings{foretell: 1e-6}
+	for _, o := range options {
+		o(&s)
+	}
+	k := &kit{settings: s, law: l, card: l.Describe(), findings: &[]Finding{}}
+	k.checkCard()
+	if _, known := law.ProcessNamed(k.card.Process); !known {
+		return *k.findings
+	}
+	k.use, k.set = k.inUse(nil)
+	k.checkDescribe()
+	for _, q := range k.card.Questions {
+		if k.checkAnswer(q) {
+			k.checkShapes(q)
+			k.checkPure(q)
+			k.checkUnset(q)
+			k.checkRows(q)
+			k.checkMonotone(q)
+		}
+	}
+	k.checkDomain()
+	k.checkForetell()
+	k.checkParameters()
+	return *k.findings
+}
+
+// kit is one law under test, at one setting of its parameters.
+type kit struct {
+	settings
+	law      law.Law
+	card     law.Card
+	use      *law.Use
+	set      *law.Set
+	findings *[]Finding
+}
+
+func (k *kit) found(check, question, format string, a ...any) {
+	f := Finding{Check: check, Question: question, Detail: fmt.Sprintf(format, a...)}
+	if !slices.Contains(*k.findings, f) {
+		*k.findings = append(*k.findings, f)
+	}
+}
+
+// random returns draws that depend on the name alone.
+func random(name string) *rand.Rand {
+	seed := uint64(14695981039346656037)
+	for _, c := range []byte(name) {
+		seed = (seed ^ uint64(c)) * 1099511628211
+	}
+	return rand.New(rand.NewPCG(seed, 1))
+}
+
+// inUse prepares the law with some parameters changed, beside the others.
+func (k *kit) inUse(change map[string]float64) (*law.Use, *law.Set) {
+	u := law.NewUse(k.law)
+	for name, value := range change {
+		if err := u.Set(name, value); err != nil {
+			k.found("parameter", "", "%v", err)
+		}
+	}
+	uses := []*law.Use{u}
+	taken := map[string]bool{k.card.Process: true}
+	for _, l := range k.among {
+		other := law.NewUse(l)
+		if !taken[other.Card.Process] {
+			taken[other.Card.Process] = true
+			uses = append(uses, other)
+		}
+	}
+	set, faults := law.NewSet(uses...)
+	if len(k.among) > 0 {
+		for _, f := range faults {
+			k.found("card", "", "%v", f)
+		}
+	}
+	return u, set
+}
+
+// with is the kit for the same law with one parameter changed.
+func (k *kit) with(parameter string, value float64) *kit {
+	other := *k
+	other.use, other.set = k.inUse(map[string]float64{parameter: value})
+	return &other
+}
+
+// ask asks through the one place where answers are checked. A panic of the law
+// is an error like another.
+func (k *kit) ask(question string, in law.Batch) (out law.Batch, err error) {
+	defer func() {
+		if r := recover(); r != nil {
+			err = fmt.Errorf("panic: %v", r)
+		}
+	}()
+	return k.use.Ask(question, in)
+}
+
+// direct asks the law itself, so that a batch of no rows arrives too.
+func (k *kit) direct(question string, in law.Batch) (out law.Batch, err error) {
+	defer func() {
+		if r := recover(); r != nil {
+			err = fmt.Errorf("panic: %v", r)
+		}
+	}()
+	in.Parameters, in.Kinds = k.use.Parameters, k.set.Kinds
+	return k.law.Answer(question, in)
+}

@@ -1,0 +1,25 @@
+// Package lawtest takes any law through the rules of the contract.
+//
+//	func TestPage(t *testing.T) { lawtest.Run(t, evaporation.Page()) }
+//
+// [Check] does the work and returns what it found as values; [Run] fails the
+// test for each. The kit makes its own rows: plausible objects of the kinds
+// the law accepts (masses by kind, radius, composition, place and origin to
+// match), galaxies from founding to the last object, and the corners of every
+// column. It draws with a fixed seed, so two runs find the same.
+//
+// What is checked, by the word in [Finding.Check]:
+//
+//	card        the card is in order (law.CheckCard), and says formula and domain
+//	describe    the card is the same each time
+//	answer      every answer keeps the rules of law.Use.Ask, on plausible rows
+//	shapes      0, 1, 2, 1000 and 16384 rows are answered
+//	pure        the same batch gives the same bits: again, after other batches, in many goroutines
+//	input       the law leaves the rows it reads as they were
+//	unset       every row of the answer is set, even where memory is lent
+//	rows        row i depends on row i alone: split, shuffled, concatenated
+//	domain      the rules hold in the corners of every column and parameter
+//	monotone    quantiles rise with the draw, cooling never warms, a hazard never falls
+//	foretell    a wearing law's foretold wait is the integral dM/rate to its next threshold
+//	parameter   each parameter changes something
+package lawtest
