@@ -5,6 +5,7 @@ import (
 	"math"
 	"sort"
 	"strings"
+	"unicode"
 
 	"wane/sim/galaxy"
 	"wane/sim/law"
@@ -24,11 +25,13 @@ type builder struct {
 
 	broken bool             // a file could not be read: what is missing is no fault
 	at     map[string]place // where each setting was last given
+	when   map[string]int   // in which order
+	said   int              // how many settings so far
 	doubt  map[string]bool  // processes whose law was faulty: their parameters are not judged
 }
 
 func newBuilder(reg *law.Registry, defaults map[string]string) (*builder, error) {
-	b := &builder{reg: reg, at: map[string]place{}, doubt: map[string]bool{}, s: &Scenario{
+	b := &builder{reg: reg, at: map[string]place{}, when: map[string]int{}, doubt: map[string]bool{}, s: &Scenario{
 		Realisations: defaultRealisations,
 		Seed:         defaultSeed,
 		Until:        math.Inf(1),
@@ -66,11 +69,12 @@ func (b *builder) apply(root *node) {
 	b.populations(b.table(root, "populations"))
 }
 
-// describe takes title and question from the scenario's own file.
+// describe takes title and question, each as one line, from the scenario's own
+// file.
 func (b *builder) describe(leaf *node) {
 	for key, into := range map[string]*string{"title": &b.s.Title, "question": &b.s.Question} {
 		if n := leaf.field(key); n != nil && n.form == aText {
-			*into = n.text
+			*into = strings.Join(strings.FieldsFunc(n.text, func(c rune) bool { return unicode.IsSpace(c) || unicode.IsControl(c) }), " ")
 		}
 	}
 }
@@ -109,9 +113,15 @@ func (b *builder) unknownKeys(t *node, in string, known ...string) {
 	}
 }
 
+// given remembers where something was said, right or wrong.
+func (b *builder) given(key string, at place) {
+	b.said++
+	b.at[key], b.when[key] = at, b.said
+}
+
 // set remembers where a setting comes from.
 func (b *builder) set(key string, at place) {
-	b.at[key] = at
+	b.given(key, at)
 	b.s.from[key] = at.file
 }
 
@@ -229,12 +239,22 @@ func (b *builder) finish(leaf *node) {
 	set, err := b.s.Set(b.reg)
 	if err != nil {
 		for _, line := range strings.Split(err.Error(), "\n") {
-			b.fault(place{file: top.file}, "%s", line)
+			b.fault(b.blame(line, top), "%s", line)
 		}
 		return
 	}
 	b.impossible(set)
 	b.s.seal(b.reg)
+}
+
+// blame finds the setting that gave the run a law which a fault is about.
+func (b *builder) blame(fault string, top place) place {
+	for _, p := range law.Processes {
+		if at, ok := b.at[p.Name]; ok && strings.Contains(fault, p.Name+"/"+b.s.Laws[p.Name]) {
+			return at
+		}
+	}
+	return place{file: top.file}
 }
 
 // presets completes the parameters of the laws in use with their presets.

@@ -22,6 +22,8 @@ type document struct {
 	data []byte
 	root *node
 	open *node // the table that keys now go to; nil after a faulty header
+
+	offset, line, column int // the last place asked for
 }
 
 // parse reads a whole document. The second result is false when the file is
@@ -59,12 +61,23 @@ func (d *document) isText() bool {
 	return true
 }
 
-// place is the line and column of an offset, columns in characters.
+// place is the line and column of an offset, columns in characters. It counts
+// on from the last place asked for, since places are mostly asked in order.
 func (d *document) place(offset int) place {
-	head := d.data[:offset]
-	line := bytes.Count(head, []byte("\n")) + 1
-	start := bytes.LastIndexByte(head, '\n') + 1
-	return place{d.file, line, utf8.RuneCount(head[start:]) + 1}
+	if d.line == 0 || offset < d.offset {
+		d.offset, d.line, d.column = 0, 1, 1
+	}
+	for part := d.data[d.offset:offset]; ; {
+		i := bytes.IndexByte(part, '\n')
+		if i < 0 {
+			d.column += utf8.RuneCount(part)
+			break
+		}
+		part = part[i+1:]
+		d.line, d.column = d.line+1, 1
+	}
+	d.offset = offset
+	return place{d.file, d.line, d.column}
 }
 
 func (d *document) read() {
@@ -75,7 +88,7 @@ func (d *document) read() {
 		part := d.data[start:len(d.data):len(d.data)]
 		p.Reset(part)
 		for p.NextExpression() {
-			d.expression(&p, start, p.Expression())
+			d.expression(start, p.Expression())
 		}
 		err := p.Error()
 		if err == nil {
@@ -103,10 +116,10 @@ func (d *document) read() {
 	}
 }
 
-func (d *document) expression(p *unstable.Parser, start int, e *unstable.Node) {
+func (d *document) expression(start int, e *unstable.Node) {
 	switch e.Kind {
 	case unstable.Table:
-		d.open = d.header(p, start, e)
+		d.open = d.header(start, e)
 	case unstable.ArrayTable:
 		names, at := d.keys(e.Key(), start)
 		d.fault(at[0], "[[%s]] is a list of tables: want one table, [%s]", strings.Join(names, "."), strings.Join(names, "."))
@@ -128,7 +141,7 @@ func (d *document) keys(it unstable.Iterator, start int) (names []string, at []p
 }
 
 // header opens the table of a [header].
-func (d *document) header(_ *unstable.Parser, start int, e *unstable.Node) *node {
+func (d *document) header(start int, e *unstable.Node) *node {
 	names, at := d.keys(e.Key(), start)
 	t := d.descend(d.root, names, at)
 	if t == nil {

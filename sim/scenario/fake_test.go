@@ -38,12 +38,21 @@ func registry(t testing.TB) *law.Registry {
 		law.Parameter{Name: "lifetime", Unit: "yr", Log10: true, Low: 45, High: 169, Preset: 45})
 	die := card("remnant", "simple", []law.Question{{Name: "die", Words: []string{"white-dwarf"}}, {Name: "remain"}},
 		law.Parameter{Name: "scatter", Unit: "solMass", Low: 0, High: 0.1, Preset: 0.06})
+	frame := card("ejection", "still", []law.Question{{Name: "rate"}})
+	frame.Frame = true
+	heavy := die
+	heavy.Name, heavy.Accepts = "light-only", law.Accepts{Kinds: []string{"star"}, Column: "mass", High: law.At(8)}
+	cool := card("white-dwarf-cooling", "mestel-debye", []law.Question{{Name: "shine"}})
+	cool.Accepts.Kinds = []string{"white-dwarf"}
 	r, err := law.NewRegistry(
+		fake{frame}, fake{heavy},
+		fake{card("substellar-limit", "fixed", []law.Question{{Name: "sort"}})},
+		fake{card("lifetime", "table", []law.Question{{Name: "live"}})},
 		fake{grand}, fake{other}, fake{card("nucleon-decay", "stable", wear)},
 		fake{card("evaporation", "page", wear, law.Parameter{Name: "spin", Low: 0, High: 1, Preset: 0.5})},
 		fake{die},
 		fake{card("infall", "branching", nil, law.Parameter{Name: "f_in", Low: 0.01, High: 0.1, Preset: 0.05})},
-		fake{card("white-dwarf-cooling", "mestel-debye", []law.Question{{Name: "shine"}})},
+		fake{cool},
 	)
 	if err != nil {
 		t.Fatal(err)
@@ -54,7 +63,7 @@ func registry(t testing.TB) *law.Registry {
 func defaults() map[string]string {
 	return map[string]string{
 		"nucleon-decay": "grand-unified", "evaporation": "page", "remnant": "simple", "infall": "branching",
-		"white-dwarf-cooling": "mestel-debye",
+		"white-dwarf-cooling": "mestel-debye", "ejection": "still", "substellar-limit": "fixed", "lifetime": "table",
 	}
 }
 

@@ -43,11 +43,37 @@ type place struct {
 type report struct{ faults, warnings Faults }
 
 func (r *report) fault(at place, format string, a ...any) {
-	r.faults = append(r.faults, Fault{at.file, at.line, at.column, fmt.Sprintf(format, a...)})
+	message := fmt.Sprintf(format, a...)
+	if at.line == 0 {
+		// "--set evaporation.spin" has named the setting.
+		flag := strings.TrimLeft(at.file, "-")
+		_, named, _ := strings.Cut(flag, " ")
+		for _, prefix := range []string{flag, named, "laws." + named} {
+			message = strings.TrimPrefix(message, prefix+": ")
+		}
+	}
+	const longest = 1000
+	if len(message) > longest {
+		message = strings.ToValidUTF8(message[:longest], "") + "..."
+	}
+	r.faults = append(r.faults, Fault{at.file, at.line, at.column, message})
 }
 
 func (r *report) warn(at place, format string, a ...any) {
 	r.warnings = append(r.warnings, Fault{at.file, at.line, at.column, fmt.Sprintf(format, a...)})
+}
+
+// maxFaults is how many faults are worth reading.
+const maxFaults = 200
+
+// short keeps the first faults of very many.
+func (f Faults) short() Faults {
+	if len(f) <= maxFaults {
+		return f
+	}
+	last := f[maxFaults]
+	last.Message = fmt.Sprintf("and %d faults more", len(f)-maxFaults)
+	return append(f[:maxFaults:maxFaults], last)
 }
 
 // sorted orders faults as they stand in each file, files in the order in

@@ -46,7 +46,7 @@ func (b *builder) galaxyValue(name string, n *node) {
 	default:
 		return
 	}
-	b.at[key] = n.at // also a faulty one: it is not missing
+	b.given(key, n.at) // also a faulty one: it is not missing
 	if ok {
 		b.s.from[key] = n.at.file
 	}
@@ -67,6 +67,9 @@ func (b *builder) galaxyWhole(top place) {
 	at, given := b.at["galaxy.sample"]
 	switch {
 	case given && float64(s.Sample) > s.Objects:
+		if b.when["galaxy.objects"] > b.when["galaxy.sample"] {
+			at = b.at["galaxy.objects"]
+		}
 		b.fault(at, "galaxy.sample: %d objects: want at most the %s that the galaxy has (galaxy.objects)", s.Sample, quantity.Format(s.Objects, ""))
 	case float64(s.Sample) == s.Objects:
 		s.Sample = 0

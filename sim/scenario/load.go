@@ -46,7 +46,7 @@ func Load(fsys fs.FS, file string, reg *law.Registry, defaults map[string]string
 	b.override(o)
 	b.finish(leaf)
 	if len(b.faults) > 0 {
-		return nil, b.warnings.sorted(), b.faults.sorted()
+		return nil, b.warnings.sorted(), b.faults.sorted().short()
 	}
 	return b.s, b.warnings.sorted(), nil
 }

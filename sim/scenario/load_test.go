@@ -44,7 +44,7 @@ temperature = "< 1.1 times the floor"
 	want := &Scenario{
 		Name: "x", Title: "Warm", Base: []string{"reach"},
 		Objects: 2e11, Sample: 1000, Radius: 8000, CentralMass: 4.3e6, Realisations: 40, Seed: 7, Until: 1100,
-		Laws: map[string]string{"nucleon-decay": "grand-unified", "evaporation": "page", "remnant": "simple", "infall": "none", "white-dwarf-cooling": "mestel-debye"},
+		Laws: map[string]string{"nucleon-decay": "grand-unified", "evaporation": "page", "remnant": "simple", "infall": "none", "white-dwarf-cooling": "mestel-debye", "ejection": "still", "substellar-limit": "fixed", "lifetime": "table"},
 		Parameters: map[string]map[string]float64{
 			"nucleon-decay": {"lifetime": 37 + num.Log10(2), "heat_share": 0.5, "gone": 1},
 			"evaporation":   {"spin": 0.25},
@@ -150,7 +150,7 @@ func TestSwapDropsParameters(t *testing.T) {
 
 func TestImpossiblePopulations(t *testing.T) {
 	for condition, want := range map[string]string{
-		`kinds = ["relic"]`: "",
+		`kinds = ["relic"]`:                                                "",
 		"kinds = [\"black-hole\"]\n":                                       "no law of this run makes a black-hole",
 		`kinds = ["central-hole"]` + "\nplaces = [\"bound\"]":              "the central hole is always in place central",
 		`kinds = ["star"]` + "\nplaces = [\"central\"]":                    "only the central hole is ever in place central",

@@ -48,13 +48,18 @@ func slips(a, b string) int {
 	return last[len(b)]
 }
 
-// among ends a message about an unknown word: the suggestion and the list.
+// among ends a message about an unknown word: the suggestion and the list, or
+// the suggestion alone where the list is long.
 func among(word string, known []string) string {
 	list := strings.Join(known, ", ")
 	if len(known) == 0 {
 		list = "none"
 	}
+	const long = 12
 	if n := Nearest(word, known); n != "" {
+		if len(known) > long {
+			return fmt.Sprintf("(did you mean %q?)", n)
+		}
 		return fmt.Sprintf("(did you mean %q? known: %s)", n, list)
 	}
 	return fmt.Sprintf("(known: %s)", list)

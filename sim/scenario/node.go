@@ -1,6 +1,6 @@
 package scenario
 
-import "strings"
+import "strconv"
 
 // form is what a value is in the file.
 type form uint8
@@ -50,15 +50,11 @@ func (n *node) field(name string) *node {
 
 // written is the value as it may stand in a message.
 func (n *node) written() string {
-	const most = 40
 	switch n.form {
 	case aTable, aList:
 		return n.form.String()
 	case aText, aLoose:
-		if r := []rune(n.text); len(r) > most {
-			return `"` + string(r[:most]) + `..."`
-		}
-		return `"` + strings.ReplaceAll(n.text, "\n", " ") + `"`
+		return strconv.Quote(cut(n.text))
 	}
 	return n.text
 }

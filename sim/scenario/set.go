@@ -7,7 +7,8 @@ import (
 	"wane/sim/law"
 )
 
-// Set prepares the scenario's laws with their parameters for a run. The error
+// Set prepares the scenario's laws with their parameters for a run, and proves
+// that they leave no object without an answer and none with two. The error
 // joins every fault, one a line.
 func (s *Scenario) Set(reg *law.Registry) (*law.Set, error) {
 	var uses []*law.Use
@@ -36,6 +37,9 @@ func (s *Scenario) Set(reg *law.Registry) (*law.Set, error) {
 		return nil, errors.Join(faults...)
 	}
 	set, faults := law.NewSet(uses...)
+	if len(faults) == 0 {
+		faults = law.CheckCoverage(set)
+	}
 	if len(faults) > 0 {
 		return nil, errors.Join(faults...)
 	}
