@@ -38,7 +38,7 @@ func sampled() *ensemble.Summary {
 				Name: "black-holes", Condition: "black-hole", PeakCount: 2.21e8, PeakDate: 10.41,
 				Half:      ensemble.Mark{Date: 69.31, Low: 69.18, High: 69.47, Error: 0.03},
 				Hundredth: ensemble.Mark{Date: 70.4, Low: 70.21, High: 70.55, Error: 0.04},
-				Last:      ensemble.Mark{Date: 70.51, Low: 70.38, High: 70.56, Error: 0.02, Cut: 0.125},
+				Last:      ensemble.Mark{Date: 70.51, Low: 70.38, High: math.Inf(1), Error: 0.02, Cut: 0.125},
 				Causes: []ensemble.Cause{{Process: "evaporation", Outcome: "evaporated", Fraction: 0.93},
 					{Process: "ejection", Outcome: "taken", Fraction: 0.04}, {Process: "infall", Outcome: "taken", Fraction: 0.03}},
 				LastHangsOn: "evaporation/page", RealLast: never,

@@ -79,10 +79,14 @@ func (s shown) margin() string {
 	return " ± " + strconv.FormatFloat(s.err, 'f', s.places, 64)
 }
 
-// interval is a range of exponents in brackets.
+// interval is a range of exponents in brackets. An end that was not reached is
+// open.
 func (s shown) interval(low, high float64) string {
-	if math.IsNaN(low) || math.IsNaN(high) {
+	switch {
+	case math.IsNaN(low) || math.IsNaN(high) || math.IsInf(low, 1):
 		return ""
+	case math.IsInf(high, 1):
+		return "(from " + s.exponent(low) + " on)"
 	}
 	a, b := s.exponent(low), s.exponent(high)
 	if a == b {

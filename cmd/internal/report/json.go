@@ -115,7 +115,7 @@ func populationOf(p ensemble.Population) populationJSON {
 		out.HangsOn = &p.LastHangsOn
 	}
 	for name, m := range map[string]ensemble.Mark{"half": p.Half, "hundredth": p.Hundredth, "last": p.Last} {
-		if everMember(p) && number(m.Date) != nil {
+		if number(m.Date) != nil {
 			out.Marks[name] = &mark{m.Date, number(m.Low), number(m.High), number(m.Error), m.Cut}
 			continue
 		}

@@ -131,7 +131,7 @@ func rowOf(s *ensemble.Summary, population ensemble.Population) row {
 		case math.IsNaN(m.Date):
 			without = append(without, m.name)
 		case m.Cut > 0:
-			r.remarks = append(r.remarks, fmt.Sprintf("%s not reached in %s of the realisations; the date is of the others",
+			r.remarks = append(r.remarks, fmt.Sprintf("%s not reached in %s of the realisations, which count as later than any date",
 				m.name, percent(m.Cut)))
 		}
 	}
@@ -170,8 +170,8 @@ func markCells(m ensemble.Mark) (above, below string) {
 		return "not reached", ""
 	}
 	s := show(m.Date, m.Error)
-	if s.margin() == "" {
-		return s.date(m.Date), ""
+	if math.IsNaN(m.Error) && m.Low == m.High {
+		return s.date(m.Date), "" // one realisation has no spread
 	}
 	return s.date(m.Date) + s.margin(), s.interval(m.Low, m.High)
 }

@@ -103,7 +103,7 @@ func grouped(n int64) string {
 func Wrap(text string, width int) []string {
 	var lines []string
 	line := ""
-	for _, word := range strings.Fields(text) {
+	for _, word := range unbroken(text) {
 		if line != "" && columns(line)+1+columns(word) > width {
 			lines = append(lines, line)
 			line = ""
@@ -114,6 +114,22 @@ func Wrap(text string, width int) []string {
 		line += word
 	}
 	return append(lines, line)
+}
+
+// unbroken splits a text at its blanks, but keeps a number and its unit in one.
+func unbroken(text string) []string {
+	var out []string
+	for _, word := range strings.Fields(text) {
+		unit := strings.TrimRight(word, ".,;:)")
+		if last := len(out) - 1; last >= 0 && (unit == "%" || unit == "yr" || unit == "Msun" || unit == "K" || unit == "dex") {
+			if c := out[last][len(out[last])-1]; c >= '0' && c <= '9' {
+				out[last] += " " + word
+				continue
+			}
+		}
+		out = append(out, word)
+	}
+	return out
 }
 
 func columns(s string) int { return utf8.RuneCountInString(s) }
@@ -138,4 +154,5 @@ func peakDigits(s *ensemble.Summary, peak float64) int {
 	return 1
 }
 
-func everMember(p ensemble.Population) bool { return p.PeakCount > 0 && !math.IsNaN(p.PeakDate) }
+// everMember tells whether a population had a member in any realisation.
+func everMember(p ensemble.Population) bool { return !math.IsNaN(p.PeakDate) }
