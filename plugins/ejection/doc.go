@@ -49,6 +49,10 @@ func parameters(more ...law.Parameter) []law.Parameter {
 	}, more...)
 }
 
+// lightest is a mass below that of any nucleon, solar masses: lighter objects
+// are as susceptible as one of that mass, so that none is so without bound.
+const lightest = 1e-60
+
 // expose answers the susceptibilities. What has no mass cannot be thrown.
 func expose(in law.Batch) []float64 {
 	m, out := in.Values("mass"), in.NewValues()
@@ -59,7 +63,7 @@ func expose(in law.Batch) []float64 {
 		case in.Parameters[beta] == 0:
 			out[i] = 1
 		default:
-			out[i] = num.Pow(m[i], -in.Parameters[beta])
+			out[i] = num.Pow(math.Max(m[i], lightest), -in.Parameters[beta])
 		}
 	}
 	return out

@@ -1,0 +1,12 @@
+package ejection_test
+
+import (
+	"testing"
+
+	"wane/plugins/ejection"
+	"wane/sim/law/lawtest"
+)
+
+func TestKitContracting(t *testing.T) { lawtest.Run(t, ejection.Contracting()) }
+
+func TestKitBalanced(t *testing.T) { lawtest.Run(t, ejection.Balanced()) }

@@ -1,0 +1,10 @@
+package infall_test
+
+import (
+	"testing"
+
+	"wane/plugins/infall"
+	"wane/sim/law/lawtest"
+)
+
+func TestKitBranching(t *testing.T) { lawtest.Run(t, infall.Branching()) }

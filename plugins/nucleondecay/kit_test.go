@@ -1,0 +1,12 @@
+package nucleondecay_test
+
+import (
+	"testing"
+
+	"wane/plugins/nucleondecay"
+	"wane/sim/law/lawtest"
+)
+
+func TestKitGrandUnified(t *testing.T) { lawtest.Run(t, nucleondecay.GrandUnified()) }
+
+func TestKitStable(t *testing.T) { lawtest.Run(t, nucleondecay.Stable()) }

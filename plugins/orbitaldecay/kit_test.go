@@ -1,0 +1,10 @@
+package orbitaldecay_test
+
+import (
+	"testing"
+
+	"wane/plugins/orbitaldecay"
+	"wane/sim/law/lawtest"
+)
+
+func TestKitPeters(t *testing.T) { lawtest.Run(t, orbitaldecay.Peters()) }
