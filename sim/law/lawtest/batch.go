@@ -54,7 +54,34 @@ func (k *kit) entries(q law.Question, n int) []entry {
 		}
 		out[i] = e
 	}
-	return out
+	return k.possible(q, out)
+}
+
+// possible gives each remnant a kind that its star may leave: the host asks
+// what remains only of those that chance has picked.
+func (k *kit) possible(q law.Question, entries []entry) []entry {
+	if q.Name != "remain" || !k.card.Answers("die") {
+		return entries
+	}
+	die := k.question("die")
+	out, err := k.ask("die", lay(die, entries))
+	if err != nil {
+		return entries // reported where die is checked
+	}
+	for i := range entries {
+		chances := map[uint8]float64{}
+		for _, word := range die.Words {
+			chances[k.set.Kind(word)] = out.Values(law.ChanceColumn(word))[i]
+		}
+		if o := &entries[i].objects[0]; chances[o.kind] == 0 {
+			for _, word := range die.Words {
+				if kind := k.set.Kind(word); chances[kind] > 0 {
+					o.kind = kind
+				}
+			}
+		}
+	}
+	return entries
 }
 
 // loose draws the columns that belong to no object.

@@ -130,7 +130,7 @@ func (k *kit) corners(q law.Question) []entry {
 		}
 		out = append(out, e)
 	}
-	return append(out, k.otherStuff(q)...)
+	return k.possible(q, append(out, k.otherStuff(q)...))
 }
 
 // otherStuff are plausible objects made of every composition in turn.
