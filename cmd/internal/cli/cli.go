@@ -18,6 +18,7 @@ import (
 
 	"github.com/spf13/cobra"
 
+	"wane/cmd/internal/inquiry"
 	"wane/sim/law"
 )
 
@@ -80,7 +81,7 @@ func (p *Program) root() *cobra.Command {
 			"  wane ask evaporation/page mass=10Msun",
 		SilenceErrors:     true,
 		SilenceUsage:      true,
-		Args:              cobra.NoArgs,
+		Args:              unknownCommand,
 		RunE:              func(c *cobra.Command, _ []string) error { return c.Help() },
 		DisableAutoGenTag: true,
 	}
@@ -89,4 +90,18 @@ func (p *Program) root() *cobra.Command {
 	root.SetHelpTemplate(root.HelpTemplate() + exitCodes)
 	root.AddCommand(p.run(s), p.check(s), p.scenarios(s), p.laws(s), p.ask(s), p.schema(s), p.version(s))
 	return root
+}
+
+// unknownCommand is the fault of a first word that is no command.
+func unknownCommand(root *cobra.Command, args []string) error {
+	if len(args) == 0 {
+		return nil
+	}
+	var names []string
+	for _, c := range root.Commands() {
+		if c.IsAvailableCommand() {
+			names = append(names, c.Name())
+		}
+	}
+	return fmt.Errorf("unknown command %q%s", args[0], inquiry.Meant(args[0], names))
 }

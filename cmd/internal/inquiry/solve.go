@@ -154,21 +154,19 @@ func (a *asking) root(q law.Question, c column, grid, answers []float64) (float6
 	target := a.target.value
 	var brackets [][2]int
 	last := -1
-	equal := 0
+	flat := false
 	for i, v := range answers {
 		if math.IsNaN(v) {
 			continue
 		}
-		if v == target {
-			equal++
-		}
+		flat = flat || v == target && last >= 0 && answers[last] == target
 		if last >= 0 && (answers[last] < target) != (v < target) {
 			brackets = append(brackets, [2]int{last, i})
 		}
 		last = i
 	}
 	switch {
-	case equal > 1:
+	case flat:
 		return 0, fmt.Errorf("law %s: more than one %s leads to this %s", a.use.ID(), c.name, a.target.column.name)
 	case len(brackets) == 0:
 		return 0, a.beyond(c, answers)
