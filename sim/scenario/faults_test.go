@@ -44,9 +44,9 @@ x.toml:8:14: nucleon-decay.heat_share: "0.5 K" is a temperature: want a pure num
 x.toml:3:16: realisations: 0: want a whole number, 1 .. 1000000
 x.toml:4:8: seed: -1: want a whole number, 0 .. 18446744073709551615
 x.toml:6:11: galaxy.objects: 0: want 1 .. 1e15
-x.toml:7:10: galaxy.radius: "-8 kpc": want 0.001 pc .. 1e7 pc
-x.toml:8:16: galaxy.central-mass: "1e20 Msun": want 0 Msun .. 1e15 Msun
-x.toml:10:12: nucleon-decay.lifetime: "1e33 yr": want 2.512e34 yr .. 1e41 yr
+x.toml:7:10: galaxy.radius: "-8 kpc": want 0.001 .. 1e7 pc
+x.toml:8:16: galaxy.central-mass: "1e20 Msun": want 0 .. 1e15 Msun
+x.toml:10:12: nucleon-decay.lifetime: "1e33 yr": want 2.512e34 .. 1e41 yr
 x.toml:11:14: nucleon-decay.heat_share: 2: want 0.333333 .. 1`,
 		},
 		"not finite": {

@@ -214,6 +214,69 @@ func TestNever(t *testing.T) {
 	}
 }
 
+// A limit may be written as messages print it.
+func TestRoundedLimits(t *testing.T) {
+	s, _, err := Load(files(`base = "reach"`), "x.toml", registry(t), defaults(), Overrides{
+		Sets: []string{"nucleon-decay.heat_share=0.333333", "nucleon-decay.lifetime=2.511e34 yr"}})
+	if err != nil {
+		t.Fatal(err)
+	}
+	if p := s.Parameters["nucleon-decay"]; p["heat_share"] != 1./3 || p["lifetime"] != 34.4 {
+		t.Errorf("%v", p)
+	}
+}
+
+// The resolved text is frozen: digests in old manifests hang on it.
+func TestFrozenText(t *testing.T) {
+	s, _, err := Load(files("base = \"reach\"\nuntil = \"10^1100 yr\"\n[laws]\ninfall = \"none\"\n[populations.p]\nkinds = [\"star\", \"relic\"]\ntemperature = \"> 1.1 floor\""),
+		"x.toml", registry(t), defaults(), Overrides{Sets: []string{"nucleon-decay.lifetime=1e38yr"}})
+	if err != nil {
+		t.Fatal(err)
+	}
+	const want = `until = "10^1100 yr"
+realisations = 40
+seed = 7
+
+[galaxy]
+objects = 2e11
+sample = 100000
+radius = "10000 pc"
+central-mass = "4.3e6 Msun"
+
+[laws]
+substellar-limit = "fixed" # version 1
+lifetime = "table" # version 1
+remnant = "simple" # version 1
+white-dwarf-cooling = "mestel-debye" # version 1
+ejection = "still" # version 1
+infall = "none"
+nucleon-decay = "grand-unified" # version 1
+evaporation = "page" # version 1
+
+[parameters.remnant]
+scatter = "0.06 Msun"
+
+[parameters.nucleon-decay]
+lifetime = "10^38 yr"
+heat_share = "0.6666666666666666"
+gone = "transparent"
+
+[parameters.evaporation]
+spin = "0.5"
+
+[populations.p]
+kinds = ["star", "relic"]
+temperature = "> 1.1 floor"
+`
+	if d := cmp.Diff(want, s.Text()); d != "" {
+		t.Error(d)
+	}
+	// sha256sum of the text above.
+	if s.Digest != "16ee18a5740abc444f3b474d47ae12ce7348fb84149c266495cc925d9ef1184d" {
+		t.Errorf("digest %s", s.Digest)
+	}
+}
+
 func TestResolve(t *testing.T) {
 	s, _, err := Load(files(`base = "reach"`), "x.toml", registry(t), defaults(), Overrides{Sets: []string{"evaporation.spin=0.25"}})
 	if err != nil {
@@ -224,11 +287,11 @@ func TestResolve(t *testing.T) {
 		t.Fatal(err)
 	}
 	for _, want := range []string{
-		"galaxy.radius          10000 pc         reach.toml; allowed: 0.001 pc .. 1e7 pc",
+		"galaxy.radius          10000 pc         reach.toml; allowed: 0.001 .. 1e7 pc",
 		"until                  never            preset; allowed: >= 1 yr, or \"never\"",
 		"  spin                   0.25             --set evaporation.spin; allowed: 0 .. 1",
-		"  scatter                0.06 Msun        preset; allowed: 0 Msun .. 0.1 Msun\n      [assumption]",
-		"  lifetime               2e37 yr          reach.toml; allowed: 2.512e34 yr .. 1e41 yr",
+		"  scatter                0.06 Msun        preset; allowed: 0 .. 0.1 Msun\n      [assumption]",
+		"  lifetime               2e37 yr          reach.toml; allowed: 2.512e34 .. 1e41 yr",
 		"  gone                   transparent      preset; allowed: transparent, last-nucleon",
 		"  glowing-white-dwarfs     white-dwarf, temperature > 798 K (every run)",
 	} {

@@ -40,7 +40,11 @@ func (s *Scenario) write(reg *law.Registry) string {
 	w.line("\n[laws]")
 	for _, p := range law.Processes {
 		if name, ok := s.Laws[p.Name]; ok {
-			w.line("%s = %s # version %s", p.Name, text(name), s.versions[p.Name])
+			line := p.Name + " = " + text(name)
+			if v, ok := s.versions[p.Name]; ok {
+				line += " # version " + strings.Join(strings.Fields(v), " ")
+			}
+			w.line("%s", line)
 		}
 	}
 	for _, p := range law.Processes {

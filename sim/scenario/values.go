@@ -33,11 +33,26 @@ func (b *builder) quantity(key string, n *node, unit string, log10 bool, low, hi
 		b.fault(n.at, "%s: %v", key, err)
 		return 0, false
 	}
-	if !(v >= low && v <= high) {
+	if v = snap(v, low, high, log10); !(v >= low && v <= high) {
 		b.fault(n.at, "%s: %s: want %s", key, n.written(), b.span(unit, log10, low, high, ""))
 		return 0, false
 	}
 	return v, true
+}
+
+// snap takes a limit that was rounded in print for the limit itself: messages
+// show six digits of a number, and four of a power of ten.
+func snap(v, low, high float64, log10 bool) float64 {
+	for _, limit := range []float64{low, high} {
+		slack := 1e-6 * math.Abs(limit)
+		if log10 {
+			slack = 3e-4
+		}
+		if math.Abs(v-limit) <= slack && !(v >= low && v <= high) {
+			return limit
+		}
+	}
+	return v
 }
 
 func isInfinite(text string) bool {
@@ -76,7 +91,7 @@ func spanOf(unit string, log10 bool, low, high float64) string {
 	case math.IsInf(low, -1):
 		return "<= " + show(high, unit)
 	}
-	return show(low, unit) + " .. " + show(high, unit)
+	return show(low, "") + " .. " + show(high, unit)
 }
 
 // decimalText turns a TOML number into one that quantities read.

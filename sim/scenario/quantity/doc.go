@@ -15,7 +15,6 @@
 // and for a mass by E = m c^2 where a mass is wanted; nothing else is taken
 // for something that it is not.
 //
-// Sources of the factors: CODATA 2018 (c, k, e, u exact or recommended, G =
-// 6.6743e-11), IAU 2012 B2 (AU), IAU 2015 B3 (nominal solar and planetary GM,
-// radius, luminosity), Julian year.
+// The factors are those of package constant: CODATA 2022, IAU 2012 B2, 2015 B2
+// and B3, and the Julian year.
 package quantity

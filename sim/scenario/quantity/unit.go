@@ -6,6 +6,7 @@ import (
 	"strings"
 
 	"wane/sim/num"
+	"wane/sim/physics/constant"
 )
 
 // dimension counts powers of length, mass, time and temperature.
@@ -81,63 +82,6 @@ type Unit struct {
 	dim      dimension
 	scale    float64
 	exponent int
-}
-
-// symbol is a named unit. Those with prefixes take the SI ones.
-type symbol struct {
-	name     string
-	dim      dimension
-	scale    float64
-	exponent int
-	prefixes bool
-}
-
-// solarMass and the planets' from nominal GM (IAU 2015 B3) and G (CODATA 2018).
-const bigG = 6.6743 // 1e-11 m3 kg-1 s-2
-
-// symbols is a function so that nobody can change it.
-func symbols() []symbol {
-	return []symbol{
-		{"Msun", mass, 1.3271244 / bigG, 31, false},
-		{"solMass", mass, 1.3271244 / bigG, 31, false},
-		{"Mjup", mass, 1.2668653 / bigG, 28, false},
-		{"jupiterMass", mass, 1.2668653 / bigG, 28, false},
-		{"Mearth", mass, 3.986004 / bigG, 25, false},
-		{"earthMass", mass, 3.986004 / bigG, 25, false},
-		{"Rsun", length, 6.957, 8, false},
-		{"solRad", length, 6.957, 8, false},
-		{"Lsun", power, 3.828, 26, false},
-		{"solLum", power, 3.828, 26, false},
-		{"pc", length, 3.085677581491367, 16, true},
-		{"AU", length, 1.495978707, 11, false},
-		{"au", length, 1.495978707, 11, false},
-		{"ly", length, 9.4607304725808, 15, false},
-		{"lyr", length, 9.4607304725808, 15, false},
-		{"yr", time, 31557600, 0, true},
-		{"d", time, 86400, 0, false},
-		{"h", time, 3600, 0, false},
-		{"min", time, 60, 0, false},
-		{"s", time, 1, 0, true},
-		{"m", length, 1, 0, true},
-		{"g", mass, 1, -3, true},
-		{"t", mass, 1, 3, false},
-		{"u", mass, 1.66053906660, -27, false},
-		{"K", temperature, 1, 0, true},
-		{"J", energy, 1, 0, true},
-		{"eV", energy, 1.602176634, -19, true},
-		{"erg", energy, 1, -7, false},
-		{"W", power, 1, 0, true},
-		{"Hz", rate, 1, 0, true},
-		{"%", pure, 1, -2, false},
-	}
-}
-
-var prefixes = []struct {
-	name     string
-	exponent int
-}{
-	{"", 0}, {"k", 3}, {"M", 6}, {"G", 9}, {"T", 12}, {"P", 15}, {"E", 18}, {"Z", 21}, {"Y", 24},
-	{"c", -2}, {"m", -3}, {"u", -6}, {"n", -9}, {"p", -12}, {"f", -15}, {"a", -18},
 }
 
 // ParseUnit reads a unit. The empty text is the unit of a pure number.
@@ -276,55 +220,6 @@ func (p *unitParser) power() (int, error) {
 	return power, nil
 }
 
-func find(name string) (Unit, bool) {
-	all := symbols()
-	for _, s := range all {
-		if s.name == name {
-			return Unit{dim: s.dim, scale: s.scale, exponent: s.exponent}, true
-		}
-	}
-	for _, p := range prefixes[1:] {
-		base, ok := strings.CutPrefix(name, p.name)
-		if !ok {
-			continue
-		}
-		for _, s := range all {
-			if s.prefixes && s.name == base {
-				return Unit{dim: s.dim, scale: s.scale, exponent: s.exponent + p.exponent}, true
-			}
-		}
-	}
-	return Unit{}, false
-}
-
-// unknown names the unit it doesn't know and the one that may be meant.
-func unknown(name, rest string) error {
-	if name == "" {
-		return fmt.Errorf("%q is no part of a unit", rest)
-	}
-	plain := map[string]string{
-		"year": "yr", "years": "yr", "yrs": "yr", "a": "yr", "sec": "s", "second": "s", "seconds": "s", "day": "d", "days": "d",
-		"hour": "h", "hours": "h", "kelvin": "K", "parsec": "pc", "parsecs": "pc", "metre": "m", "meter": "m", "m_sun": "Msun",
-		"gram": "g", "kilogram": "kg", "sun": "Msun", "suns": "Msun", "lightyear": "ly", "watt": "W", "tonne": "t", "percent": "%",
-	}
-	if s, ok := plain[strings.ToLower(name)]; ok {
-		return fmt.Errorf("unknown unit %q (did you mean %q?)", name, s)
-	}
-	for _, s := range symbols() {
-		for _, p := range prefixes {
-			if (p.name == "" || s.prefixes) && strings.EqualFold(p.name+s.name, name) {
-				return fmt.Errorf("unknown unit %q (did you mean %q?)", name, p.name+s.name)
-			}
-		}
-	}
-	return fmt.Errorf("unknown unit %q", name)
-}
-
-// Physical constants that turn one dimension into another, SI.
-const (
-	lightSpeed = 299792458.0 // m/s, exact
-)
-
 // ratio is how many of unit to one of unit u is: factor * 10^exponent.
 func (u Unit) ratio(to Unit) (factor float64, exponent int, ok bool) {
 	factor, exponent = u.scale/to.scale, u.exponent-to.exponent
@@ -333,9 +228,9 @@ func (u Unit) ratio(to Unit) (factor float64, exponent int, ok bool) {
 	case pure:
 		return factor, exponent, true
 	case massEnergy: // an energy where a mass is wanted
-		return factor / (lightSpeed * lightSpeed), exponent, true
+		return factor / (constant.C * constant.C), exponent, true
 	case energy.plus(temperature, -1): // an energy where a temperature is wanted
-		return factor / 1.380649, exponent + 23, true // k, exact (CODATA 2018)
+		return factor / constant.Boltzmann, exponent, true
 	}
 	return 0, 0, false
 }
