@@ -15,6 +15,21 @@ import (
 	"wane/sim/physics/constant"
 )
 
+// Surface returns the energy per rest energy of what falls from rest far away
+// onto a body.
+//
+//	1/sqrt(1 - 2 G m/(r c^2))
+//
+// Units: m in solar masses, r in km. Domain: r above the horizon; NaN inside.
+// A body that stops what it captures is heated by this minus one times
+// [Power]'s rest energy even if nothing annihilates: a quarter for a neutron
+// star, nothing for a dwarf.
+//
+// Source: Baryakhtar et al. 2017. Checked by darkmatter.csv.
+func Surface(m, r float64) float64 {
+	return 1 / math.Sqrt(1-2*constant.GMSun*m/(r*1e3*constant.C*constant.C))
+}
+
 // Power returns the heat of captured and annihilated dark matter.
 //
 //	L = f pi R^2 (1 + v_esc^2/v^2) rho c^2 v,  v_esc^2 = 2 G m/R

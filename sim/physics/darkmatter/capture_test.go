@@ -26,6 +26,10 @@ func TestPublished(t *testing.T) {
 			row.Check(t, power()/constant.SunL)
 		case "temperature":
 			row.Check(t, temperature(power(), number("radius_km")))
+		case "temperature-with-kinetic":
+			row.Check(t, temperature(power()*Surface(number("mass_Msun"), number("radius_km")), number("radius_km")))
+		case "temperature-kinetic":
+			row.Check(t, temperature(power()*(Surface(number("mass_Msun"), number("radius_km"))-1), number("radius_km")))
 		case "temperature-of-1e-12-Lsun":
 			row.Check(t, temperature(1e-12*constant.SunL, number("radius_km")))
 		default:
