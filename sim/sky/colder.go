@@ -28,6 +28,7 @@ func (s *Sky) LogColderSince(logT float64) float64 {
 // colderSince does it for one piece that ends at s = until; -Inf if all of
 // the piece is colder.
 func (p *piece) colderSince(logT, logT0, until float64) float64 {
+	above := func(s float64) float64 { return p.temperature(s, logT0) - logT }
 	hot := func(s float64) bool { return p.temperature(s, logT0) >= logT }
 	if p.origin == zero && until < inf && hot(until) {
 		return until
@@ -38,9 +39,9 @@ func (p *piece) colderSince(logT, logT0, until float64) float64 {
 	n := sort.Search(len(p.coldAt), func(i int) bool { return p.coldAt[i] < logT })
 	switch {
 	case n == len(p.s): // the last node is warmer, the piece ends before it
-		return bisect(hot, p.s[n-1], until)
+		return crossing(above, p.s[n-1], until)
 	case n > 0:
-		return bisect(hot, p.s[n-1], math.Min(p.s[n], until))
+		return crossing(above, p.s[n-1], math.Min(p.s[n], until))
 	case p.origin != zero || logT == inf:
 		return zero
 	}
@@ -73,4 +74,29 @@ func bisect(hot func(float64) bool, low, high float64) float64 {
 			high = mid
 		}
 	}
+}
+
+// crossing returns where a falling function passes zero between low and high,
+// by false position with the Illinois step; by halving where it is infinite.
+func crossing(f func(float64) float64, low, high float64) float64 {
+	up, down := f(low), f(high)
+	for range 50 {
+		if up-down-(up-down) != 0 || up < 0 || down >= 0 {
+			break
+		}
+		mid := low + (high-low)*(up/(up-down))
+		if mid <= low || mid >= high {
+			return high
+		}
+		v := f(mid)
+		switch {
+		case math.Abs(v) < 1e-14:
+			return mid
+		case v > 0:
+			low, up, down = mid, v, down/2
+		default:
+			high, down, up = mid, v, up/2
+		}
+	}
+	return bisect(func(s float64) bool { return f(s) >= 0 }, low, high)
 }

@@ -57,7 +57,7 @@ func (r rates) ruling(g float64) (eps float64, ok bool) {
 		return 2, true
 	case r.curvature > 1-alone:
 		return 1, true
-	case r.dark > 1-alone && r.ps > 0:
+	case r.dark > 1-alone && r.ps > 1e-100: // with less, g/ps is nothing but rounding
 		eps = (g - 0.5*r.ps*(3*r.matter+4*r.radiation+2*r.curvature)) / (r.dark * r.ps)
 		if math.Abs(eps) < 1e-11 {
 			eps = 0
@@ -70,36 +70,36 @@ func (r rates) ruling(g float64) (eps float64, ok bool) {
 // agrees asks the law along the tail, as far as ln a is a number, on points
 // close enough not to step over a spell of dark energy.
 func (m *march) agrees(t *tail) (bool, error) {
-	var points []where
-	var at []float64
-	for d := 0.125; t.s+d <= tailFarthest; d += math.Max(0.125, d/16) {
+	const batch = 64
+	points, at := make([]where, 0, batch), make([]float64, 0, batch)
+	found := make([]density, batch)
+	rip := t.rip()
+	for d := 0.125; ; d += math.Max(0.125, d/16) {
 		s := t.s + d
-		if rip := t.rip(); rip < inf {
+		if rip < inf {
 			s = num.Add10(t.s, num.Sub10(rip, t.s)+num.Log10(-num.Expm1(-d)))
-			if d > 32 {
-				break
-			}
 		}
 		x := t.lnA(s)
-		if math.IsInf(x, 0) && t.logH != zero {
-			break
+		last := s > tailFarthest || rip < inf && d > 32 || math.IsInf(x, 0) && t.logH != zero
+		if !last {
+			points, at = append(points, m.where(s, x)), append(at, s)
 		}
-		points, at = append(points, m.where(s, x)), append(at, s)
-	}
-	found := make([]density, len(points))
-	if err := m.at(points, found); err != nil {
-		return false, err
-	}
-	for i, d := range found {
-		want := t.hubble(at[i])
-		if d.logH == want {
-			continue
+		if last || len(points) == batch {
+			if err := m.at(points, found); err != nil {
+				return false, err
+			}
+			for i, s := range at {
+				want := t.hubble(s)
+				if found[i].logH != want && !(math.Abs(found[i].logH-want) <= tailAgrees*(1+math.Abs(want-t.logH))) {
+					return false, nil
+				}
+			}
+			points, at = points[:0], at[:0]
 		}
-		if !(math.Abs(d.logH-want) <= tailAgrees*(1+math.Abs(want-t.logH))) {
-			return false, nil
+		if last {
+			return true, nil
 		}
 	}
-	return true, nil
 }
 
 // finish computes what needs the whole piece: the event horizon, backwards
@@ -112,7 +112,7 @@ func (p *piece) finish(logT0 float64) {
 		ps := p.x.slope[i] / num.Ln10
 		if i < n-1 && logR < inf {
 			h, dx := (p.s[i+1]-p.s[i])*num.Ln10, p.x.value[i+1]-p.x.value[i]
-			if dx > 5*stepX && p.warm[i] {
+			if ps > slavedAt && p.warm[i] {
 				logR = -p.logH.value[i] - num.Log10(1+p.logH.slope[i]/ps)
 			} else {
 				own := p.s[i] + num.Log10(light(h, dx, ps, p.x.slope[i+1]/num.Ln10))

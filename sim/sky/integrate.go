@@ -7,12 +7,13 @@ import (
 	"wane/sim/num"
 )
 
-// How finely the integration goes. Steps are bounded in ln since and in x;
+// How finely the integration goes. Steps are bounded in ln since, x and ln H;
 // the classical Runge-Kutta method of fourth order on them keeps every table
 // within 1e-6.
 const (
 	stepLog   = num.Ln10 / 64
 	stepX     = 0.04
+	stepH     = 0.2   // in ln H
 	slavedAt  = 100   // p above which K0..K2 follow H without delay
 	firstLnA  = -18.4 // ln a at the first node: 1e-8
 	maxNodes  = 40000
@@ -149,8 +150,11 @@ func (e *expansion) integrate(st start) (*piece, error) {
 				"want one within 10^%g yr", e.use.ID(), s, math.Max(st.origin, 0), maxSince)
 		}
 		step := stepLog
-		if slaved := r.ps > slavedAt && g > -0.2*r.ps; !slaved {
+		if !slaved(r.ps, g) {
 			step = math.Min(step, stepX/r.ps)
+		}
+		if r.ps > resting { // H may fall within much less than its own time
+			step = math.Min(step, stepH/math.Abs(g))
 		}
 		before, was := m.state, r
 		if err := m.step(s, step, r); err != nil {
@@ -160,9 +164,8 @@ func (e *expansion) integrate(st start) (*piece, error) {
 		if r, g, err = m.node(next); err != nil {
 			return nil, err
 		}
-		if r.ps > slavedAt && g > -0.2*r.ps {
-			m.follow(next, r, g)
-			r = m.equations(next, m.state, r.density)
+		if slaved(r.ps, g) {
+			r = m.follow(next, r, g)
 		}
 		logK3 = num.Add10(logK3, m.addedK3(s, next, step, before, was, r))
 		logEta = num.Add10(logEta, s-before[0]/num.Ln10+num.Log10(light(step, m.state[0]-before[0], was.ps, r.ps)))
@@ -198,12 +201,21 @@ func (m *march) step(s, h float64, k1 rates) error {
 	return nil
 }
 
+// slaved tells whether K0..K2 have no memory left. On the way to a rip they
+// keep it.
+func slaved(ps, g float64) bool { return ps > slavedAt && g > -0.2*ps }
+
 // follow sets K0..K2 to what they are for constant eps: once space has
 // doubled many times within the age, they have forgotten everything else.
-func (m *march) follow(s float64, r rates, g float64) {
+// Their slopes follow too; the equations would lose them to cancellation.
+func (m *march) follow(s float64, r rates, g float64) rates {
 	c0, c1, c2 := powers(g / r.ps)
 	h := num.Exp10(-r.logH - num.Add10(m.unit, s))
 	m.state[1], m.state[2], m.state[3] = c0*h, c1*h*h, c2*h*h*h
+	for j := 1; j < 4; j++ {
+		r.d[j] = m.state[j] * float64(j) * (g - r.sigma)
+	}
+	return r
 }
 
 // addedK3 returns log10 of 3 int K2 dt over a step: the trapezium rule with
@@ -219,6 +231,12 @@ func (m *march) addedK3(s0, s1, h float64, y0 [4]float64, r0, r1 rates) float64 
 // light returns int e^(-(x - x0)) dt over a step, in units of since at its
 // start: the proper way of light as seen from there.
 func light(h, dx, ps0, ps1 float64) float64 {
+	if dx != dx { // ln a has left the range of numbers
+		dx = 0
+	}
+	if ps0 > slavedAt { // where ln a is so large that it hides its growth
+		dx = math.Max(dx, h*(ps0+ps1)/2)
+	}
 	if dx > 5*stepX {
 		return -num.Expm1(-dx) * num.Expm1(h) / dx
 	}
