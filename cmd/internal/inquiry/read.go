@@ -65,6 +65,9 @@ func (a *asking) read(questions []law.Question, key, text string) error {
 	if want == "kind" {
 		return a.readWord(column{raw: "kind", name: "kind", list: "kind"}, text)
 	}
+	if want == "mass" && a.use.Card.Answers("shine") {
+		return a.readInput("shine", inputColumn("shine", "mass"), key, text)
+	}
 	for _, q := range questions {
 		for _, c := range a.outputs(q.Name) {
 			if c.list == "" && (canonical(c.name) == want || canonical(c.raw) == want || c.raw == "wait" && want == "lifetime") {

@@ -7,6 +7,7 @@ import (
 	"wane/sim/num"
 	"wane/sim/physics/constant"
 	"wane/sim/physics/structure"
+	"wane/sim/scenario/quantity"
 )
 
 // radius of an object, km; 0 where the kind has none.
@@ -43,13 +44,28 @@ func (a *asking) shining(out *Answer, q law.Question, answer law.Batch) {
 	if q.Name != "shine" {
 		return
 	}
-	r, ok := a.fillRadius(column{raw: "radius"}, 1, nil)
-	if !ok || !(r[0] > 0) {
+	kind, _, err := a.kind("kind")
+	if code, given := a.codes["kind"]; given {
+		kind, err = code, nil
+	}
+	if err != nil {
 		return
 	}
-	l := luminosity(r[0], answer.Columns[0].Values[0])
+	mass := math.NaN()
+	if g, given := a.numbers["mass"]; given {
+		mass = g.value
+		if !a.used["mass"] {
+			a.used["mass"] = true
+			out.Inputs = append(out.Inputs, Value{Name: "mass", Number: mass, Unit: "solMass", Why: "not read by this law"})
+		}
+	}
+	r := radius(a.kinds[kind], mass)
+	if !(r > 0) {
+		return
+	}
+	l := luminosity(r, answer.Columns[0].Values[0])
 	out.Outputs = append(out.Outputs, a.value(column{name: "luminosity", unit: "solLum", log10: true}, law.Column{Values: []float64{l}}))
-	delete(a.why, "radius")
+	out.Notes = append(out.Notes, "luminosity: of a sphere of "+quantity.Format(r, "km")+" at this temperature")
 }
 
 // remarks adds what the roles leave unsaid.
