@@ -7,10 +7,6 @@ import "math"
 // Ln10 is ln 10.
 const Ln10 = 2.302585092994045684017991454684364208
 
-func Exp(x float64) float64    { return math.Exp(x) }
-func Log(x float64) float64    { return math.Log(x) }
-func Log10(x float64) float64  { return math.Log(x) / Ln10 }
-func Exp10(x float64) float64  { return math.Exp(x * Ln10) }
 func Log1p(x float64) float64  { return math.Log1p(x) }
 func Expm1(x float64) float64  { return math.Expm1(x) }
 func Pow(x, y float64) float64 { return math.Pow(x, y) }
