@@ -1,0 +1,178 @@
+package engine
+
+import (
+	"fmt"
+	"strconv"
+
+	"wane/sim/law"
+	"wane/sim/physics/structure"
+)
+
+// foundChains follows prospects that change an object rather than end it: a
+// neutron star that becomes a relic, which then dissolves.
+func (a *asker) foundChains(c *columns, r *rows, first int, ps []prospect) error {
+	return a.chains(r, ps, func(i int) uint32 { return uint32(first + i) }, c)
+}
+
+const longestChain = 16
+
+func (a *asker) chains(r *rows, ps []prospect, id func(int) uint32, c *columns) error {
+	n := 0
+	for _, p := range ps {
+		if p.cause != 0 && p.kind != law.NoWord {
+			n++
+		}
+	}
+	if n == 0 {
+		return nil
+	}
+	next := newRows(n)
+	next.resize(n)
+	owner, dates := make([]uint32, 0, n), make([]float64, 0, n)
+	for i, p := range ps {
+		if p.cause == 0 || p.kind == law.NoWord {
+			continue
+		}
+		k := len(owner)
+		next.copyRow(k, r, i)
+		a.enter(next, k, p)
+		owner, dates = append(owner, id(i)), append(dates, p.date)
+	}
+	if c.chain == nil {
+		c.chain = map[uint32][]link{}
+	}
+	for depth := 0; len(owner) > 0; depth++ {
+		if depth == longestChain {
+			return fmt.Errorf("engine: object %d changes more than %d times by itself", owner[0], longestChain)
+		}
+		if err := a.linkUp(next, &owner, &dates, c); err != nil {
+			return err
+		}
+	}
+	return nil
+}
+
+// enter makes row k what prospect p makes of it.
+func (a *asker) enter(r *rows, k int, p prospect) {
+	r.kind[k], r.mass[k], r.birthMass[k] = p.kind, p.mass, p.mass
+	r.comp[k] = a.m.compositionOf(p.kind, r.comp[k])
+	r.gen[k]++
+}
+
+// linkUp adds one link for every row and shrinks the table to those that have
+// a further one.
+func (a *asker) linkUp(r *rows, owner *[]uint32, dates *[]float64, c *columns) error {
+	a.latest = never
+	d := *dates
+	found, err := a.prospects(r, func(i int) float64 { return d[i] })
+	if err != nil {
+		return err
+	}
+	ps := append([]prospect(nil), found...)
+	if err := a.wearBound(c, r, func(i int) float64 { return d[i] }); err != nil {
+		return err
+	}
+	s, err := a.exposures(r)
+	if err != nil {
+		return err
+	}
+	kept := 0
+	for i, p := range ps {
+		l := link{mass: r.mass[i], kind: r.kind[i], comp: r.comp[i], end: p.date, ended: p.cause}
+		for k := range a.m.Clocks {
+			l.s[k], l.sought[k] = s[k][i], a.soughts[k][i]
+		}
+		c.chain[(*owner)[i]] = append(c.chain[(*owner)[i]], l)
+		c.noteGas((*owner)[i], len(c.chain[(*owner)[i]]), p)
+		if p.cause == 0 || p.kind == law.NoWord {
+			continue
+		}
+		r.copyRow(kept, r, i)
+		a.enter(r, kept, p)
+		(*owner)[kept], (*dates)[kept] = (*owner)[i], p.date
+		kept++
+	}
+	r.resize(kept)
+	*owner, *dates = (*owner)[:kept], (*dates)[:kept]
+	return nil
+}
+
+// exposures asks every susceptibility of every row, one column a clock. For
+// encounter clocks it is what the object seeks; what is sought of it is in
+// a.soughts. Good until the next call.
+func (a *asker) exposures(r *rows) ([][]float64, error) {
+	for _, set := range []*[][]float64{&a.exposed, &a.soughts} {
+		*set = grown(*set, len(a.m.Clocks))
+		for k := range *set {
+			(*set)[k] = grown((*set)[k], r.n)
+			clear((*set)[k])
+		}
+	}
+	for _, x := range a.m.exposing {
+		s, pick := a.spoken(x.use, r)
+		if s.n == 0 {
+			continue
+		}
+		out, err := a.ask(x.use, "expose", s, drawU)
+		if err != nil {
+			return nil, err
+		}
+		for k := range x.use.Card.Clocks {
+			dst := a.exposed[x.first+k]
+			for i, v := range out.Columns[k].Values {
+				dst[at(pick, i)] = v
+			}
+		}
+		if x.use != a.m.encounter {
+			continue
+		}
+		for k := range x.use.Card.Clocks {
+			dst := a.soughts[x.first+k]
+			for i, v := range out.Columns[len(x.use.Card.Clocks)+k].Values {
+				dst[at(pick, i)] = v
+			}
+		}
+	}
+	return a.exposed, nil
+}
+
+// compositionOf is what an object of a kind is made of when a law does not
+// say: a relic is what it was, or what the law that adds it says.
+func (m *Model) compositionOf(kind, before uint8) uint8 {
+	switch kind {
+	case law.NeutronStar:
+		return law.Neutrons
+	case law.BlackHole, law.CentralHole:
+		return law.Pure
+	}
+	for _, u := range m.Set.All() {
+		for _, k := range u.Card.Kinds {
+			if m.Set.Kind(k.Name) == kind {
+				return k.Composition
+			}
+		}
+	}
+	return before
+}
+
+// radiusOf is the radius of an object in km.
+func radiusOf(kind uint8, mass float64) float64 {
+	switch kind {
+	case law.Star:
+		return structure.MainSequenceRadius(mass)
+	case law.WhiteDwarf:
+		return structure.WhiteDwarfRadius(mass)
+	case law.NeutronStar:
+		return structure.NeutronStarRadius(mass)
+	case law.BlackHole, law.CentralHole:
+		return structure.HoleRadius(mass)
+	}
+	return structure.BrownDwarfRadius(mass)
+}
+
+func num1(v float64) string { return strconv.FormatFloat(v, 'g', 6, 64) }
+
+// describe puts a row into words, for messages.
+func (r *rows) describe(i int, m *Model) string {
+	return fmt.Sprintf("%s, %.6g Msun", m.Set.Kinds[r.kind[i]], r.mass[i])
+}

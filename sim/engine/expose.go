@@ -1,0 +1,318 @@
+package engine
+
+import "wane/sim/law"
+
+// exposeAll asks the susceptibilities of both stages of every object and
+// fills the sums. In a compact run nothing is held: see enterQuiet.
+func (w *Workspace) exposeAll() error {
+	m, c := w.m, &w.c
+	if len(m.Clocks) == 0 || w.compact {
+		return nil
+	}
+	for stage := range 2 {
+		if w.s[stage] == nil {
+			w.s[stage] = make([][]float64, len(m.Clocks))
+		}
+		for k := range m.Clocks {
+			w.s[stage][k] = grown(w.s[stage][k], c.n)
+		}
+	}
+	w.meets.grow(w)
+	for first := 0; first < c.n; first += chunk {
+		n := min(chunk, c.n-first)
+		s0, s1, err := w.exposeChunk(first, n)
+		if err != nil {
+			return err
+		}
+		for k := range m.Clocks {
+			copy(w.s[0][k][first:], s0[k][:n])
+			copy(w.s[1][k][first:], s1[k][:n])
+		}
+	}
+	for k := range m.Clocks {
+		if m.sums[k] {
+			for i := range c.n {
+				w.env.add(m.slotSum(k), m.Weight*w.s[0][k][i])
+				if m.encounter != nil {
+					w.env.add(m.slotSought(k), m.Weight*w.meets.sought(w, k, uint32(i)))
+				}
+			}
+		}
+	}
+	return nil
+}
+
+// exposeChunk asks for objects first .. first+n-1: susceptibilities in the
+// first and in the second stage, and which way their hits are diverted.
+func (w *Workspace) exposeChunk(first, n int) (s0, s1 [][]float64, err error) {
+	m, c, a := w.m, &w.c, w.ask
+	r := w.table
+	r.resize(n)
+	stars := false
+	for i := range n {
+		j := first + i
+		r.id[i], r.gen[i] = uint32(j), 0
+		r.place[i], r.origin[i] = law.Bound, law.Founded
+		r.kind[i], r.comp[i], r.mass[i], r.birthMass[i] = c.kind0[j], law.Hydrogen, c.mass0[j], c.mass0[j]
+		r.metals[i] = c.metalsOf(j)
+		stars = stars || c.died[j] != 0
+	}
+	r.contiguous = true
+	answers, err := a.exposures(r)
+	if err != nil {
+		return nil, nil, err
+	}
+	if w.hold == nil {
+		w.hold = make([][]float64, len(m.Clocks))
+	}
+	for k := range answers {
+		w.hold[k] = append(w.hold[k][:0], answers[k]...)
+	}
+	w.meets.take(w, 0, first, r)
+	if err := w.divertChunk(0, first, r); err != nil {
+		return nil, nil, err
+	}
+	if !stars {
+		w.meets.take(w, 1, first, r)
+		return w.hold, w.hold, w.divertChunk(1, first, r)
+	}
+	for i := range n {
+		j := first + i
+		r.kind[i], r.comp[i], r.mass[i], r.birthMass[i] = c.kind1[j], c.comp1[j], c.mass1[j], c.mass1[j]
+	}
+	if answers, err = a.exposures(r); err != nil {
+		return nil, nil, err
+	}
+	w.meets.take(w, 1, first, r)
+	return w.hold, answers, w.divertChunk(1, first, r)
+}
+
+// divertChunk is divert for objects first .. first+n-1.
+func (w *Workspace) divertChunk(stage, first int, r *rows) error {
+	if len(w.m.diverts) == 0 {
+		return nil
+	}
+	return w.divert(stage, r, func(i int) int { return first + i })
+}
+
+// divert decides for each object and clock whether a hit in this stage would
+// be taken by a diverting law. The draw is the same for both stages.
+func (w *Workspace) divert(stage int, r *rows, id func(int) int) error {
+	for _, d := range w.m.diverts {
+		s, pick := w.ask.spoken(d.use, r)
+		if s.n == 0 {
+			continue
+		}
+		out, err := w.ask.ask(d.use, "divert", s, drawU)
+		if err != nil {
+			return err
+		}
+		stream := w.ask.streams[d.use.Card.Process]
+		for i, share := range out.Columns[d.column].Values {
+			u := stream.Uniform(uint64(s.id[i]), s.gen[i]&^(mergerGeneration-1), drawDivert+uint32(d.column))
+			if u < share {
+				w.c.turned[id(at(pick, i))] |= 1 << (2*d.clock + stage)
+			}
+		}
+	}
+	return nil
+}
+
+// exponential is the unit exponential that object i brings to clock k.
+func (w *Workspace) exponential(k int, i uint32, gen uint32) float64 {
+	clock := &w.m.Clocks[k]
+	return w.ask.streams[clock.Process].Exp(uint64(i), gen, drawClock+uint32(clock.index))
+}
+
+// step is one piece of the history of the readings: from date t on they grow
+// by rate.
+type step struct {
+	t             float64
+	reading, rate [maxClocks]float64
+}
+
+// note adds the present rates to the history of a quiet leg.
+func (w *Workspace) note() {
+	if n := len(w.steps); n > 0 && w.steps[n-1].t == w.base {
+		w.steps = w.steps[:n-1]
+	}
+	s := step{t: w.base}
+	copy(s.reading[:], w.reading)
+	copy(s.rate[:], w.env.Rates)
+	w.steps = append(w.steps, s)
+}
+
+// stepAt finds the piece of the history that holds date t.
+func (w *Workspace) stepAt(t float64) *step {
+	low, high := 0, len(w.steps)
+	for high-low > 1 {
+		if mid := (low + high) / 2; w.steps[mid].t <= t {
+			low = mid
+		} else {
+			high = mid
+		}
+	}
+	return &w.steps[low]
+}
+
+func (s *step) at(k int, t float64) float64 { return s.reading[k] + s.rate[k]*(t-s.t) }
+
+// readingOf is where clock k takes an object that brought e, under the history
+// of the leg, given that it has come to date t unhurt.
+func (w *Workspace) readingOf(k int, j int, e, s0, s1, t float64) float64 {
+	c := &w.c
+	b := w.stepAt(c.birth[j]).at(k, c.birth[j])
+	if c.died[j] == 0 {
+		return over(b, e, s1)
+	}
+	if c.death[j] > t {
+		return over(b, e, s0)
+	}
+	d := w.stepAt(c.death[j]).at(k, c.death[j])
+	return over(d, e-s0*(d-b), s1)
+}
+
+// over is reading + e/s, never when nothing can hit it.
+func over(reading, e, s float64) float64 {
+	if s == 0 {
+		return never
+	}
+	return reading + e/s
+}
+
+// enterQuiet splits the objects: those that no clock can reach before the last
+// star has died are left out of the leg, the rest are listed. It reports
+// whether that is worth while.
+func (w *Workspace) enterQuiet() (bool, error) {
+	m, c := w.m, &w.c
+	w.active = w.active[:0]
+	last := c.lastDeath
+	for k := range m.Clocks {
+		w.caps[k] = 2 * w.env.Rates[k] * last
+	}
+	if last >= w.horizon || last >= w.adriftAt || last >= w.endAt || last >= w.wear.at {
+		return false, nil
+	}
+	most := c.n/8 + 16
+	for first := 0; first < c.n; first += chunk {
+		n := min(chunk, c.n-first)
+		s0, s1, err := w.susceptibilities(first, n)
+		if err != nil {
+			return false, err
+		}
+		for k := range m.Clocks {
+			w.drawExponentials(k, first, n)
+		}
+		for i := range n {
+			j := first + i
+			hurt := false
+			for k := range m.Clocks {
+				if c.reading[k][j] <= max(s0[k][i], s1[k][i])*w.caps[k] {
+					hurt = true
+				}
+			}
+			switch {
+			case hurt:
+				w.active = append(w.active, uint32(j))
+				if w.compact {
+					w.hurt(j, s0, s1, i)
+				}
+			case w.compact:
+				for k := range m.Clocks {
+					c.reading[k][j] = w.readingOf(k, j, c.reading[k][j], s0[k][i], s1[k][i], never)
+				}
+			}
+		}
+		if len(w.active) > most {
+			return false, nil
+		}
+	}
+	return true, nil
+}
+
+// susceptibilities of a chunk, held or asked anew.
+func (w *Workspace) susceptibilities(first, n int) (s0, s1 [][]float64, err error) {
+	if w.compact {
+		return w.exposeChunk(first, n)
+	}
+	w.view[0], w.view[1] = w.view[0][:0], w.view[1][:0]
+	for k := range w.m.Clocks {
+		w.view[0] = append(w.view[0], w.s[0][k][first:first+n])
+		w.view[1] = append(w.view[1], w.s[1][k][first:first+n])
+	}
+	return w.view[0], w.view[1], nil
+}
+
+func (w *Workspace) drawExponentials(k, first, n int) {
+	clock := &w.m.Clocks[k]
+	w.ask.streams[clock.Process].Exps(w.c.reading[k][first:first+n], uint64(first), 0, drawClock+uint32(clock.index))
+}
+
+// settle ends a quiet leg at date t: every object left out gets the readings
+// it would have had.
+func (w *Workspace) settle(t float64) error {
+	m, c := w.m, &w.c
+	if !w.quiet {
+		return nil
+	}
+	w.quiet = false
+	steady := w.compact && len(w.steps) == 1 && t >= c.lastDeath
+	isActive := 0
+	for first := 0; first < c.n; first += chunk {
+		n := min(chunk, c.n-first)
+		var s0, s1 [][]float64
+		if !steady {
+			var err error
+			if s0, s1, err = w.susceptibilities(first, n); err != nil {
+				return err
+			}
+		}
+		for i := range n {
+			j := first + i
+			if isActive < len(w.active) && w.active[isActive] == uint32(j) {
+				isActive++
+				continue
+			}
+			w.stage[j] = w.stageAt(j, t)
+			if steady || w.stage[j] == 0 && !w.compact {
+				continue
+			}
+			for k := range m.Clocks {
+				e := c.reading[k][j]
+				if w.compact {
+					e = w.exponential(k, uint32(j), 0)
+				}
+				if w.stage[j] != 0 {
+					e = w.readingOf(k, j, e, s0[k][i], s1[k][i], t)
+				}
+				c.reading[k][j] = e
+			}
+		}
+	}
+	return nil
+}
+
+// stageAt is the stage of an object that nothing has hit by date t.
+func (w *Workspace) stageAt(j int, t float64) uint8 {
+	c := &w.c
+	switch {
+	case c.birth[j] > t:
+		return 0
+	case c.died[j] != 0 && c.death[j] > t:
+		return 1
+	}
+	return 2
+}
+
+// hurt keeps the susceptibilities of an object that is on the clocks in a
+// compact run.
+func (w *Workspace) hurt(j int, s0, s1 [][]float64, i int) {
+	var f few
+	for k := range w.m.Clocks {
+		f[0][k], f[1][k] = s0[k][i], s1[k][i]
+	}
+	w.few[uint32(j)] = f
+}
+
+// few holds susceptibilities of both stages of one object.
+type few [2][maxClocks]float64

@@ -1,0 +1,124 @@
+package engine
+
+import (
+	"wane/sim/law"
+	"wane/sim/num"
+)
+
+// fillClocks puts every born, bound object on the clocks, less the entries
+// that provably cannot fire first: entry j of an object is left out when
+//
+//	x_j - L_j > rho_jk (x_k - L_k)
+//
+// for the clock k that would take it first at present rates, rho_jk being a
+// bound on rate_j / rate_k. While the bound holds, clock j advances at most
+// rho_jk times as far as clock k, so k takes the object first. proveBounds
+// checks before every window that the bound will hold through it, and fills
+// the clocks anew when it would not.
+func (w *Workspace) fillClocks() error {
+	m, c := w.m, &w.c
+	n := len(m.Clocks)
+	for k := range w.clocks {
+		w.clocks[k].reset()
+	}
+	w.setBounds()
+	for i := range uint32(c.n) {
+		if c.place[i] != law.Bound || w.stage[i] == 0 || w.stage[i]&waiting != 0 {
+			continue
+		}
+		if n == 1 {
+			if x := c.reading[0][i]; x < never {
+				w.clocks[0].put(x, i)
+			}
+			continue
+		}
+		var left [maxClocks]float64
+		first, soonest := 0, never
+		for k := range n {
+			left[k] = c.reading[k][i] - w.readingAt(k, w.t)
+			if r := w.env.Rates[k]; r > 0 && left[k]/r < soonest {
+				first, soonest = k, left[k]/r
+			}
+		}
+		for k := range n {
+			if x := c.reading[k][i]; x < never && (k == first || !(left[k] > w.rho[k][first]*left[first])) {
+				w.clocks[k].put(x, i)
+			}
+		}
+	}
+	for k := range w.clocks {
+		w.clocks[k].sort()
+	}
+	return nil
+}
+
+// boundSlack is what a bound on a ratio of rates allows beyond the present.
+const boundSlack = 1.05
+
+// setBounds chooses the bounds on ratios of rates: the present one with some
+// slack where the ratio falls as the number bound falls, none where it rises
+// or has broken its bound before.
+func (w *Workspace) setBounds() {
+	n := len(w.m.Clocks)
+	for j := range n {
+		for k := range n {
+			w.rho[j][k] = never
+			if j == k || w.broken[j][k] || w.env.Rates[k] == 0 {
+				continue
+			}
+			w.rho[j][k] = w.ratioBound(j, k) * boundSlack
+			if w.fallsSlower(j, k) {
+				w.rho[j][k] = never
+			}
+		}
+	}
+}
+
+// fallsSlower tells whether rate j / rate k rises as the galaxy dissolves.
+func (w *Workspace) fallsSlower(j, k int) bool {
+	for d, slot := range w.m.declared {
+		if slot == slotNumber && w.env.slope[j][d] < w.env.slope[k][d] {
+			return true
+		}
+	}
+	return false
+}
+
+// ratioBound bounds rate j / rate k from now to the end of the present window:
+// no declared value moves by more than 1 % before the next refresh.
+func (w *Workspace) ratioBound(j, k int) float64 {
+	e := w.env
+	span := 0.0
+	for d := range w.m.declared {
+		if s := e.slope[j][d] - e.slope[k][d]; s > 0 {
+			span += s
+		} else {
+			span -= s
+		}
+	}
+	return e.rate0[j] / e.rate0[k] * num.Exp(span*1.02*moveToRefresh)
+}
+
+// proveBounds checks, after a refresh, that the bounds hold through the coming
+// window.
+func (w *Workspace) proveBounds() error {
+	n := len(w.m.Clocks)
+	if w.quiet || n < 2 {
+		return nil
+	}
+	again := false
+	for j := range n {
+		for k := range n {
+			if j == k || w.rho[j][k] == never {
+				continue
+			}
+			if w.env.rate0[k] == 0 && w.env.rate0[j] > 0 || w.env.rate0[k] > 0 && w.ratioBound(j, k) > w.rho[j][k] {
+				w.broken[j][k], again = true, true
+			}
+		}
+	}
+	if again {
+		return w.fillClocks()
+	}
+	return nil
+}

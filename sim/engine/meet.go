@@ -1,0 +1,416 @@
+package engine
+
+import (
+	"fmt"
+	"slices"
+	"strings"
+
+	"wane/sim/law"
+	"wane/sim/num"
+)
+
+// meetings are the encounters of one realisation.
+type meetings struct {
+	s       [2][][]float64 // what is sought of each object, by stage and clock
+	ids     []uint32       // bound and born at the last refresh
+	cum     [][]float64    // running totals of what is sought, by clock
+	pairs   []pair
+	journal []transition
+}
+
+// pair is two objects waiting for a refresh.
+type pair struct {
+	seeker, partner uint32
+	clock           int
+	date            float64
+}
+
+// maxTries bounds the search for a partner: when nearly all that was sought
+// has left, nobody is met.
+const maxTries = 4096
+
+func (x *meetings) begin() { x.pairs, x.journal, x.ids = x.pairs[:0], x.journal[:0], x.ids[:0] }
+
+func (x *meetings) scale(f float64) {
+	for i := range x.pairs {
+		x.pairs[i].date *= f
+	}
+}
+
+func (x *meetings) grow(w *Workspace) {
+	if w.m.encounter == nil {
+		return
+	}
+	for stage := range x.s {
+		x.s[stage] = grown(x.s[stage], len(w.m.Clocks))
+		for k := range x.s[stage] {
+			x.s[stage][k] = grown(x.s[stage][k], w.c.n)
+		}
+	}
+}
+
+// take keeps what is sought of a chunk, from the last exposures.
+func (x *meetings) take(w *Workspace, stage, first int, r *rows) {
+	if w.m.encounter == nil || x.s[stage] == nil {
+		return
+	}
+	for k := range w.m.Clocks {
+		copy(x.s[stage][k][first:first+r.n], w.ask.soughts[k][:r.n])
+	}
+}
+
+func (x *meetings) set(stage, k int, i uint32, sought float64) {
+	if x.s[stage] != nil {
+		x.s[stage][k][i] = sought
+	}
+}
+
+// sought is how much clock k seeks object i as it now is.
+func (x *meetings) sought(w *Workspace, k int, i uint32) float64 {
+	switch s := w.stageOf(i); {
+	case s <= 1:
+		return x.s[0][k][i]
+	case s == 2:
+		return x.s[1][k][i]
+	default:
+		return w.c.chain[i][s-3].sought[k]
+	}
+}
+
+// recount tabulates, at a refresh, who can be met.
+func (x *meetings) recount(w *Workspace) {
+	x.ids = x.ids[:0]
+	x.cum = grown(x.cum, len(w.m.Clocks))
+	for k := range x.cum {
+		x.cum[k] = x.cum[k][:0]
+	}
+	for i := range uint32(w.c.n) {
+		if w.c.place[i] == law.Bound && w.bornBy(i) {
+			x.ids = append(x.ids, i)
+		}
+	}
+	for k := range w.m.Clocks {
+		if w.m.Clocks[k].Fate != law.FateMeet {
+			continue
+		}
+		sum := 0.0
+		for _, i := range x.ids {
+			sum += x.sought(w, k, i)
+			x.cum[k] = append(x.cum[k], sum)
+		}
+	}
+}
+
+// bornBy tells whether object i exists; in a quiet leg objects off the clocks
+// are looked up by date.
+func (w *Workspace) bornBy(i uint32) bool {
+	if w.quiet && !w.isActive[i] {
+		return w.c.birth[i] <= w.t
+	}
+	return w.stage[i] != 0
+}
+
+// meet lets object i, whose clock k has fired, find a partner.
+func (w *Workspace) meet(k int, i uint32, t float64) error {
+	x := &w.meets
+	cum := x.cum[k]
+	gen := w.generationOf(i)
+	if n := len(cum); n > 1 && cum[n-1] > 0 {
+		stream := w.ask.streams[w.m.Clocks[k].Process]
+		for try := range uint32(maxTries) {
+			u := stream.Uniform(uint64(i), gen, drawSeek+try) * cum[n-1]
+			at, _ := slices.BinarySearch(cum, u)
+			j := x.ids[min(at, n-1)]
+			if j == i || w.c.place[j] != law.Bound || w.stage[j]&waiting != 0 || x.sought(w, k, j) == 0 {
+				continue
+			}
+			if w.quiet && !w.isActive[j] {
+				w.settleOne(j)
+			}
+			w.stage[i] |= waiting
+			w.stage[j] |= waiting
+			x.pairs = append(x.pairs, pair{i, j, k, t})
+			w.awaiting += 2
+			return w.changed(t)
+		}
+	}
+	// Nobody left to meet: the clock has nothing more for this object.
+	w.c.reading[k][i] = never
+	return nil
+}
+
+// settleOne puts an object that a quiet leg left out into its stage, so that
+// it can be met.
+func (w *Workspace) settleOne(j uint32) {
+	w.isActive[j] = true
+	at, _ := slices.BinarySearch(w.active, j)
+	w.active = slices.Insert(w.active, at, j)
+	w.stage[j] = w.stageAt(int(j), w.t)
+	for k := range w.m.Clocks {
+		e := w.c.reading[k][j]
+		w.c.reading[k][j] = w.readingOf(k, int(j), e, w.s[0][k][j], w.s[1][k][j], w.t)
+	}
+}
+
+// resolve asks meet about all waiting pairs and brings in what comes of them.
+func (w *Workspace) resolve(t float64) error {
+	pairs := append([]pair(nil), w.meets.pairs...)
+	w.meets.pairs, w.awaiting = w.meets.pairs[:0], 0
+	out, err := w.askMeet(pairs)
+	if err != nil {
+		return err
+	}
+	u := w.m.encounter
+	var back []uint32
+	for p, pr := range pairs {
+		word := u.Card.Outcomes[out.Columns[0].Words[p]].Word
+		cause := w.m.cause(u.Card.Process, word)
+		before := w.massOf(pr.seeker) + w.massOf(pr.partner)
+		gas := out.Columns[7].Values[p]
+		after := gas
+		var kinds, comps [2]uint8
+		var masses [2]float64
+		for s := range 2 {
+			kinds[s], masses[s], comps[s] = out.Columns[1+3*s].Words[p], out.Columns[2+3*s].Values[p], out.Columns[3+3*s].Words[p]
+			if kinds[s] != law.NoWord {
+				after += masses[s]
+			}
+		}
+		if after > before*(1+1e-12) {
+			return &law.Fault{Law: u.ID(), Question: "meet", Row: p, Column: "mass_1",
+				Object: fmt.Sprintf("%s and %s", w.words(pr.seeker), w.words(pr.partner)),
+				Got:    num1(after) + " Msun in all", Want: "no more than " + num1(before) + " Msun"}
+		}
+		w.books.met(w.m, gas, before-after)
+		for s, i := range [2]uint32{pr.seeker, pr.partner} {
+			if w.meetOne(i, pr.date, cause, kinds[s], masses[s], comps[s]) {
+				back = append(back, i)
+			}
+		}
+	}
+	if len(back) == 0 {
+		return nil
+	}
+	slices.Sort(back)
+	return w.rejoin(back, t)
+}
+
+func (w *Workspace) words(i uint32) string {
+	return fmt.Sprintf("%s of %.6g Msun", w.m.Set.Kinds[w.kindOf(i)], w.massOf(i))
+}
+
+// askMeet asks about pairs, one row each.
+func (w *Workspace) askMeet(pairs []pair) (law.Batch, error) {
+	u := w.m.encounter
+	var ids [2][]uint32
+	for _, p := range pairs {
+		ids[0], ids[1] = append(ids[0], p.seeker), append(ids[1], p.partner)
+	}
+	both := [2]*rows{w.rowsOf(ids[0]), w.rowsOf(ids[1])}
+	in := law.Batch{Rows: len(pairs)}
+	for _, name := range inputsOf(u, "meet") {
+		base, side := name, 0
+		if s, ok := strings.CutSuffix(name, "_1"); ok {
+			base = s
+		} else if s, ok := strings.CutSuffix(name, "_2"); ok {
+			base, side = s, 1
+		}
+		in.Columns = append(in.Columns, w.ask.column(u, name, base, both[side], drawMeet))
+	}
+	return u.Ask("meet", in)
+}
+
+// meetOne ends the present life of an object that has met another, and begins
+// the next if it survives.
+func (w *Workspace) meetOne(i uint32, date float64, cause, kind uint8, mass float64, comp uint8) bool {
+	c := &w.c
+	w.subtract(i)
+	from := stateOf(w.kindOf(i), law.Bound, w.originOf(i))
+	at := w.coded(date)
+	w.flush(i, at)
+	w.stage[i] &^= waiting
+	if kind == law.NoWord {
+		w.meets.journal = append(w.meets.journal, transition{at, i, from, stateGone, cause})
+		c.place[i] = placeGone
+		c.consume(i)
+		w.bound--
+		return false
+	}
+	if kind != from.kind() || mass > w.massOf(i)*(1+1e-12) {
+		c.origin[i] = law.Merged
+	}
+	c.generation[i] = (w.generationOf(i)/mergerGeneration + 1) * mergerGeneration
+	c.kind0[i], c.mass0[i] = kind, mass
+	c.kind1[i], c.mass1[i], c.comp1[i] = kind, mass, comp
+	c.birth[i], c.death[i], c.died[i] = at, at, 0
+	delete(c.chain, i)
+	c.continued[i] = true
+	w.stage[i] = 2
+	to := stateOf(kind, law.Bound, c.origin[i])
+	w.meets.journal = append(w.meets.journal, transition{at, i, from, to, cause})
+	return true
+}
+
+// rejoin founds the lives of products and puts them on the clocks at date t.
+func (w *Workspace) rejoin(ids []uint32, t float64) error {
+	c, a := &w.c, w.ask
+	r := w.rowsOf(ids)
+	for j, i := range ids {
+		r.kind[j], r.mass[j], r.comp[j], r.birthMass[j] = c.kind0[i], c.mass0[i], c.comp1[i], c.mass0[i]
+		r.gen[j] = c.generation[i]
+	}
+	if err := w.resort(ids, r); err != nil {
+		return err
+	}
+	s0, err := a.exposures(r)
+	if err != nil {
+		return err
+	}
+	w.keepSusceptibilities(0, ids, s0)
+	if err := w.divertRows(0, ids, r); err != nil {
+		return err
+	}
+	if err := w.reliveStars(ids, r); err != nil {
+		return err
+	}
+	s1, err := a.exposures(r)
+	if err != nil {
+		return err
+	}
+	w.keepSusceptibilities(1, ids, s1)
+	if err := w.divertRows(1, ids, r); err != nil {
+		return err
+	}
+	if err := w.reprospect(ids, r); err != nil {
+		return err
+	}
+	for _, i := range ids {
+		w.count(i, +1)
+		for k := range w.m.Clocks {
+			c.reading[k][i] = over(w.readingAt(k, t), w.exponential(k, i, c.generation[i]), w.sus(k, i))
+			w.enqueue(k, i)
+		}
+		if c.died[i] != 0 {
+			w.scheduleDeath(i, func(_ float64, id uint32) { w.schedule.push(w.years(c.death[i]), id) })
+		} else {
+			w.scheduleEnd(i)
+		}
+		w.wear.enter(w, i, t)
+		if !w.endsScheduled {
+			w.endAt = min(w.endAt, w.linear(c.end[i]))
+		}
+	}
+	w.wear.at = min(w.wear.at, w.linear(c.wearAt))
+	return nil
+}
+
+// resort lets sort tell stars from brown dwarfs among products.
+func (w *Workspace) resort(ids []uint32, r *rows) error {
+	out, err := w.ask.ask(w.m.sort, "sort", r, drawU)
+	if err != nil {
+		return err
+	}
+	for j, i := range ids {
+		if k := r.kind[j]; k != law.Star && k != law.BrownDwarf {
+			continue
+		}
+		kind := out.Columns[0].Words[j]
+		if kind != r.kind[j] {
+			w.meets.rename(i, kind)
+		}
+		r.kind[j] = kind
+		w.c.kind0[i], w.c.kind1[i] = kind, kind
+		if kind == law.Star {
+			w.stage[i] = 1
+		}
+	}
+	return nil
+}
+
+// rename mends the kind in the journal's last entry of object i.
+func (x *meetings) rename(i uint32, kind uint8) {
+	for n := len(x.journal) - 1; n >= 0; n-- {
+		if t := &x.journal[n]; t.id == i {
+			t.to = stateOf(kind, law.Bound, uint8(t.to)%2)
+			return
+		}
+	}
+}
+
+// reliveStars asks how the stars among products live and what they leave; r
+// becomes the table of second stages.
+func (w *Workspace) reliveStars(ids []uint32, r *rows) error {
+	c, a, m := &w.c, w.ask, w.m
+	stars, pick := a.spoken(m.live, r)
+	if stars.n > 0 {
+		out, err := a.ask(m.live, "live", stars, drawU)
+		if err != nil {
+			return err
+		}
+		for i, wait := range out.Columns[0].Values {
+			id := ids[at(pick, i)]
+			c.death[id] = addCoded(c.birth[id], wait)
+		}
+		for _, u := range m.ends {
+			if err := a.remnantsOf(c, r, u, func(i int) int { return int(ids[i]) }); err != nil {
+				return err
+			}
+		}
+	}
+	for j, i := range ids {
+		if c.died[i] != 0 {
+			r.kind[j], r.mass[j], r.comp[j], r.birthMass[j] = c.kind1[i], c.mass1[i], c.comp1[i], c.mass1[i]
+			r.gen[j]++
+		}
+	}
+	return nil
+}
+
+// addCoded adds a log10 wait to a coded date.
+func addCoded(date, wait float64) float64 {
+	if date < 0 {
+		return -later(-date, wait)
+	}
+	if d := date + num.Exp10(wait); d < 1e300 {
+		return d
+	}
+	return -later(num.Log10(date), wait)
+}
+
+func (w *Workspace) keepSusceptibilities(stage int, ids []uint32, s [][]float64) {
+	for k := range w.m.Clocks {
+		for j, i := range ids {
+			w.s[stage][k][i] = s[k][j]
+			w.meets.set(stage, k, i, w.ask.soughts[k][j])
+		}
+	}
+}
+
+func (w *Workspace) divertRows(stage int, ids []uint32, r *rows) error {
+	for j := range ids {
+		for _, d := range w.m.diverts {
+			w.c.turned[ids[j]] &^= 1 << (2*d.clock + stage)
+		}
+	}
+	return w.divert(stage, r, func(i int) int { return int(ids[i]) })
+}
+
+// reprospect asks what ends the second stage of products.
+func (w *Workspace) reprospect(ids []uint32, r *rows) error {
+	c, a := &w.c, w.ask
+	since := func(j int) float64 { return w.logDate(c.death[ids[j]]) }
+	a.latest = never
+	if err := a.wearBound(c, r, since); err != nil {
+		return err
+	}
+	ps, err := a.prospects(r, since)
+	if err != nil {
+		return err
+	}
+	ps = append([]prospect(nil), ps...)
+	for j, p := range ps {
+		c.end[ids[j]], c.ended[ids[j]] = p.date, p.cause
+		c.noteGas(ids[j], 0, p)
+	}
+	return a.chains(r, ps, func(j int) uint32 { return ids[j] }, c)
+}

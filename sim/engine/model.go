@@ -1,0 +1,352 @@
+package engine
+
+import (
+	"errors"
+	"fmt"
+	"math"
+
+	"wane/sim/draw"
+	"wane/sim/galaxy"
+	"wane/sim/law"
+)
+
+// Setup is everything a run needs.
+type Setup struct {
+	Set         *law.Set
+	Sky         Skies   // nil: no sky (nothing warms, nothing ends)
+	Objects     int     // simulated
+	Real        float64 // real objects they stand for; equal to Objects: whole
+	Radius      float64 // pc, half-mass radius at the start
+	CentralMass float64 // solMass
+	Until       float64 // log10 yr; +Inf: never
+	Seed        uint64
+	Populations []galaxy.Population
+}
+
+// Skies draws the sky of one realisation.
+type Skies interface {
+	Draw(seed, realisation uint64) (Sky, error)
+}
+
+// Sky is what the engine asks of the background.
+type Sky interface {
+	LogTemperature(log10Date float64) float64        // log10 K
+	LogColderSince(log10Temperature float64) float64 // log10 date; +Inf never, -Inf always
+	End() (log10Date float64, cause string)          // +Inf: none
+	Adrift() float64                                 // log10 date, +Inf: none
+}
+
+// Model is a compiled Setup: laws sorted by role, clocks numbered, causes
+// listed. It is read-only and shared by all workers.
+type Model struct {
+	Setup
+	Weight float64 // real objects per simulated one
+	Clocks []Clock
+	Causes []Cause // by code; code 0 is none
+
+	mass, birth, metals, sort, live *law.Use
+	ends                            []*law.Use // answer die and remain
+	exposing                        []exposer
+	diverts                         []diverter
+	wearing, turning                []*law.Use
+	encounter                       *law.Use
+	cooling                         []*law.Use
+	warm                            *law.Use
+	frame                           *law.Use
+	rateAsks                        []rateAsk
+	declared                        []int  // slots the rates depend on
+	timed                           []bool // per declared: moves with time alone
+	timedSlots                      []int
+	sums                            []bool // per clock: its sum is declared
+	deathsMatter                    bool   // a declared value changes when a star dies
+	stopFate                        law.Fate
+	stopCause, allAdrift            uint8
+	populations                     []population
+	thresholds                      [][]threshold // [wearing law][kind]: mass, becomes, cause
+	causeOf                         map[Cause]uint8
+}
+
+// Clock is a clock of the run.
+type Clock struct {
+	law.Clock
+	Process string
+	use     *law.Use
+	index   int // within its law
+	cause   uint8
+}
+
+// Cause is why an object left: the process and its word.
+type Cause struct{ Process, Outcome string }
+
+type exposer struct {
+	use   *law.Use
+	first int // index of its first clock
+}
+
+type diverter struct {
+	use    *law.Use
+	clock  int // whose firing it takes
+	column int // in its answer
+	cause  uint8
+}
+
+type threshold struct {
+	mass    float64
+	kind    uint8 // becomes; law.NoWord: gone
+	cause   uint8
+	applies bool
+}
+
+// Compile sorts a setup's laws by role and checks that the engine can run it.
+func Compile(s Setup) (*Model, error) {
+	if s.Objects < 0 || s.Objects > maxObjects {
+		return nil, fmt.Errorf("engine: %d objects: want 0 .. %d", s.Objects, maxObjects)
+	}
+	m := &Model{Setup: s, Causes: []Cause{{}}, causeOf: map[Cause]uint8{}, Weight: 1}
+	if s.Objects > 0 {
+		m.Weight = s.Real / float64(s.Objects)
+	}
+	of := func(p string) *law.Use { return s.Set.Of(p) }
+	m.mass, m.birth, m.metals, m.sort = of("mass-function"), of("star-formation"), of("metals"), of("substellar-limit")
+	m.live, m.warm = of("lifetime"), active(of("warmth"))
+	for _, need := range []struct {
+		use  *law.Use
+		name string
+	}{{m.mass, "mass-function"}, {m.birth, "star-formation"}, {m.metals, "metals"}, {m.sort, "substellar-limit"}, {m.live, "lifetime"}} {
+		if need.use == nil {
+			return nil, fmt.Errorf("engine: no law of process %s", need.name)
+		}
+	}
+	for _, u := range s.Set.OfRole(law.Stellar) {
+		if u.Card.Answers("die") {
+			m.ends = append(m.ends, u)
+		}
+	}
+	m.wearing = actives(s.Set.OfRole(law.Wearing))
+	m.turning = actives(s.Set.OfRole(law.Turning))
+	m.cooling = actives(s.Set.OfRole(law.Cooling))
+	m.compileCauses()
+	return m, errors.Join(m.compileClocks(), m.compileThresholds(), m.compilePopulations())
+}
+
+// maxObjects is the most the individuals engine holds.
+const maxObjects = 1 << 26
+
+func active(u *law.Use) *law.Use {
+	if u == nil || u.Card.Idle {
+		return nil
+	}
+	return u
+}
+
+func actives(uses []*law.Use) []*law.Use {
+	var out []*law.Use
+	for _, u := range uses {
+		if !u.Card.Idle {
+			out = append(out, u)
+		}
+	}
+	return out
+}
+
+// cause returns the code of a cause, listing it when it is new.
+func (m *Model) cause(process, outcome string) uint8 {
+	c := Cause{process, outcome}
+	if code, ok := m.causeOf[c]; ok {
+		return code
+	}
+	code := uint8(len(m.Causes))
+	m.Causes = append(m.Causes, c)
+	m.causeOf[c] = code
+	return code
+}
+
+// compileCauses lists the words that laws answer with, so that none is new in
+// a run: workers share the list.
+func (m *Model) compileCauses() {
+	for _, u := range m.ends {
+		for _, word := range wordsOf(u, "die") {
+			m.cause(u.Card.Process, becameWord+word)
+		}
+	}
+	for _, u := range append(actives(m.Set.OfRole(law.Encounter)), m.turning...) {
+		for _, o := range u.Card.Outcomes {
+			m.cause(u.Card.Process, o.Word)
+		}
+	}
+	for _, u := range m.cooling {
+		m.cause(u.Card.Process, cooledWord)
+	}
+	m.cause("warmth", cooledWord)
+}
+
+const (
+	becameWord = "became "
+	cooledWord = "cooled"
+)
+
+func (m *Model) compileClocks() error {
+	var dynamics []*law.Use
+	for _, role := range []law.Role{law.Dynamics, law.Encounter} {
+		for _, u := range actives(m.Set.OfRole(role)) {
+			dynamics = append(dynamics, u)
+			if u.Card.Frame {
+				m.frame, m.stopFate = u, u.Card.StopFate
+				m.stopCause = m.cause(u.Card.Process, u.Card.StopOutcome)
+			}
+			if role == law.Encounter {
+				m.encounter = u
+				m.deathsMatter = true
+			}
+			for i, c := range u.Card.Clocks {
+				m.Clocks = append(m.Clocks, Clock{Clock: c, Process: u.Card.Process, use: u, index: i,
+					cause: m.cause(u.Card.Process, c.Outcome)})
+			}
+		}
+	}
+	m.allAdrift = m.cause("dark-energy-decay", "all-adrift")
+	first := 0
+	for _, u := range dynamics {
+		if u.Card.Answers("expose") && len(u.Card.Clocks) > 0 {
+			m.exposing = append(m.exposing, exposer{u, first})
+		}
+		if err := m.compileDiverts(u); err != nil {
+			return err
+		}
+		first += len(u.Card.Clocks)
+	}
+	return m.compileRates(dynamics)
+}
+
+func (m *Model) compileDiverts(u *law.Use) error {
+	if !u.Card.Answers("divert") {
+		return nil
+	}
+	for i, word := range wordsOf(u, "divert") {
+		clock := -1
+		for k, c := range m.Clocks {
+			if c.Name == word {
+				clock = k
+			}
+		}
+		if clock < 0 {
+			continue // that clock's law is not in this run
+		}
+		outcome := "swallowed"
+		if i < len(u.Card.Outcomes) {
+			outcome = u.Card.Outcomes[i].Word
+		}
+		m.diverts = append(m.diverts, diverter{u, clock, i, m.cause(u.Card.Process, outcome)})
+	}
+	return nil
+}
+
+func (m *Model) compileRates(dynamics []*law.Use) error {
+	first := 0
+	m.sums = make([]bool, len(m.Clocks))
+	declare := func(slot int) {
+		for _, d := range m.declared {
+			if d == slot {
+				return
+			}
+		}
+		m.declared = append(m.declared, slot)
+		timed := m.movesWithTime(slot)
+		m.timed = append(m.timed, timed)
+		if timed {
+			m.timedSlots = append(m.timedSlots, slot)
+		}
+		if slot == slotMass || slot >= slotKinds && !timed {
+			m.deathsMatter = true
+		}
+		for k := range m.Clocks {
+			if slot == m.slotSum(k) || slot == m.slotSought(k) {
+				m.sums[k] = true
+			}
+		}
+	}
+	// The frame's law is asked first: the others may read its radius.
+	for pass := range 2 {
+		first = 0
+		for _, u := range dynamics {
+			if u.Card.Answers("rate") && u.Card.Frame == (pass == 0) {
+				a := rateAsk{use: u, first: first}
+				for _, name := range inputsOf(u, "rate") {
+					ref, err := m.resolveValue(u, name)
+					if err != nil {
+						return err
+					}
+					if ref.slot >= 0 {
+						declare(ref.slot)
+					}
+					a.inputs = append(a.inputs, ref)
+				}
+				m.rateAsks = append(m.rateAsks, a)
+			}
+			first += len(u.Card.Clocks)
+		}
+	}
+	if len(m.declared) > 16 {
+		return fmt.Errorf("engine: the rates hang on %d galaxy values: at most 16", len(m.declared))
+	}
+	return nil
+}
+
+func (m *Model) compileThresholds() error {
+	for _, u := range m.wearing {
+		row := make([]threshold, len(m.Set.Kinds))
+		for _, t := range u.Card.Thresholds {
+			k := m.Set.Kind(t.Kind)
+			if k == law.NoWord {
+				continue // no law of this run makes that kind
+			}
+			if row[k].applies {
+				return fmt.Errorf("engine: law %s: two thresholds for kind %s; the second can't be reached", u.ID(), t.Kind)
+			}
+			becomes := uint8(law.NoWord)
+			if t.Becomes != law.Gone {
+				if becomes = m.Set.Kind(t.Becomes); becomes == law.NoWord || becomes == law.Star {
+					return fmt.Errorf("engine: law %s: threshold of %s: it can't become %q", u.ID(), t.Kind, t.Becomes)
+				}
+			}
+			row[k] = threshold{u.ThresholdMass(t), becomes, m.cause(u.Card.Process, t.Outcome), true}
+		}
+		m.thresholds = append(m.thresholds, row)
+		if w := u.Card.Wears; w != "" && w != "loss" {
+			return fmt.Errorf("engine: law %s: wears by %q: the engine runs losses only", u.ID(), w)
+		}
+		for _, q := range []string{"wear", "foretell", "heat"} {
+			for _, in := range inputsOf(u, q) {
+				if in == "place" {
+					return fmt.Errorf("engine: law %s: question %s reads place: a wearing law may not hang on it", u.ID(), q)
+				}
+			}
+		}
+	}
+	return nil
+}
+
+func inputsOf(u *law.Use, question string) []string {
+	for _, q := range u.Card.Questions {
+		if q.Name == question {
+			return q.Inputs
+		}
+	}
+	return nil
+}
+
+func wordsOf(u *law.Use, question string) []string {
+	for _, q := range u.Card.Questions {
+		if q.Name == question {
+			return q.Words
+		}
+	}
+	return nil
+}
+
+// stream is the stream of draws of a process in one realisation.
+func (m *Model) stream(realisation uint64, process string) draw.Stream {
+	return draw.New(m.Seed, realisation, process)
+}
+
+var never = math.Inf(1)

@@ -1,0 +1,192 @@
+package engine
+
+import (
+	"math"
+
+	"wane/sim/law"
+	"wane/sim/num"
+)
+
+// prospect is the first thing a wearing or turning law has in store for an
+// object: when, why, and what it then is.
+type prospect struct {
+	date  float64 // log10; +Inf: never
+	mass  float64 // after
+	gas   float64 // mass to gas; the rest of the loss is radiated
+	cause uint8   // 0: never
+	kind  uint8   // law.NoWord: gone
+}
+
+// prospects returns the earliest prospect of every row. since gives the log10
+// date at which the row's object entered its kind. The slice is good until
+// the next call.
+func (a *asker) prospects(r *rows, since func(int) float64) ([]prospect, error) {
+	a.found1 = grown(a.found1, r.n)
+	for i := range r.n {
+		a.found1[i] = prospect{date: never, kind: law.NoWord}
+	}
+	if err := a.worn(r, since); err != nil {
+		return nil, err
+	}
+	for _, u := range a.m.turning {
+		if err := a.turned(u, r, since); err != nil {
+			return nil, err
+		}
+	}
+	return a.found1, nil
+}
+
+func (a *asker) offer(i int, p prospect) {
+	if p.date < a.found1[i].date {
+		a.found1[i] = p
+	}
+}
+
+// later adds a wait to a date without work where the date can't be seen.
+func later(since, wait float64) float64 {
+	if wait-since > unseen || since == math.Inf(-1) {
+		return wait
+	}
+	if wait == math.Inf(-1) {
+		return since
+	}
+	return num.Add10(since, wait)
+}
+
+// worn finds where wearing takes each row.
+func (a *asker) worn(r *rows, since func(int) float64) error {
+	if len(a.m.wearing) == 0 {
+		return nil
+	}
+	for w, u := range a.m.wearing {
+		if err := a.wornAlone(w, u, r, since); err != nil {
+			return err
+		}
+	}
+	return a.wornTogether(r, since)
+}
+
+// wornAlone takes the law's foretell for the rows that no other wearing law
+// speaks for.
+func (a *asker) wornAlone(w int, u *law.Use, r *rows, since func(int) float64) error {
+	if !u.Card.Answers("foretell") {
+		return nil
+	}
+	s, pick := a.spokenAlone(w, u, r)
+	if s.n == 0 {
+		return nil
+	}
+	starts, err := a.starts(u, s, pick, since)
+	if err != nil {
+		return err
+	}
+	out, err := a.ask(u, "foretell", s, drawU)
+	if err != nil {
+		return err
+	}
+	for i, wait := range out.Columns[0].Values {
+		t := a.m.thresholds[w][s.kind[i]]
+		if !t.applies || wait == never {
+			continue
+		}
+		j := at(pick, i)
+		from := 0.0
+		if starts != nil {
+			from = starts[i]
+		} else if wait < a.latest+unseen {
+			from = since(j)
+		}
+		date := wait
+		if wait < a.latest+unseen || starts != nil {
+			date = later(from, wait)
+		}
+		a.offer(j, prospect{date: date, mass: min(t.mass, s.mass[i]), cause: t.cause, kind: t.kind})
+	}
+	return nil
+}
+
+// unseen: a wait this many decades longer than the date it counts from hides
+// that date to the last bit, so it need not be looked up.
+const unseen = 17
+
+// starts returns the dates from which a law with heat acts, nil for others.
+func (a *asker) starts(u *law.Use, s *rows, pick []int32, since func(int) float64) ([]float64, error) {
+	if !u.Card.Answers("heat") || a.sky == nil {
+		return nil, nil
+	}
+	out, err := a.ask(u, "heat", s, drawU)
+	if err != nil {
+		return nil, err
+	}
+	a.start = grown(a.start, s.n)
+	for i, t := range out.Columns[0].Values {
+		a.start[i] = max(since(at(pick, i)), a.sky.LogColderSince(t))
+	}
+	return a.start, nil
+}
+
+// spokenAlone is spoken, less the rows another wearing law speaks for too; the
+// rows left out are marked in a.shared.
+func (a *asker) spokenAlone(w int, u *law.Use, r *rows) (*rows, []int32) {
+	s, pick := a.spoken(u, r)
+	if len(a.m.wearing) == 1 {
+		return s, pick
+	}
+	a.pick2 = a.pick2[:0]
+	for i := range s.n {
+		alone := true
+		for v, other := range a.m.wearing {
+			if v != w && other.Speaks(s.kind[i], s.mass[i], s.metals[i]) {
+				alone = false
+			}
+		}
+		if alone {
+			a.pick2 = append(a.pick2, int32(at(pick, i)))
+		}
+	}
+	if len(a.pick2) == s.n {
+		return s, pick
+	}
+	a.alone.resize(len(a.pick2))
+	for i, j := range a.pick2 {
+		a.alone.copyRow(i, r, int(j))
+	}
+	return a.alone, a.pick2
+}
+
+// turned offers each row what a turning law foretells.
+func (a *asker) turned(u *law.Use, r *rows, since func(int) float64) error {
+	s, pick := a.spoken(u, r)
+	if s.n == 0 {
+		return nil
+	}
+	out, err := a.ask(u, "foretell", s, drawU)
+	if err != nil {
+		return err
+	}
+	words := len(u.Card.Outcomes)
+	stream := a.streams[u.Card.Process]
+	waits, mass, gas := out.Columns[0].Values, out.Columns[1+words].Values, out.Columns[2+words].Values
+	for i, wait := range waits {
+		if wait == never {
+			continue
+		}
+		w := 0
+		if words > 1 {
+			w = pickWord(out, 1, words, i, stream.Uniform(uint64(s.id[i]), s.gen[i], drawPick))
+		}
+		o := u.Card.Outcomes[w]
+		if mass[i]+gas[i] > s.mass[i]*(1+1e-12) {
+			return &law.Fault{Law: u.ID(), Question: "foretell", Row: i, Column: "mass", Object: s.describe(i, a.m),
+				Got: num1(mass[i]) + " Msun left and " + num1(gas[i]) + " Msun of gas", Want: "no more than it had"}
+		}
+		kind := uint8(law.NoWord)
+		if o.Becomes != law.Gone {
+			kind = a.m.Set.Kind(o.Becomes)
+		}
+		j := at(pick, i)
+		a.offer(j, prospect{date: later(since(j), wait), mass: mass[i], gas: gas[i],
+			cause: a.m.cause(u.Card.Process, o.Word), kind: kind})
+	}
+	return nil
+}

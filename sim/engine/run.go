@@ -1,0 +1,290 @@
+package engine
+
+import (
+	"context"
+	"math"
+
+	"wane/sim/law"
+	"wane/sim/num"
+)
+
+// Workspace runs realisations one after another in memory it keeps. One per
+// worker.
+type Workspace struct {
+	m   *Model
+	ask *asker
+	c   columns
+	env *Environment
+	sky Sky
+
+	// The dynamics. t and base are in units of 10^env.unit yr.
+	t             float64   // date of the last event
+	base          float64   // date at which the rates last changed
+	reading       []float64 // readings of the clocks then
+	windowAt      float64   // date at which values that move with time call for a refresh
+	horizon       float64   // date at which the run or the sky ends
+	adriftAt      float64   // date at which everything is cast adrift
+	bound         int       // objects in the bound galaxy
+	awaiting      int       // objects waiting for the next refresh after an encounter
+	stage         []uint8   // of every object: 0 unborn, 1 first, 2 second, 3.. links; waiting is set on top
+	clocks        []queue
+	schedule      queue
+	caps          []float64      // clock readings at which a quiet leg ends
+	quiet         bool           // only the objects in active are on the clocks
+	compact       bool           // susceptibilities are not held
+	s             [2][][]float64 // by stage, clock, object
+	few           map[uint32]few // of the objects on the clocks in a compact run
+	hold          [][]float64
+	view          [2][][]float64
+	table         *rows
+	active        []uint32
+	isActive      []bool
+	unspent       [maxClocks]float64
+	stayed        []stay
+	rho           [maxClocks][maxClocks]float64
+	broken        [maxClocks][maxClocks]bool
+	checked       int
+	endAt         float64 // date before which no prospect ends a stage
+	endsScheduled bool
+	adriftPending bool
+	stoppedAt     float64 // log10
+	steps         []step  // the history of rates through a quiet leg
+	events        int64
+	central       centralHole
+	wear          wearing
+	meets         meetings
+	books         books
+	counts        counts
+}
+
+const waiting = 0x80
+
+// NewWorkspace returns a workspace for the model.
+func (m *Model) NewWorkspace() *Workspace {
+	k := len(m.Clocks)
+	return &Workspace{m: m, ask: newAsker(m), env: m.NewEnvironment(), reading: make([]float64, k),
+		clocks: make([]queue, k), caps: make([]float64, k), few: map[uint32]few{}}
+}
+
+// Run runs one realisation.
+func (w *Workspace) Run(ctx context.Context, realisation uint64) (*Outcome, error) {
+	w.ask.begin(realisation)
+	w.sky = nil
+	if w.m.Sky != nil {
+		s, err := w.m.Sky.Draw(w.m.Seed, realisation)
+		if err != nil {
+			return nil, err
+		}
+		w.sky = s
+	}
+	w.ask.sky = w.sky
+	if err := w.ask.found(&w.c); err != nil {
+		return nil, err
+	}
+	w.begin()
+	if err := w.dynamics(ctx); err != nil {
+		return nil, err
+	}
+	return w.conclude()
+}
+
+// begin sets the galaxy up before the first event.
+func (w *Workspace) begin() {
+	m, c, e := w.m, &w.c, w.env
+	w.books.reset(m, c)
+	w.central.begin(m.CentralMass, earliest(c.birth))
+	e.Reset()
+	e.add(slotNumber, m.Real)
+	e.add(slotMass, m.Weight*c.founded)
+	e.add(slotCentral, m.CentralMass)
+	if m.deathsMatter {
+		for i := range c.n {
+			e.add(m.slotNumberKind(int(c.kind0[i])), m.Weight)
+			e.add(m.slotMassKind(int(c.kind0[i])), m.Weight*c.mass0[i])
+		}
+	}
+	e.Founded(m.Weight * c.founded)
+	w.stoppedAt, w.broken = math.NaN(), [maxClocks][maxClocks]bool{}
+	w.t, w.base, w.bound, w.awaiting, w.events = 0, 0, c.n, 0, 0
+	clear(w.reading)
+	w.windowAt = never
+	w.horizon, w.adriftAt = linear(m.Until), never
+	if w.sky != nil {
+		end, _ := w.sky.End()
+		w.horizon = min(w.horizon, linear(end))
+		w.adriftAt = linear(w.sky.Adrift())
+		w.adriftPending = w.adriftAt == never && w.sky.Adrift() < never
+	}
+	w.stage = grown(w.stage, c.n)
+	clear(w.stage)
+	w.wear.begin()
+	w.meets.begin()
+}
+
+// linear is 10^L, +Inf where that overflows.
+func linear(l float64) float64 {
+	if l > 308 {
+		return never
+	}
+	return num.Exp10(l)
+}
+
+func earliest(dates []float64) float64 {
+	first := never
+	for _, d := range dates {
+		first = min(first, d)
+	}
+	return first
+}
+
+// readingAt is what clock k shows at date t under the present rates.
+func (w *Workspace) readingAt(k int, t float64) float64 {
+	return w.reading[k] + w.env.Rates[k]*(t-w.base)
+}
+
+// rebase moves the point from which readings are counted to date t.
+func (w *Workspace) rebase(t float64) {
+	for k := range w.reading {
+		w.reading[k] = w.readingAt(k, t)
+	}
+	w.base = t
+}
+
+// changed takes in that galaxy values have changed at date t.
+func (w *Workspace) changed(t float64) error {
+	w.rebase(t)
+	if w.bound < fewObjects || w.env.moved() || w.awaiting > 0 && 100*w.awaiting >= w.bound {
+		return w.refresh(t)
+	}
+	w.env.update()
+	if w.quiet {
+		w.note()
+	}
+	return nil
+}
+
+// refresh asks the rates anew at date t, after bringing in the products of
+// encounters that were waiting for it.
+func (w *Workspace) refresh(t float64) error {
+	if w.awaiting > 0 {
+		if err := w.resolve(t); err != nil {
+			return err
+		}
+	}
+	window, err := w.env.refresh(max(t, w.central.since*num.Exp10(-w.env.unit)), w.reading)
+	if err != nil {
+		return err
+	}
+	w.windowAt = t + window
+	if w.m.encounter != nil {
+		w.meets.recount(w)
+	}
+	if w.quiet {
+		w.note()
+	}
+	return w.central.look(w, t)
+}
+
+// remove takes object i out of the bound galaxy at date t.
+func (w *Workspace) remove(i uint32, t float64, fate law.Fate, cause uint8) {
+	m, c, e := w.m, &w.c, w.env
+	w.subtract(i)
+	mass := m.Weight * w.massOf(i)
+	switch fate {
+	case law.FateAdrift:
+		c.place[i] = law.Adrift
+		e.add(slotCarried, mass)
+	case law.FateCentral:
+		c.place[i] = law.Central
+		e.add(slotCarried, mass)
+		e.add(slotCentral, mass)
+		w.central.swallow(w, t, mass)
+	default:
+		c.place[i] = placeGone
+	}
+	c.leave[i], c.left[i] = w.coded(t), cause
+	w.bound--
+}
+
+// placeGone marks an object that ceased to exist while bound.
+const placeGone = 255
+
+// coded writes a date of the dynamics as columns hold it: years, or, when the
+// unit of time has outgrown them, minus the log10 of years.
+func (w *Workspace) coded(t float64) float64 {
+	if w.env.unit == 0 {
+		return t
+	}
+	return -(num.Log10(t) + w.env.unit)
+}
+
+// subtract takes object i as it now is out of the galaxy values.
+func (w *Workspace) subtract(i uint32) { w.count(i, -1) }
+
+// count adds sign times object i to the galaxy values.
+func (w *Workspace) count(i uint32, sign float64) {
+	m, e := w.m, w.env
+	x := sign * m.Weight
+	e.add(slotNumber, x)
+	mass := w.massOf(i)
+	e.add(slotMass, x*mass)
+	if !m.deathsMatter {
+		return
+	}
+	kind := int(w.kindOf(i))
+	e.add(m.slotNumberKind(kind), x)
+	e.add(m.slotMassKind(kind), x*mass)
+	for k := range m.Clocks {
+		if m.sums[k] {
+			e.add(m.slotSum(k), x*w.sus(k, i))
+			if m.encounter != nil {
+				e.add(m.slotSought(k), x*w.meets.sought(w, k, i))
+			}
+		}
+	}
+}
+
+// stageOf is the stage of a bound object, links from 3 on.
+func (w *Workspace) stageOf(i uint32) int { return int(w.stage[i] &^ waiting) }
+
+// massOf is the mass of object i in its present stage; unborn ones have that
+// of their first.
+func (w *Workspace) massOf(i uint32) float64 {
+	switch s := w.stageOf(i); {
+	case s <= 1:
+		return w.c.mass0[i]
+	case s == 2:
+		return w.c.mass1[i]
+	default:
+		return w.c.chain[i][s-3].mass
+	}
+}
+
+func (w *Workspace) kindOf(i uint32) uint8 {
+	switch s := w.stageOf(i); {
+	case s <= 1:
+		return w.c.kind0[i]
+	case s == 2:
+		return w.c.kind1[i]
+	default:
+		return w.c.chain[i][s-3].kind
+	}
+}
+
+// sus is the susceptibility of object i to clock k in its present stage.
+func (w *Workspace) sus(k int, i uint32) float64 {
+	switch s := w.stageOf(i); {
+	case s <= 1:
+		if w.compact {
+			return w.few[i][0][k]
+		}
+		return w.s[0][k][i]
+	case s == 2:
+		if w.compact {
+			return w.few[i][1][k]
+		}
+		return w.s[1][k][i]
+	default:
+		return w.c.chain[i][s-3].s[k]
+	}
+}

@@ -1,0 +1,425 @@
+package engine
+
+import (
+	"math"
+
+	"wane/sim/galaxy"
+	"wane/sim/law"
+	"wane/sim/num"
+	"wane/sim/physics/constant"
+	"wane/sim/physics/stars"
+)
+
+// stay is one object in one state of a population with a condition on warmth.
+type stay struct {
+	i             uint32
+	stage         int
+	state         state
+	entered       float64 // log10 date at which its kind began, from which its age counts
+	enter, leave  float64 // log10 dates of the stay
+	cause         uint8   // of leaving
+	follows, goes bool    // the stay before, or after, is of the same object without a gap
+}
+
+// tallyWarm counts the populations with a condition on warmth.
+func (w *Workspace) tallyWarm(end float64) error {
+	for p, pop := range w.m.populations {
+		if pop.Warmth == nil {
+			continue
+		}
+		if err := w.tallyOne(p, &w.m.populations[p], end); err != nil {
+			return err
+		}
+	}
+	return nil
+}
+
+func (w *Workspace) tallyOne(p int, pop *population, end float64) error {
+	stays := w.stays(pop, end)
+	for first := 0; first < len(stays); first += chunk {
+		part := stays[first:min(first+chunk, len(stays))]
+		cross, warmAtStart, err := w.crossings(pop.Warmth, part, end)
+		if err != nil {
+			return err
+		}
+		w.enterWarm(p, pop.Warmth, part, cross, warmAtStart, end)
+	}
+	return nil
+}
+
+// enterWarm turns crossings into entries and exits. Above: a member from the
+// start of a stay, if it is warm then, to the crossing or the end of the stay.
+// Below: from the crossing, or the start if it is cold then, to the end.
+func (w *Workspace) enterWarm(p int, x *galaxy.Warmth, stays []stay, cross []float64, warm []bool, end float64) {
+	n := &w.counts
+	open := false
+	for j, s := range stays {
+		if !s.follows {
+			open = false
+		}
+		from, to, cause := s.enter, s.leave, s.cause
+		if x.Above {
+			if !warm[j] {
+				from = never
+			}
+			if cross[j] < to {
+				to, cause = cross[j], w.m.coolCause(s.state.kind())
+			}
+		} else if warm[j] {
+			from = cross[j]
+		}
+		if !(from < to) || from > end {
+			if open {
+				n.exits[p], n.causes[p] = append(n.exits[p], s.enter), append(n.causes[p], w.m.coolCause(s.state.kind()))
+			}
+			open = false
+			continue
+		}
+		if !open {
+			n.entries[p] = append(n.entries[p], from)
+		}
+		open = s.goes && to == s.leave
+		if !open && to <= end && to < never {
+			n.exits[p], n.causes[p] = append(n.exits[p], to), append(n.causes[p], cause)
+		}
+	}
+}
+
+// coolCause is the cause cooledWord of a kind.
+func (m *Model) coolCause(kind uint8) uint8 {
+	for _, u := range m.cooling {
+		if u.Speaks(kind, 1, 0.02) {
+			return m.causeOf[Cause{u.Card.Process, cooledWord}]
+		}
+	}
+	return m.causeOf[Cause{"warmth", cooledWord}]
+}
+
+// stays lists the stays of all objects in the states of a population.
+func (w *Workspace) stays(pop *population, end float64) []stay {
+	c := &w.c
+	out := w.stayed[:0]
+	for first := 0; first < c.n; first += chunk {
+		size := min(chunk, c.n-first)
+		w.logChunk(first, size)
+		for k := range size {
+			i := uint32(first + k)
+			if c.kind0[i] == law.NoWord || !pop.couldHold(c, i) {
+				continue
+			}
+			out = w.staysOf(out, pop, i, [3]float64{w.counts.logs[0][k], w.counts.logs[1][k], w.counts.logs[2][k]}, end)
+		}
+	}
+	w.stayed = out
+	return out
+}
+
+// couldHold is a quick look whether an object is ever of the population's kinds.
+func (p *population) couldHold(c *columns, i uint32) bool {
+	for _, kind := range [2]uint8{c.kind0[i], c.kind1[i]} {
+		for place := range uint8(3) {
+			for origin := range uint8(2) {
+				if p.in[stateOf(kind, place, origin)] {
+					return true
+				}
+			}
+		}
+	}
+	_, linked := c.chain[i]
+	return linked
+}
+
+func (w *Workspace) staysOf(out []stay, pop *population, i uint32, dates [3]float64, end float64) []stay {
+	stage, began := 1, dates[0]
+	if w.c.died[i] == 0 {
+		stage = 2
+	}
+	last := -1
+	now := w.each(i, dates, end, func(date float64, from, to state, cause uint8) {
+		if last >= 0 {
+			out[last].leave, out[last].cause = date, cause
+		}
+		changed := from != stateGone && to != stateGone && from.kind() == to.kind()
+		if from != stateGone && to != stateGone && from.kind() != to.kind() {
+			stage++
+			began = date
+		}
+		if to != stateGone && pop.in[to] {
+			follows := last >= 0 && changed
+			if follows {
+				out[last].goes = true
+			}
+			out = append(out, stay{i: i, stage: stage, state: to, entered: began, enter: date, leave: never, follows: follows})
+			last = len(out) - 1
+			return
+		}
+		last = -1
+	})
+	_ = now
+	return out
+}
+
+// crossings finds, for each stay, the log10 date at which the object falls
+// below the threshold (+Inf: not within the stay), and whether it is above at
+// the start.
+func (w *Workspace) crossings(x *galaxy.Warmth, stays []stay, end float64) ([]float64, []bool, error) {
+	n := len(stays)
+	f, err := w.newFeeler(x, stays)
+	if err != nil {
+		return nil, nil, err
+	}
+	low, high := make([]float64, n), make([]float64, n) // log10 ages of the bracket
+	warm, cross := make([]bool, n), make([]float64, n)
+	at := make([]float64, n)
+	for j, s := range stays {
+		cross[j] = never
+		low[j] = num.Sub10(s.enter, s.entered)
+		at[j] = max(low[j], youngest)
+	}
+	g, err := f.excess(at, nil)
+	if err != nil {
+		return nil, nil, err
+	}
+	var open []int32
+	glow, ghigh := make([]float64, n), make([]float64, n)
+	for j, s := range stays {
+		warm[j] = g[j] > 0
+		if !warm[j] {
+			continue
+		}
+		low[j], glow[j] = at[j], g[j]
+		last := min(s.leave, end)
+		if last > forever {
+			last = forever
+		}
+		high[j] = max(num.Sub10(last, s.entered), low[j])
+		open = append(open, int32(j))
+	}
+	pick := make([]float64, len(open))
+	for k, j := range open {
+		pick[k] = high[j]
+	}
+	if g, err = f.excess(pick, open); err != nil {
+		return nil, nil, err
+	}
+	still := open[:0]
+	for k, j := range open {
+		if ghigh[j] = g[k]; g[k] <= 0 {
+			still = append(still, j)
+		}
+	}
+	if err := f.roots(still, low, high, glow, ghigh); err != nil {
+		return nil, nil, err
+	}
+	for _, j := range still {
+		cross[j] = later(stays[j].entered, high[j])
+		if cross[j] > stays[j].leave {
+			cross[j] = stays[j].leave
+		}
+		if cross[j] < stays[j].enter {
+			cross[j] = stays[j].enter
+		}
+	}
+	return cross, warm, nil
+}
+
+const (
+	youngest = 0.0   // log10 yr: nothing cools within a year of its birth
+	forever  = 1e4   // log10 yr: as far as cooling is followed
+	coolTol  = 1e-10 // of log10 age
+)
+
+// feeler computes how far objects are above a threshold at an age.
+type feeler struct {
+	w      *Workspace
+	x      *galaxy.Warmth
+	stays  []stay
+	all    *rows
+	steady []float64 // fourth power of the temperature that warmth and wearing keep up
+	goal   []float64 // log10 K; for a floor: log10 of the multiple
+	part   *rows
+	age    []float64
+	g      []float64
+}
+
+func (w *Workspace) newFeeler(x *galaxy.Warmth, stays []stay) (*feeler, error) {
+	f := &feeler{w: w, x: x, stays: stays, all: newRows(len(stays)), part: newRows(len(stays))}
+	n := len(stays)
+	f.all.resize(n)
+	f.steady, f.goal = make([]float64, n), make([]float64, n)
+	for j, s := range stays {
+		i := s.i
+		f.all.id[j], f.all.gen[j] = i, 0
+		f.all.kind[j], f.all.place[j], f.all.origin[j] = s.state.kind(), uint8(s.state)%statesAKind/2, uint8(s.state)%2
+		f.all.metals[j] = w.c.metalsOf(int(i))
+		switch {
+		case s.stage == 1:
+			f.all.mass[j], f.all.comp[j] = w.c.mass0[i], law.Hydrogen
+		case s.stage == 2:
+			f.all.mass[j], f.all.comp[j] = w.c.mass1[i], w.c.comp1[i]
+		default:
+			l := w.c.chain[i][s.stage-3]
+			f.all.mass[j], f.all.comp[j] = l.mass, l.comp
+		}
+		f.all.birthMass[j] = f.all.mass[j]
+	}
+	if err := f.heats(); err != nil {
+		return nil, err
+	}
+	for j := range n {
+		switch {
+		case x.Unit == "floor":
+			f.goal[j] = num.Log10(x.Value)
+		case x.Quantity == "luminosity":
+			r := radiusOf(f.all.kind[j], f.all.mass[j]) * 1e3
+			f.goal[j] = 0.25 * num.Log10(x.Value*constant.SunL/(4*math.Pi*r*r*constant.StefanBoltzmann))
+		default:
+			f.goal[j] = num.Log10(x.Value)
+		}
+	}
+	return f, nil
+}
+
+// heats sums what keeps each object warm from within and without, but the sky.
+func (f *feeler) heats() error {
+	w, r := f.w, f.all
+	add := func(j int, watts float64) {
+		radius := radiusOf(r.kind[j], r.mass[j]) * 1e3
+		f.steady[j] += watts / (4 * math.Pi * radius * radius * constant.StefanBoltzmann)
+	}
+	if w.m.warm != nil {
+		s, pick := w.ask.spoken(w.m.warm, r)
+		if s.n > 0 {
+			out, err := w.ask.ask(w.m.warm, "warm", s, drawU)
+			if err != nil {
+				return err
+			}
+			for i, p := range out.Columns[0].Values {
+				add(at(pick, i), p)
+			}
+		}
+	}
+	for _, u := range w.m.wearing {
+		s, pick := w.ask.spoken(u, r)
+		if s.n == 0 {
+			continue
+		}
+		out, err := w.ask.ask(u, "wear", s, drawU)
+		if err != nil {
+			return err
+		}
+		for i, l := range out.Columns[0].Values {
+			share := out.Columns[1].Values[i]
+			if share > 0 && l > math.Inf(-1) {
+				// solMass per yr to W
+				add(at(pick, i), share*num.Exp10(l)*constant.Sun*constant.C*constant.C/constant.Year)
+			}
+		}
+	}
+	return nil
+}
+
+// excess is log10 of temperature over threshold at log10 ages, for all stays
+// (which nil, ages by stay) or for the chosen ones (ages by position).
+func (f *feeler) excess(age []float64, which []int32) ([]float64, error) {
+	r := f.all
+	if which != nil {
+		r = f.part
+		r.resize(len(which))
+		for k, j := range which {
+			r.copyRow(k, f.all, int(j))
+		}
+	}
+	f.age, f.g = grown(f.age, r.n), grown(f.g, r.n)
+	copy(f.age, age)
+	if err := f.cool(r); err != nil {
+		return nil, err
+	}
+	for k := range r.n {
+		j := k
+		if which != nil {
+			j = int(which[k])
+		}
+		floor4 := f.steady[j]
+		if f.w.sky != nil {
+			floor4 += num.Exp10(4 * f.w.sky.LogTemperature(later(f.stays[j].entered, f.age[k])))
+		}
+		goal := f.goal[j]
+		if f.x.Unit == "floor" {
+			goal += 0.25 * num.Log10(floor4)
+		}
+		own := f.g[k]
+		if floor4 > 0 && num.Exp10(4*min(own, 70)) < 1e12*floor4 {
+			own = 0.25 * num.Log10(num.Exp10(4*own)+floor4)
+		}
+		f.g[k] = own - goal
+	}
+	return f.g, nil
+}
+
+// cool sets f.g to the log10 temperature without any floor.
+func (f *feeler) cool(r *rows) error {
+	for k := range r.n {
+		f.g[k] = math.Inf(-1)
+		if r.kind[k] == law.Star {
+			f.g[k] = num.Log10(stars.Temperature(r.mass[k]))
+		}
+	}
+	r.other = append(r.other[:0], law.Numbers("log10_age", f.age[:r.n]))
+	for _, u := range f.w.m.cooling {
+		s, pick := f.w.ask.spoken(u, r)
+		if s.n == 0 {
+			continue
+		}
+		out, err := f.w.ask.ask(u, "shine", s, drawU)
+		if err != nil {
+			return err
+		}
+		for i, t := range out.Columns[0].Values {
+			f.g[at(pick, i)] = t
+		}
+	}
+	return nil
+}
+
+// roots narrows the brackets [low, high] (log10 ages) to the crossing by the
+// Illinois variant of regula falsi, all stays side by side, with a bisection
+// where that is slow. The answer is in high.
+func (f *feeler) roots(open []int32, low, high, glow, ghigh []float64) error {
+	side := make([]int8, len(low))
+	ages := make([]float64, len(open))
+	for try := 0; len(open) > 0 && try < 200; try++ {
+		for k, j := range open {
+			x := (low[j]*ghigh[j] - high[j]*glow[j]) / (ghigh[j] - glow[j])
+			if try%4 == 3 || !(x > low[j] && x < high[j]) {
+				x = 0.5 * (low[j] + high[j])
+			}
+			ages[k] = x
+		}
+		g, err := f.excess(ages[:len(open)], open)
+		if err != nil {
+			return err
+		}
+		still := open[:0]
+		for k, j := range open {
+			if g[k] > 0 {
+				low[j], glow[j] = ages[k], g[k]
+				if side[j] == 1 {
+					ghigh[j] *= 0.5
+				}
+				side[j] = 1
+			} else {
+				high[j], ghigh[j] = ages[k], g[k]
+				if side[j] == -1 {
+					glow[j] *= 0.5
+				}
+				side[j] = -1
+			}
+			if high[j]-low[j] > coolTol && g[k] != 0 {
+				still = append(still, j)
+			}
+		}
+		open = still
+	}
+	return nil
+}

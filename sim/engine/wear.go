@@ -1,0 +1,304 @@
+package engine
+
+import (
+	"wane/sim/law"
+	"wane/sim/num"
+)
+
+// Wearing of bound objects. Their masses feed back on the galaxy, so they are
+// brought up to date in steps: when the first bound object has lost 1 % since
+// its mass was last set, every bound object that has lost half a per cent or
+// more is set to what it then weighs (midpoint rule), its susceptibilities are
+// asked again, and its unspent thresholds rescaled.
+const (
+	wearToStep = 0.01
+	wearToJoin = 0.005
+)
+
+type wearing struct {
+	at    float64 // date of the next step, or a bound before it
+	since []float64
+	rate  []float64 // solMass per unit of time; 0: it does not wear, or nears its end
+	born  []float64 // mass at the beginning of that stage
+	known []uint8   // stage for which these hold
+	ids   []uint32
+	lost  float64 // solMass of the sample
+}
+
+func (x *wearing) begin() { x.at, x.lost = never, 0; x.known = x.known[:0] }
+
+func (x *wearing) scale(f float64) {
+	x.at *= f
+	for i := range x.since {
+		x.since[i] *= f
+		x.rate[i] /= f
+	}
+}
+
+// enter takes in that object i has entered a stage at date t.
+func (x *wearing) enter(w *Workspace, _ uint32, t float64) {
+	if len(x.known) > 0 {
+		x.at = min(x.at, t+w.linear(w.c.wearStep))
+	}
+}
+
+// wearBound lowers the bounds on when wearing is first felt by what the rows
+// lose in their new stage.
+func (a *asker) wearBound(c *columns, r *rows, since func(int) float64) error {
+	for _, u := range a.m.wearing {
+		s, pick := a.spoken(u, r)
+		if s.n == 0 {
+			continue
+		}
+		out, err := a.ask(u, "wear", s, drawU)
+		if err != nil {
+			return err
+		}
+		share := num.Log10(0.9 * wearToStep / float64(len(a.m.wearing)))
+		for i, l := range out.Columns[0].Values {
+			// The logarithm of the mass is needed only where it could matter.
+			if share-l-5 > c.wearStep && share-l-5 > c.wearAt {
+				continue
+			}
+			d := share - l + num.Log10(s.mass[i])
+			c.wearStep = min(c.wearStep, d)
+			if d < c.wearAt {
+				c.wearAt = min(c.wearAt, later(since(at(pick, i)), d))
+			}
+		}
+	}
+	return nil
+}
+
+// wearDown brings worn masses up to date.
+func (w *Workspace) wearDown() error {
+	x, c, t := &w.wear, &w.c, w.t
+	if w.quiet {
+		panic("engine: wearing within a quiet leg")
+	}
+	if err := w.holdSusceptibilities(); err != nil {
+		return err
+	}
+	if len(x.known) == 0 {
+		x.since, x.rate, x.born = grown(x.since, c.n), grown(x.rate, c.n), grown(x.born, c.n)
+		x.known = grown(x.known, c.n)
+		clear(x.known)
+	}
+	if err := w.learnRates(); err != nil {
+		return err
+	}
+	x.ids = x.ids[:0]
+	for i := range uint32(c.n) {
+		if w.wears(i) && x.rate[i]*(t-x.since[i]) >= wearToJoin*w.massOf(i) {
+			x.ids = append(x.ids, i)
+		}
+	}
+	if len(x.ids) > 0 {
+		if err := w.wearStep(); err != nil {
+			return err
+		}
+	}
+	x.at = never
+	for i := range uint32(c.n) {
+		if w.wears(i) && x.rate[i] > 0 {
+			x.at = min(x.at, x.since[i]+wearToStep*w.massOf(i)/x.rate[i])
+		}
+	}
+	if x.at <= t {
+		x.at = t * (1 + 1e-15)
+	}
+	return nil
+}
+
+// wears tells whether object i is bound, in a stage that wears.
+func (w *Workspace) wears(i uint32) bool {
+	return w.c.place[i] == law.Bound && w.stage[i] >= 2 && w.stage[i]&waiting == 0
+}
+
+// holdSusceptibilities ends a compact run: they are needed from now on.
+func (w *Workspace) holdSusceptibilities() error {
+	if !w.compact {
+		return nil
+	}
+	w.compact = false
+	return w.exposeAll()
+}
+
+// learnRates asks the rate of every bound object whose stage is new.
+func (w *Workspace) learnRates() error {
+	x, c := &w.wear, &w.c
+	x.ids = x.ids[:0]
+	for i := range uint32(c.n) {
+		if w.wears(i) && x.known[i] != w.stage[i] {
+			x.ids = append(x.ids, i)
+		}
+	}
+	if len(x.ids) == 0 {
+		return nil
+	}
+	for _, i := range x.ids {
+		x.born[i], x.known[i] = w.massOf(i), w.stage[i]
+	}
+	r := w.rowsOf(x.ids)
+	rate, start, err := w.wearRates(r, true)
+	if err != nil {
+		return err
+	}
+	for j, i := range x.ids {
+		x.rate[i] = rate[j]
+		x.since[i] = max(w.entered(i), w.linear(start[j]))
+	}
+	return nil
+}
+
+// entered is the date at which object i entered its present stage.
+func (w *Workspace) entered(i uint32) float64 {
+	switch s := w.stageOf(i); {
+	case s == 2:
+		return w.years(w.c.death[i])
+	case s == 3:
+		return w.linear(w.c.end[i])
+	default:
+		return w.linear(w.c.chain[i][s-4].end)
+	}
+}
+
+// rowsOf tabulates bound objects as they now are.
+func (w *Workspace) rowsOf(ids []uint32) *rows {
+	c := &w.c
+	r := newRows(len(ids))
+	r.resize(len(ids))
+	for j, i := range ids {
+		r.id[j], r.gen[j] = i, w.generationOf(i)
+		r.kind[j], r.place[j], r.origin[j] = w.kindOf(i), law.Bound, w.originOf(i)
+		r.mass[j], r.metals[j] = w.massOf(i), c.metalsOf(int(i))
+		r.birthMass[j] = r.mass[j]
+		if len(w.wear.born) > 0 && w.wear.known[i] == w.stage[i] {
+			r.birthMass[j] = w.wear.born[i]
+		}
+		switch s := w.stageOf(i); {
+		case s <= 1:
+			r.comp[j] = law.Hydrogen
+		case s == 2:
+			r.comp[j] = c.comp1[i]
+		default:
+			r.comp[j] = c.chain[i][s-3].comp
+		}
+	}
+	return r
+}
+
+// wearRates sums what the wearing laws take from each row, per unit of time;
+// starts are the log10 dates from which they act, when asked for.
+func (w *Workspace) wearRates(r *rows, starts bool) (rate, start []float64, err error) {
+	rate = make([]float64, r.n)
+	start = make([]float64, r.n)
+	fill(start, -never)
+	for _, u := range w.m.wearing {
+		s, pick := w.ask.spoken(u, r)
+		if s.n == 0 {
+			continue
+		}
+		if starts {
+			from, err := w.ask.starts(u, s, pick, func(int) float64 { return -never })
+			if err != nil {
+				return nil, nil, err
+			}
+			for i, d := range from {
+				start[at(pick, i)] = max(start[at(pick, i)], d)
+			}
+		}
+		out, err := w.ask.ask(u, "wear", s, drawU)
+		if err != nil {
+			return nil, nil, err
+		}
+		for i, l := range out.Columns[0].Values {
+			rate[at(pick, i)] += num.Exp10(l + w.env.unit)
+		}
+	}
+	return rate, start, nil
+}
+
+// wearStep sets the masses of wear.ids to what they weigh now.
+func (w *Workspace) wearStep() error {
+	x, t := &w.wear, w.t
+	r := w.rowsOf(x.ids)
+	before := append([]float64(nil), r.mass...)
+	for j, i := range x.ids {
+		r.mass[j] -= 0.5 * x.rate[i] * (t - x.since[i])
+	}
+	mid, _, err := w.wearRates(r, false)
+	if err != nil {
+		return err
+	}
+	for j, i := range x.ids {
+		r.mass[j] = before[j] - mid[j]*(t-x.since[i])
+		if !(r.mass[j] > w.thresholdOf(r.kind[j])*(1+1e-9)) {
+			r.mass[j], x.rate[i] = before[j], 0 // its prospect is about to end it
+		}
+	}
+	s, err := w.ask.exposures(r)
+	if err != nil {
+		return err
+	}
+	for j, i := range x.ids {
+		x.since[i] = t
+		if r.mass[j] == before[j] {
+			continue
+		}
+		w.keepUnspent(i, t)
+		w.count(i, -1)
+		w.lighten(i, before[j]-r.mass[j])
+		w.setSusceptibilities(i, s, w.ask.soughts, j)
+		w.count(i, +1)
+		for k := range w.m.Clocks {
+			w.respend(k, i, t)
+		}
+	}
+	rate, _, err := w.wearRates(r, false)
+	if err != nil {
+		return err
+	}
+	for j, i := range x.ids {
+		if x.rate[i] != 0 {
+			x.rate[i] = rate[j]
+		}
+	}
+	return w.changed(t)
+}
+
+// thresholdOf is the largest threshold of a kind.
+func (w *Workspace) thresholdOf(kind uint8) float64 {
+	most := 0.0
+	for _, row := range w.m.thresholds {
+		if row[kind].applies {
+			most = max(most, row[kind].mass)
+		}
+	}
+	return most
+}
+
+// lighten takes worn mass off object i. Earlier stages lose as much, so that
+// what a stage's change gave off stays what it was.
+func (w *Workspace) lighten(i uint32, loss float64) {
+	c := &w.c
+	w.wear.lost += loss
+	c.mass0[i] -= loss
+	c.mass1[i] -= loss
+	for k := 0; k <= w.stageOf(i)-3; k++ {
+		c.chain[i][k].mass -= loss
+	}
+}
+
+func (w *Workspace) setSusceptibilities(i uint32, s, sought [][]float64, row int) {
+	stage := w.stageOf(i)
+	for k := range w.m.Clocks {
+		if stage > 2 {
+			l := &w.c.chain[i][stage-3]
+			l.s[k], l.sought[k] = s[k][row], sought[k][row]
+			continue
+		}
+		w.s[stage-1][k][i] = s[k][row]
+		w.meets.set(stage-1, k, i, sought[k][row])
+	}
+}
