@@ -2,11 +2,11 @@ package cli
 
 import (
 	"context"
-	"errors"
 	"os"
 
 	"wane/plugins"
 	"wane/scenarios"
+	"wane/sim"
 	"wane/sim/ensemble"
 	"wane/sim/law"
 	"wane/sim/scenario"
@@ -20,6 +20,6 @@ func Standard() *Program {
 	}
 }
 
-func engine(context.Context, *scenario.Scenario, *law.Registry, int, func(done, total int)) (*ensemble.Summary, error) {
-	return nil, errors.New("this build has no engine")
+func engine(ctx context.Context, sc *scenario.Scenario, reg *law.Registry, workers int, progress func(done, total int)) (*ensemble.Summary, error) {
+	return sim.Run(ctx, sc, reg, sim.Options{Workers: workers, Progress: progress})
 }
