@@ -24,7 +24,9 @@ import (
 	"bytes"
 	"embed"
 	"encoding/csv"
+	"errors"
 	"fmt"
+	"io"
 	"io/fs"
 	"math"
 	"slices"
@@ -117,13 +119,12 @@ func parse(file string, data []byte) (records [][]string, lines []int, err error
 	r.Comment = '#'
 	for {
 		record, err := r.Read()
-		if err != nil {
-			if len(records) == 0 {
-				return nil, nil, fmt.Errorf("published: %s: no heading: %w", file, err)
-			}
-			if err.Error() == "EOF" {
-				return records, lines, nil
-			}
+		switch {
+		case errors.Is(err, io.EOF) && len(records) > 0:
+			return records, lines, nil
+		case errors.Is(err, io.EOF):
+			return nil, nil, fmt.Errorf("published: %s: no heading", file)
+		case err != nil:
 			return nil, nil, fmt.Errorf("published: %s: %w", file, err)
 		}
 		line, _ := r.FieldPos(0)
