@@ -29,7 +29,7 @@ func (t *tables) of(composition uint8) *cooling.DwarfTable {
 }
 
 // mostTables is how many sets of tables are kept; a sweep over parameters
-// drops the old ones. A full set takes 4 MB.
+// drops the old ones. A full set takes 12 MB.
 const mostTables = 16
 
 // cache keeps tables by parameters. The zero value is ready; it is safe for

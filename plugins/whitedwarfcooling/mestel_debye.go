@@ -29,7 +29,7 @@ func (*mestelDebye) Describe() law.Card {
 			"C = 3k Debye(theta/T_c) an ion + electrons Z pi^2 k^2 T_c sqrt(1+x^2)/(m_e c^2 x^2) + 0.77 k T_melt an ion of freezing; " +
 			"T_c/T = r (T/5000 K)^1/7 above 5000 K, 1 + (r - 1)(T/5000 K)^q below, r = r0 [(R/8841 km)^2 (0.6 solMass/M)]^2/7",
 		Domain: "any age; no floor of any kind. 0.1 - 0.3 dex in age down to 800 K, then the late atmosphere decides: the date of 5 K at 0.6 solMass is 10^13.7 yr at q = 1/7, " +
-			"10^10.7 at q = 2. Tabulated by mass (0.001 .. 1.44 solMass, held outside) and age; interpolation within 0.002 dex from 0.05 to 1.40",
+			"10^10.7 at q = 2. Tabulated by mass (0.001 .. 1.44 solMass, held outside) and age; interpolation within 0.004 dex in age from 0.05 to 1.40",
 		Sources: []string{
 			"Mestel 1952, MNRAS 112, 583",
 			"Iben & Tutukov 1984, ApJ 282, 615 (coefficient of Mestel's law)",

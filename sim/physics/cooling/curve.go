@@ -14,11 +14,9 @@ const DwarfStart = 5.0
 // switchLuminosity is where Mestel's law hands over, solar luminosities.
 const switchLuminosity = 1e-4
 
-// Gauss-Legendre nodes and weights on -1 .. 1, four points.
-const (
-	gaussNear, gaussNearWeight = 0.33998104358485626, 0.65214515486254614
-	gaussFar, gaussFarWeight   = 0.86113631159405258, 0.34785484513745386
-)
+// cellWidth is the widest cell of a quadrature, in ln T: 1/128 decade and a
+// little, for the grid of a column is that wide.
+const cellWidth = num.Ln10 / 127
 
 // SwitchTemperature returns the effective temperature, K, at which the dwarf
 // has faded to 1e-4 solar luminosities.
@@ -39,11 +37,14 @@ func (d Dwarf) MestelAge(t float64) float64 {
 //
 // Units: K, years.
 // Domain: high >= low > 0.
-// Error: quadrature 1e-6 (four-point Gauss in ln T, cells of at most 1/128
+// Error: quadrature 1e-6 (two-point Gauss in ln T, cells of at most 1/127
 // decade).
 func (d Dwarf) Between(high, low float64) float64 {
+	if high > knee && low < knee { // the rate jumps there
+		return d.Between(high, knee) + d.Between(knee, low)
+	}
 	x, end := num.Log(high), num.Log(low)
-	cells := math.Ceil((x - end) / (num.Ln10 / 128))
+	cells := math.Ceil((x - end) / cellWidth)
 	sum := 0.0
 	for i := 0.0; i < cells; i++ {
 		sum += d.cell(x+(end-x)*i/cells, x+(end-x)*(i+1)/cells)
@@ -51,17 +52,18 @@ func (d Dwarf) Between(high, low float64) float64 {
 	return sum
 }
 
-// cell is the time, in years, between ln T = from and to.
+// cell is the time, in years, between ln T = from and to: two-point Gauss.
 func (d Dwarf) cell(from, to float64) float64 {
+	const node = 0.57735026918962576 // 1/sqrt 3
 	middle, half := (from+to)/2, (from-to)/2
-	rate := func(x float64) float64 { // -dt/d ln T, s
-		t := num.Exp(x)
-		core, slope := d.Interior(t)
-		return d.HeatCapacity(core) * slope / watts(d.radius, t)
-	}
-	sum := gaussNearWeight*(rate(middle-gaussNear*half)+rate(middle+gaussNear*half)) +
-		gaussFarWeight*(rate(middle-gaussFar*half)+rate(middle+gaussFar*half))
-	return sum * half / constant.Year
+	return (d.rate(middle-node*half) + d.rate(middle+node*half)) * half / constant.Year
+}
+
+// rate is -dt/d ln T, s.
+func (d Dwarf) rate(lnT float64) float64 {
+	t := num.Exp(lnT)
+	core, slope := d.Interior(t)
+	return d.HeatCapacity(core) * slope / watts(d.radius, t)
 }
 
 // Age returns the age at which the dwarf has cooled to effective temperature

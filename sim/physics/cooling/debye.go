@@ -32,7 +32,7 @@ func Debye(x float64) float64 {
 		return sum
 	}
 	const pi4 = 97.409091034002437 // pi^4
-	if x > 40 {
+	if x > 45 {
 		return 4 * pi4 / (5 * x * x * x)
 	}
 	// int_0^x y^3/(e^y - 1) dy = pi^4/15 - sum_k e^-kx (x^3/k + 3x^2/k^2 + 6x/k^3 + 6/k^4)

@@ -2,22 +2,33 @@ package cooling
 
 import "sync/atomic"
 
-// masses are the masses, in solar masses, of the columns of a table.
-var masses = [...]float64{
-	0.001, 0.0015, 0.0022, 0.0033, 0.005, 0.007, 0.01, 0.014, 0.02, 0.028, 0.04,
-	0.05, 0.06, 0.07, 0.08, 0.09, 0.10, 0.11, 0.12, 0.13, 0.14, 0.15, 0.16, 0.18, 0.20, 0.22, 0.24, 0.26, 0.28, 0.30,
-	0.325, 0.35, 0.375, 0.40, 0.425, 0.45, 0.475, 0.50, 0.525, 0.55, 0.575, 0.60, 0.64, 0.68, 0.72, 0.76, 0.80, 0.84, 0.88,
-	0.92, 0.96, 1.00, 1.04, 1.08, 1.12, 1.15, 1.18, 1.21, 1.24, 1.27, 1.30, 1.32, 1.34, 1.36, 1.38, 1.40, 1.42, 1.44,
+// zones are the masses, in solar masses, of the columns of a table: evenly
+// spaced in each zone, by 2 % or less from 0.05 on, because the heat of
+// freezing is a step in age that moves with mass.
+var zones = [...]struct {
+	first, step float64
+	columns     int // before the next zone
+}{
+	{0.001, 0.001, 9}, {0.01, 0.0025, 16}, {0.05, 0.001, 50}, {0.10, 0.002, 50},
+	{0.20, 0.004, 50}, {0.40, 0.005, 80}, {0.80, 0.01, 40}, {1.20, 0.01, 24},
 }
 
+// Ends of the table, and its number of columns.
+const (
+	lightestColumn = 0.001
+	heaviestColumn = 1.44
+	columns        = 9 + 16 + 50 + 50 + 50 + 80 + 40 + 24 + 1
+)
+
 // DwarfTable is the temperature of white dwarfs by mass and age, for one
-// envelope and one kind of ion: what [Dwarf.Age] says, inverted. Columns are
-// worked out when first asked for and never change; it is safe for concurrent
-// use, and what it answers does not depend on what was asked before.
+// envelope and one kind of ion: what [Dwarf.Age] says, turned round. Between
+// two columns the log of the age at a given temperature is linear in mass.
+// Columns are worked out when first asked for and never change; it is safe for
+// concurrent use, and what it answers does not depend on what was asked before.
 type DwarfTable struct {
 	ions    Ions
 	env     Envelope
-	columns [len(masses)]atomic.Pointer[column]
+	columns [columns]atomic.Pointer[column]
 }
 
 // NewDwarfTable returns an empty table.
@@ -29,43 +40,67 @@ func NewDwarfTable(ions Ions, env Envelope) *DwarfTable { return &DwarfTable{ion
 // Units: m in solar masses, logAge in log10 years, result in log10 K.
 // Domain: any age, -Inf and +Inf included; m is held to 0.001 .. 1.44.
 // Falls, or stays, as the age rises.
-// Error: interpolation within 0.002 dex of [Dwarf.Age], in log10 T or in log10
-// age, from 0.05 to 1.40 solar masses.
+// Error: interpolation within 0.004 dex of [Dwarf.Age], in log10 age, from
+// 0.05 to 1.40 solar masses (helium to 0.6, oxygen-neon from 1.0).
 // Special cases: 5 at -Inf, -Inf at +Inf.
 func (t *DwarfTable) Temperature(m, logAge float64) float64 {
-	i, w, beyond := place(logAge)
-	low, share := t.bracket(m)
-	a, b := t.columnOf(low), t.columnOf(low+1)
-	ya := a[i] + w*(a[i+1]-a[i])
-	yb := b[i] + w*(b[i+1]-b[i])
-	return ya + share*(yb-ya) - beyond
+	k, share := bracket(m)
+	a, b := t.columnOf(k), t.columnOf(k+1)
+	at := func(i int) float64 { return a[i] + share*(b[i]-a[i]) }
+	if !(logAge > at(0)) {
+		return DwarfStart
+	}
+	if end := at(lastNode); logAge >= end {
+		return gridTemperature(lastNode, 0) - (logAge-end)/2
+	}
+	i, n := 0, lastNode // at(i) <= logAge < at(i+n)
+	for n > 1 {
+		half := n / 2
+		if at(i+half) <= logAge {
+			i += half
+			n -= half
+		} else {
+			n = half
+		}
+	}
+	low, high := at(i), at(i+1)
+	return gridTemperature(i, (logAge-low)/(high-low))
 }
 
 // bracket finds the column at or below a mass and the weight of the next.
-func (t *DwarfTable) bracket(m float64) (low int, share float64) {
-	last := len(masses) - 1
-	if !(m > masses[0]) {
+func bracket(m float64) (k int, share float64) {
+	if !(m > lightestColumn) {
 		return 0, 0
 	}
-	if m >= masses[last] {
-		return last - 1, 1
+	if m >= heaviestColumn {
+		return columns - 2, 1
 	}
-	low, high := 0, last
-	for high-low > 1 {
-		if middle := (low + high) / 2; masses[middle] <= m {
-			low = middle
-		} else {
-			high = middle
-		}
+	zone := 0
+	for zone+1 < len(zones) && m >= zones[zone+1].first {
+		k += zones[zone].columns
+		zone++
 	}
-	return low, (m - masses[low]) / (masses[low+1] - masses[low])
+	x := (m - zones[zone].first) / zones[zone].step
+	i := min(int(x), zones[zone].columns-1)
+	return k + i, min(x-float64(i), 1)
 }
 
-func (t *DwarfTable) columnOf(i int) *column {
-	if c := t.columns[i].Load(); c != nil {
+// massOf is the mass of a column.
+func massOf(k int) float64 {
+	for _, z := range zones {
+		if k < z.columns {
+			return z.first + float64(k)*z.step
+		}
+		k -= z.columns
+	}
+	return heaviestColumn
+}
+
+func (t *DwarfTable) columnOf(k int) *column {
+	if c := t.columns[k].Load(); c != nil {
 		return c
 	}
-	c := NewDwarf(masses[i], t.ions, t.env).column()
-	t.columns[i].Store(c)
+	c := NewDwarf(massOf(k), t.ions, t.env).column()
+	t.columns[k].Store(c)
 	return c
 }

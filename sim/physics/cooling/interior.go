@@ -57,21 +57,20 @@ const densityOverMean = 2.2
 // the mean phonon frequencies of a Coulomb crystal.
 const debyeOverPlasma = 0.45
 
-// latentSpread is the factor in interior temperature, from the melting
-// temperature down, over which a dwarf freezes: from the centre outwards, as
-// the density falls. Assumption; it moves no date below 1000 K.
-const latentSpread = 1.25
+// latentSpread is the factor in interior temperature, on either side of the
+// melting temperature, within which a dwarf freezes: from the centre outwards,
+// as the density falls. Assumption; dates below 1000 K do not feel it.
+const latentSpread = 1.1
 
 // fineStructure is e^2/(4 pi eps0 hbar c). Source: CODATA 2022.
 const fineStructure = 7.2973525643e-3
 
 // NewDwarf returns the dwarf of mass m.
 //
-//	n       = rho/(A m_u), rho = 2.2 x mean density
-//	theta   = 0.45 (hbar/k) sqrt(4 pi n Z^2 e^2/m_ion)
-//	T_melt  = Z^2 e^2/(Gamma a k), a = (3/(4 pi n))^1/3
-//	C_ions  = 3k Debye(theta/T_c) an ion, C_electrons = Z pi^2 k^2 T_c sqrt(1+x^2)/(m_e c^2 x^2), x = p_F/(m_e c)
-//	ratio   = r0 [(R/8841 km)^2 (0.6/M)]^2/7
+//	n      = rho/(A m_u), rho = 2.2 x mean density
+//	C_ions = 3k Debye(theta/T_c) an ion
+//	C_el   = Z pi^2 k^2 T_c sqrt(1+x^2)/(m_e c^2 x^2) an ion, x = p_F/(m_e c)
+//	r      = r0 [(R/8841 km)^2 (0.6/M)]^2/7
 //
 // Units: m in solar masses.
 // Domain: 0.001 <= m <= 1.44; radius of [structure.WhiteDwarfRadius].
@@ -79,29 +78,51 @@ const fineStructure = 7.2973525643e-3
 // heat.
 // Source: [ShapiroTeukolsky1983], chs. 3 and 4.
 func NewDwarf(m float64, ions Ions, env Envelope) Dwarf {
-	const kB, hbar, c = constant.Boltzmann, constant.HBar, constant.C
+	const kB, c = constant.Boltzmann, constant.C
 	r := structure.WhiteDwarfRadius(m)
+	rho := densityOverMean * structure.MeanDensity(m, r)
 	d := Dwarf{mass: m, radius: r, ions: ions, exponent: env.Exponent}
 	d.ratio = env.Ratio * num.Pow(r/8841*(r/8841)*0.6/m, 2.0/7)
-	ion := ions.A * constant.AtomicMass
-	n := densityOverMean * structure.MeanDensity(m, r) * 1000 / ion
-	z2e2 := ions.Z * ions.Z * fineStructure * hbar * c
-	d.debye = debyeOverPlasma * hbar / kB * math.Sqrt(4*math.Pi*n*z2e2/ion)
-	a := num.Pow(3/(4*math.Pi*n), 1.0/3)
-	d.melting = z2e2 / (a * kB * env.Freezing)
-	x := hbar * num.Pow(3*math.Pi*math.Pi*n*ions.Z, 1.0/3) / (constant.ElectronMass * c)
-	count := m * constant.Sun / ion
+	d.debye, d.melting = ions.DebyeTemperature(rho), ions.MeltingTemperature(rho, env.Freezing)
+	x := constant.HBar * num.Pow(3*math.Pi*math.Pi*ions.density(rho)*ions.Z, 1.0/3) / (constant.ElectronMass * c)
+	count := m * constant.Sun / (ions.A * constant.AtomicMass)
 	d.ionHeat, d.latentHeat = 3*kB*count, env.Latent*kB*count
 	d.electronHeat = count * ions.Z * math.Pi * math.Pi * kB * kB * math.Sqrt(1+x*x) / (constant.ElectronMass * c * c * x * x)
 	return d
 }
 
-// DebyeTemperature returns theta, K.
-func (d Dwarf) DebyeTemperature() float64 { return d.debye }
+// density is the number of ions in a cubic metre.
+func (i Ions) density(rho float64) float64 { return rho * 1000 / (i.A * constant.AtomicMass) }
 
-// MeltingTemperature returns the interior temperature at which Gamma reaches
-// the freezing value, K.
-func (d Dwarf) MeltingTemperature() float64 { return d.melting }
+// squaredCharge is Z^2 e^2/(4 pi eps0), J m.
+func (i Ions) squaredCharge() float64 {
+	return i.Z * i.Z * fineStructure * constant.HBar * constant.C
+}
+
+// DebyeTemperature returns theta of the ion crystal.
+//
+//	theta = 0.45 T_p, T_p = (hbar/k) sqrt(4 pi n Z^2 e^2/m_ion) (Gaussian units)
+//
+// Units: rho in g/cm3, result in K.
+// Domain: rho > 0. Error: 0.45 is an assumption.
+// Source: [ShapiroTeukolsky1983], sec. 4.3, for T_p.
+func (i Ions) DebyeTemperature(rho float64) float64 {
+	plasma := math.Sqrt(4 * math.Pi * i.density(rho) * i.squaredCharge() / (i.A * constant.AtomicMass))
+	return debyeOverPlasma * constant.HBar / constant.Boltzmann * plasma
+}
+
+// MeltingTemperature returns the temperature at which the Coulomb parameter
+// of the ions reaches gamma.
+//
+//	T = Z^2 e^2/(gamma a k), a = (3/(4 pi n))^1/3 (Gaussian units)
+//
+// Units: rho in g/cm3, result in K.
+// Domain: rho, gamma > 0. Error: rounding.
+// Source: [ShapiroTeukolsky1983], sec. 4.3.
+func (i Ions) MeltingTemperature(rho, gamma float64) float64 {
+	a := num.Pow(3/(4*math.Pi*i.density(rho)), 1.0/3)
+	return i.squaredCharge() / (a * constant.Boltzmann * gamma)
+}
 
 // Interior returns the interior temperature behind an effective temperature,
 // and how it changes: d T_c/d ln T.
@@ -124,11 +145,11 @@ func (d Dwarf) Interior(t float64) (core, slope float64) {
 
 // HeatCapacity returns the heat capacity of the whole dwarf, J/K, at interior
 // temperature core, K: ions, electrons, and the heat of freezing, given off
-// smoothly between the melting temperature and 1/1.25 of it.
+// smoothly within a factor 1.1 of the melting temperature.
 func (d Dwarf) HeatCapacity(core float64) float64 {
 	heat := d.ionHeat*Debye(d.debye/core) + d.electronHeat*core
-	const width = 1 - 1/latentSpread
-	u := (1 - core/d.melting) / width
+	const width = latentSpread - 1/latentSpread
+	u := (latentSpread - core/d.melting) / width
 	if u > 0 && u < 1 { // the integral of 30 u^2 (1-u)^2 is 1
 		heat += d.latentHeat / width * 30 * u * u * (1 - u) * (1 - u)
 	}

@@ -1,8 +1,6 @@
 package cooling
 
 import (
-	"math"
-
 	"wane/sim/num"
 	"wane/sim/physics/constant"
 )
@@ -123,10 +121,9 @@ func (n *NeutronStars) tail(logAge float64) float64 {
 	return -inverse / 2
 }
 
-// gauss integrates f from high to low by four-point Gauss-Legendre.
+// gauss integrates f of T over ln T from high to low, by two-point Gauss.
 func gauss(f func(float64) float64, high, low float64) float64 {
-	middle, half := (high+low)/2, math.Abs(high-low)/2
-	g := func(x float64) float64 { return f(num.Exp(x)) }
-	return half * (gaussNearWeight*(g(middle-gaussNear*half)+g(middle+gaussNear*half)) +
-		gaussFarWeight*(g(middle-gaussFar*half)+g(middle+gaussFar*half)))
+	const node = 0.57735026918962576 // 1/sqrt 3
+	middle, half := (high+low)/2, (high-low)/2
+	return half * (f(num.Exp(middle-node*half)) + f(num.Exp(middle+node*half)))
 }

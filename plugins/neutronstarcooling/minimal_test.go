@@ -1,0 +1,9 @@
+package neutronstarcooling
+
+import (
+	"testing"
+
+	"wane/sim/law/lawtest"
+)
+
+func TestMinimal(t *testing.T) { lawtest.Run(t, Minimal()) }

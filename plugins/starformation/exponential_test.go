@@ -1,0 +1,9 @@
+package starformation
+
+import (
+	"testing"
+
+	"wane/sim/law/lawtest"
+)
+
+func TestExponential(t *testing.T) { lawtest.Run(t, Exponential()) }
