@@ -174,6 +174,9 @@ func TestLatentHeat(t *testing.T) {
 
 func BenchmarkTable(b *testing.B) {
 	table := NewDwarfTable(HeliumIons(), DefaultEnvelope())
+	for m := 0.10; m < 0.53; m += 0.001 {
+		table.Temperature(m, 9)
+	}
 	m, age := 0.3, 9.0
 	for b.Loop() {
 		if m += 0.0137; m > 0.53 {

@@ -62,7 +62,7 @@ func (d Dwarf) cell(from, to float64) float64 {
 // rate is -dt/d ln T, s.
 func (d Dwarf) rate(lnT float64) float64 {
 	t := num.Exp(lnT)
-	core, slope := d.Interior(t)
+	core, slope := d.interior(lnT, t)
 	return d.HeatCapacity(core) * slope / watts(d.radius, t)
 }
 

@@ -134,12 +134,17 @@ func (i Ions) MeltingTemperature(rho, gamma float64) float64 {
 // Error: 0.2 to 0.3 dex at 5000 K between envelopes; not known far below.
 // Source: [ShapiroTeukolsky1983], eq. 4.1.11, above the knee; below it an
 // assumption that r0 and q span.
-func (d Dwarf) Interior(t float64) (core, slope float64) {
+func (d Dwarf) Interior(t float64) (core, slope float64) { return d.interior(num.Log(t), t) }
+
+// lnKnee is ln 5000.
+const lnKnee = 8.517193191416238
+
+func (d Dwarf) interior(lnT, t float64) (core, slope float64) {
 	if t > knee {
-		core = t * d.ratio * num.Pow(t/knee, 1.0/7)
+		core = t * d.ratio * num.Exp((lnT-lnKnee)/7)
 		return core, core * 8 / 7
 	}
-	excess := (d.ratio - 1) * num.Pow(t/knee, d.exponent)
+	excess := (d.ratio - 1) * num.Exp((lnT-lnKnee)*d.exponent)
 	return t * (1 + excess), t * (1 + (1+d.exponent)*excess)
 }
 
