@@ -38,7 +38,7 @@ func (*mestelDebye) Describe() law.Card {
 		},
 		Notes: []string{
 			"One density, 2.2 times the mean, and one kind of ion for the whole dwarf: He (2, 4), C/O (7, 14), O/Ne (9, 18). Assumptions.",
-			"theta = 0.45 of the ion plasma temperature; freezing spread from the melting temperature to 0.8 of it: assumptions.",
+			"theta = 0.45 of the ion plasma temperature; freezing spread over a factor 1.1 either side of the melting temperature: assumptions.",
 			"q = 1/7 carries the early envelope on without change and adds no free parameter: an assumption, for the late atmosphere is unsolved.",
 			"In massive dwarfs freezing falls into the bright phase and its heat is left out, as are separation of elements (1 - 8 Gyr for some) and hydrogen burning.",
 			"Dwarfs younger than Mestel's law at 1e5 K are held there. Hydrogen counts as helium; iron and others as oxygen-neon.",
