@@ -16,6 +16,7 @@ func None() law.Law { return none{} }
 func (none) Describe() law.Card {
 	return law.Card{
 		Process: "curvature", Name: "none", Version: "1",
+		Idle:    true,
 		Summary: "only black holes evaporate",
 		Formula: "dM/dt = 0",
 		Domain:  "every body; the effect without a horizon is contested",

@@ -15,6 +15,7 @@ func None() law.Law { return none{} }
 func (none) Describe() law.Card {
 	return law.Card{
 		Process: "dark-energy-decay", Name: "none", Version: "1",
+		Idle:      true,
 		Summary:   "dark energy never decays",
 		Formula:   "cumulative hazard 0",
 		Domain:    "exact if dark energy is a constant of nature",

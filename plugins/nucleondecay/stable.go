@@ -14,6 +14,7 @@ func Stable() law.Law { return stable{} }
 func (stable) Describe() law.Card {
 	return law.Card{
 		Process: "nucleon-decay", Name: "stable", Version: "1",
+		Idle:    true,
 		Summary: "nucleons never decay",
 		Formula: "dM/dt = 0",
 		Domain:  "every body; holds if baryon number is conserved at every energy",

@@ -15,6 +15,7 @@ func None() law.Law { return none{} }
 func (none) Describe() law.Card {
 	return law.Card{
 		Process: "vacuum-decay", Name: "none", Version: "1",
+		Idle:      true,
 		Summary:   "the vacuum never decays",
 		Formula:   "cumulative hazard 0",
 		Domain:    "exact if the vacuum is stable, which today's masses of the Higgs boson and the top quark allow at 1-2 sigma",

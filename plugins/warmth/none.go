@@ -10,6 +10,7 @@ func None() law.Law { return none{} }
 func (none) Describe() law.Card {
 	return law.Card{
 		Process: "warmth", Name: "none", Version: "1",
+		Idle:      true,
 		Summary:   "nothing but the sky warms cold bodies from outside",
 		Formula:   "L = 0",
 		Domain:    "every body; right if dark matter neither scatters nor annihilates",
