@@ -17,7 +17,7 @@ func sampled() *ensemble.Summary {
 		Ledger: ensemble.LedgerMeans{Founded: 7.6e10, Adrift: 1e10, Central: 2e8, Gas: 1e10, Radiated: 5.58e10},
 		Populations: []ensemble.Population{
 			{
-				Name: "stars", Condition: "star, founded", PeakCount: 1.2934e11, PeakDate: 10.8931,
+				Name: "stars", Condition: "founded stars", PeakCount: 1.2934e11, PeakDate: 10.8931,
 				Half:      ensemble.Mark{Date: 12.81331, Low: 12.8101, High: 12.8178, Error: 0.0021},
 				Hundredth: ensemble.Mark{Date: 13.12149, Low: 13.11801, High: 13.1255, Error: 0.0009},
 				Last:      ensemble.Mark{Date: 13.14971, Low: 13.14968, High: 13.14972, Error: 0.00001},
@@ -26,7 +26,7 @@ func sampled() *ensemble.Summary {
 				LastHangsOn: "lifetime/table", RealLast: 13.14973,
 			},
 			{
-				Name: "white-dwarfs", Condition: "white-dwarf", PeakCount: 1.2918e11, PeakDate: 13.149,
+				Name: "white-dwarfs", Condition: "white dwarfs", PeakCount: 1.2918e11, PeakDate: 13.149,
 				Half:      ensemble.Mark{Date: 38.2831, Low: 38.2815, High: 38.2848, Error: 0.0003},
 				Hundredth: ensemble.Mark{Date: 38.3391, Low: 38.3373, High: 38.3404, Error: 0.0003},
 				Last:      ensemble.Mark{Date: 38.3581, Low: 38.3549, High: 38.3598, Error: 0.0004},
@@ -44,14 +44,14 @@ func sampled() *ensemble.Summary {
 				LastHangsOn: "evaporation/page", RealLast: never,
 			},
 			{
-				Name: "central-hole", Condition: "central-hole", PeakCount: 1, PeakDate: 9,
+				Name: "central-hole", Condition: "the central hole", PeakCount: 1, PeakDate: 9,
 				Half:      ensemble.Mark{Date: never, Reason: "the run ended at 10^80 yr"},
 				Hundredth: ensemble.Mark{Date: never, Reason: "the run ended at 10^80 yr"},
 				Last:      ensemble.Mark{Date: never, Cut: 1, Reason: "the run ended at 10^80 yr"},
 				RealLast:  never,
 			},
 			{
-				Name: "a-population-of-a-scenario-with-a-long-name", Condition: "white-dwarf, adrift", PeakCount: 6e6, PeakDate: 18.4,
+				Name: "a-population-of-a-scenario-with-a-long-name", Condition: "white dwarfs adrift", PeakCount: 6e6, PeakDate: 18.4,
 				Half:      ensemble.Mark{Date: 19.5, Low: 19, High: 20, Error: 0.25},
 				Hundredth: ensemble.Mark{Date: 21, Low: 20, High: 22, Error: 0.4},
 				Last:      ensemble.Mark{Date: 22, Low: 21, High: 23, Error: 1.2},

@@ -92,13 +92,22 @@ func untold(s *ensemble.Summary) string {
 		return ""
 	}
 	var names []string
+	told := false
 	for _, population := range s.Populations {
-		if everMember(population) && !math.IsNaN(population.Last.Date) && math.IsNaN(population.RealLast) {
+		if !everMember(population) || math.IsNaN(population.Last.Date) {
+			continue
+		}
+		if math.IsNaN(population.RealLast) {
 			names = append(names, population.Name)
+		} else {
+			told = true
 		}
 	}
-	if len(names) == 0 {
+	switch {
+	case len(names) == 0:
 		return ""
+	case !told:
+		names = []string{"any population"}
 	}
 	return "How far the last of the real number lies beyond that of the sample cannot be told for " +
 		strings.Join(names, ", ") + "."

@@ -107,10 +107,10 @@ func Date(date, err float64) string {
 }
 
 // Count prints a number of objects to the given significant digits; small
-// whole numbers are printed as they are.
+// numbers, where all digits count, are printed as whole ones.
 func Count(n float64, digits int) string {
-	if n < 1e5 && n == math.Trunc(n) && digits >= 3 {
-		return strconv.FormatFloat(n, 'f', 0, 64)
+	if n < 1e5 && digits >= 3 {
+		return strconv.FormatFloat(math.Round(n), 'f', 0, 64)
 	}
 	return plainExponent(strconv.FormatFloat(n, 'g', digits, 64))
 }

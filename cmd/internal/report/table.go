@@ -148,13 +148,20 @@ func rowOf(s *ensemble.Summary, population ensemble.Population) row {
 // became of its members.
 func about(population ensemble.Population) string {
 	var parts []string
-	if c := population.Condition; c != "" && c+"s" != population.Name && c != population.Name {
+	if c := population.Condition; !sayTheSame(population.Name, c) {
 		parts = append(parts, "counts "+c)
 	}
 	if c := causes(population.Causes); c != "" {
 		parts = append(parts, "fate: "+c)
 	}
 	return strings.Join(parts, "; ")
+}
+
+// sayTheSame tells whether a name says all that a condition does: brown-dwarfs
+// and "brown dwarfs", central-hole and "the central hole".
+func sayTheSame(name, condition string) bool {
+	condition = strings.ReplaceAll(strings.TrimPrefix(condition, "the "), " ", "-")
+	return condition == "" || condition == name || condition+"s" == name
 }
 
 // reason is why a mark was never reached.
