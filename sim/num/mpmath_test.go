@@ -14,7 +14,7 @@ import (
 // its last place.
 type wide struct{ value, rest, ulp float64 }
 
-// mpmath evaluates a Python expression in x (and y) with 60 digits of the
+// mpmath evaluates a Python expression in x (and y) with 40 digits of the
 // reference library mpmath, for each line of arguments. Without the library
 // it skips, or fails where the environment says WANE_REQUIRE=1.
 func mpmath(t *testing.T, expression string, columns ...[]float64) []wide {
@@ -23,7 +23,7 @@ func mpmath(t *testing.T, expression string, columns ...[]float64) []wide {
 import sys
 from mpmath import *
 from math import ulp, isfinite
-mp.dps = 60
+mp.dps = 40
 f = lambda x, y=None: ` + expression + `
 for line in sys.stdin:
     v = f(*[mpf(float.fromhex(a)) for a in line.split()])

@@ -8,7 +8,7 @@ import (
 	"wane/sim/num"
 )
 
-var inf, nan = math.Inf(1), math.NaN()
+var inf, nan, negative0 = math.Inf(1), math.NaN(), math.Copysign(0, -1)
 
 // same reports equality of values, NaN equal to NaN, 0 unlike -0.
 func same(a, b float64) bool {
@@ -27,11 +27,23 @@ func TestSpecialCases(t *testing.T) {
 		{"Exp", num.Exp, -746, 0}, {"Exp", num.Exp, -1e300, 0}, {"Exp", num.Exp, least, 1},
 		{"Exp10", num.Exp10, 0, 1}, {"Exp10", num.Exp10, inf, inf}, {"Exp10", num.Exp10, -inf, 0}, {"Exp10", num.Exp10, nan, nan},
 		{"Exp10", num.Exp10, 308.3, inf}, {"Exp10", num.Exp10, 1e76, inf}, {"Exp10", num.Exp10, -324, 0}, {"Exp10", num.Exp10, -1e76, 0},
-		{"Log", num.Log, 0, -inf}, {"Log", num.Log, math.Copysign(0, -1), -inf}, {"Log", num.Log, -1, nan}, {"Log", num.Log, -inf, nan},
+		{"Log", num.Log, 0, -inf}, {"Log", num.Log, negative0, -inf}, {"Log", num.Log, -1, nan}, {"Log", num.Log, -inf, nan},
 		{"Log", num.Log, inf, inf}, {"Log", num.Log, nan, nan}, {"Log", num.Log, 1, 0},
 		{"Log", num.Log, least, -744.4400719213812}, {"Log", num.Log, greatest, 709.782712893384},
 		{"Log10", num.Log10, 0, -inf}, {"Log10", num.Log10, -1, nan}, {"Log10", num.Log10, inf, inf}, {"Log10", num.Log10, nan, nan},
 		{"Log10", num.Log10, 1, 0}, {"Log10", num.Log10, least, -323.3062153431158}, {"Log10", num.Log10, greatest, 308.25471555991674},
+		{"Log1p", num.Log1p, 0, 0}, {"Log1p", num.Log1p, negative0, negative0}, {"Log1p", num.Log1p, -1, -inf}, {"Log1p", num.Log1p, -1.5, nan},
+		{"Log1p", num.Log1p, -inf, nan}, {"Log1p", num.Log1p, inf, inf}, {"Log1p", num.Log1p, nan, nan}, {"Log1p", num.Log1p, least, least},
+		{"Log1p", num.Log1p, greatest, 709.782712893384},
+		{"Expm1", num.Expm1, 0, 0}, {"Expm1", num.Expm1, negative0, negative0}, {"Expm1", num.Expm1, -inf, -1}, {"Expm1", num.Expm1, -1e300, -1},
+		{"Expm1", num.Expm1, inf, inf}, {"Expm1", num.Expm1, 710, inf}, {"Expm1", num.Expm1, nan, nan}, {"Expm1", num.Expm1, least, least},
+		{"Sinh", num.Sinh, negative0, negative0}, {"Sinh", num.Sinh, inf, inf}, {"Sinh", num.Sinh, -inf, -inf}, {"Sinh", num.Sinh, nan, nan},
+		{"Sinh", num.Sinh, 711, inf}, {"Sinh", num.Sinh, -1e5, -inf}, {"Sinh", num.Sinh, least, least},
+		{"Asinh", num.Asinh, negative0, negative0}, {"Asinh", num.Asinh, inf, inf}, {"Asinh", num.Asinh, -inf, -inf}, {"Asinh", num.Asinh, nan, nan},
+		{"Tanh", num.Tanh, negative0, negative0}, {"Tanh", num.Tanh, inf, 1}, {"Tanh", num.Tanh, -inf, -1}, {"Tanh", num.Tanh, nan, nan},
+		{"Erf", num.Erf, negative0, negative0}, {"Erf", num.Erf, inf, 1}, {"Erf", num.Erf, -inf, -1}, {"Erf", num.Erf, -7, -1}, {"Erf", num.Erf, nan, nan},
+		{"Erfinv", num.Erfinv, negative0, negative0}, {"Erfinv", num.Erfinv, 1, inf}, {"Erfinv", num.Erfinv, -1, -inf}, {"Erfinv", num.Erfinv, 1.1, nan},
+		{"Erfinv", num.Erfinv, inf, nan}, {"Erfinv", num.Erfinv, nan, nan},
 	} {
 		if got := c.function(c.x); !same(got, c.want) {
 			t.Errorf("%s(%g) = %.17g, want %.17g", c.name, c.x, got, c.want)
@@ -86,6 +98,36 @@ func TestColumnsEqualScalars(t *testing.T) {
 		for i := range xs {
 			if !same(xs[i], dst[i]) {
 				t.Errorf("%sInto in place differs at %d", c.name, i)
+			}
+		}
+	}
+}
+
+// The special cases of Pow are those of IEEE 754 and C, which the standard
+// library follows; its answer is exact there on every machine.
+func TestPowSpecialCases(t *testing.T) {
+	values := []float64{0, negative0, 1, -1, 2, -2, 3, -3, 0.5, -0.5, 1.5, -2.5, inf, -inf, nan, 1e300, -1e300, 1e-300, 1 << 53, 1<<53 - 1, -(1<<53 - 1), 5e-324}
+	for _, x := range values {
+		for _, y := range values {
+			got, want := num.Pow(x, y), math.Pow(x, y)
+			if same(got, want) || want != 0 && math.Abs(got/want-1) < 1e-14 && !math.IsInf(want, 0) {
+				continue
+			}
+			t.Errorf("Pow(%g, %g) = %g, want %g", x, y, got, want)
+		}
+	}
+	for n := range 23 {
+		if got, want := num.Pow(10, float64(n)), num.Exp10(float64(n)); got != want {
+			t.Errorf("Pow(10, %d) = %.17g, want %.17g", n, got, want)
+		}
+	}
+}
+
+func TestEvenAndOdd(t *testing.T) {
+	for name, f := range map[string]func(float64) float64{"Sinh": num.Sinh, "Asinh": num.Asinh, "Tanh": num.Tanh, "Erf": num.Erf, "Erfinv": num.Erfinv} {
+		for _, x := range spread(1e-20, 1, 500) {
+			if f(-x) != -f(x) {
+				t.Errorf("%s(-%g) = %g, want %g", name, x, f(-x), -f(x))
 			}
 		}
 	}
