@@ -41,6 +41,7 @@ func (w *Workspace) dynamics(ctx context.Context) error {
 	if err := w.refresh(0); err != nil {
 		return err
 	}
+	w.note()
 	quiet, err := w.enterQuiet()
 	if err != nil {
 		return err
@@ -103,8 +104,6 @@ func (w *Workspace) scheduleDeath(i uint32, put func(float64, uint32)) {
 func (w *Workspace) quietLeg(ctx context.Context) error {
 	m, c := w.m, &w.c
 	w.quiet = true
-	w.steps = w.steps[:0]
-	w.note()
 	w.schedule.reset()
 	for k := range w.clocks {
 		w.clocks[k].reset()

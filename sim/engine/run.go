@@ -153,6 +153,9 @@ func (w *Workspace) rebase(t float64) {
 // changed takes in that galaxy values have changed at date t.
 func (w *Workspace) changed(t float64) error {
 	w.rebase(t)
+	if w.bound == 0 {
+		return nil
+	}
 	if w.bound < fewObjects || w.env.moved() || w.awaiting > 0 && 100*w.awaiting >= w.bound {
 		return w.refresh(t)
 	}
@@ -170,6 +173,9 @@ func (w *Workspace) refresh(t float64) error {
 		if err := w.resolve(t); err != nil {
 			return err
 		}
+	}
+	if w.bound == 0 {
+		return w.central.look(w, t)
 	}
 	window, err := w.env.refresh(max(t, w.central.since*num.Exp10(-w.env.unit)), w.reading)
 	if err != nil {

@@ -386,6 +386,7 @@ func (f *feeler) cool(r *rows) error {
 // Illinois variant of regula falsi, all stays side by side, with a bisection
 // where that is slow. The answer is in high.
 func (f *feeler) roots(open []int32, low, high, glow, ghigh []float64) error {
+	open = append([]int32(nil), open...)
 	side := make([]int8, len(low))
 	ages := make([]float64, len(open))
 	for try := 0; len(open) > 0 && try < 200; try++ {
