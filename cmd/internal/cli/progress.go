@@ -17,6 +17,7 @@ const patience = time.Second
 type bar struct {
 	mu          sync.Mutex
 	out         io.Writer // nil: never shown
+	begun       time.Time
 	progress    *mpb.Progress
 	line        *mpb.Bar
 	done, total int
@@ -25,7 +26,7 @@ type bar struct {
 }
 
 func newBar(w io.Writer, quiet bool) *bar {
-	b := &bar{}
+	b := &bar{begun: time.Now()}
 	if !quiet && isTerminal(w) {
 		b.out = w
 		b.timer = time.AfterFunc(patience, b.show)
@@ -56,7 +57,7 @@ func (b *bar) show() {
 	b.line = b.progress.New(int64(b.total), mpb.BarStyle().Lbound("[").Filler("=").Tip(">").Padding(" ").Rbound("]"),
 		mpb.BarRemoveOnComplete(),
 		mpb.PrependDecorators(decor.CountersNoUnit("%d of %d realisations ")),
-		mpb.AppendDecorators(decor.Elapsed(decor.ET_STYLE_GO)))
+		mpb.AppendDecorators(decor.NewElapsed(decor.ET_STYLE_GO, b.begun)))
 	b.line.SetCurrent(int64(b.done))
 }
 
