@@ -133,6 +133,9 @@ func (u *Use) checkInput(question string, in Batch) *Fault {
 
 // firstBad returns the first row that breaks the rule, or -1.
 func firstBad(r rule, values []float64) int {
+	if r.allHold(values) {
+		return -1
+	}
 	for i, v := range values {
 		if !r.holds(v) {
 			return i

@@ -47,6 +47,53 @@ func (r rule) holds(v float64) bool {
 	return v-v == 0
 }
 
+// allHold is holds for a whole column. Answers are checked on every run, so it
+// has a loop of its own for each rule.
+func (r rule) allHold(values []float64) bool {
+	good := 0
+	switch r {
+	case wait:
+		for _, v := range values {
+			if v >= -math.MaxFloat64 {
+				good++
+			}
+		}
+	case logZero:
+		for _, v := range values {
+			if v <= math.MaxFloat64 {
+				good++
+			}
+		}
+	case positive:
+		for _, v := range values {
+			if v > 0 && v <= math.MaxFloat64 {
+				good++
+			}
+		}
+	case atLeast0:
+		for _, v := range values {
+			if v >= 0 && v <= math.MaxFloat64 {
+				good++
+			}
+		}
+	case chance, share:
+		for _, v := range values {
+			if v >= 0 && v <= 1 {
+				good++
+			}
+		}
+	case finite:
+		for _, v := range values {
+			if v-v == 0 {
+				good++
+			}
+		}
+	default:
+		return false
+	}
+	return good == len(values)
+}
+
 func (r rule) String() string {
 	return [...]string{
 		"a finite number", "a number or +Inf (never)", "a number or -Inf (zero)", "a number or an infinity",

@@ -105,6 +105,13 @@ func (u *Use) Speaks(kind uint8, mass, metals float64) bool {
 	return true
 }
 
+// SpeaksForKind tells whether the law speaks for any object of this kind, and
+// whether for all of them.
+func (u *Use) SpeaksForKind(kind uint8) (any, all bool) {
+	any = int(kind) < len(u.accepts) && u.accepts[kind]
+	return any, any && u.Card.Accepts.Column == ""
+}
+
 // Limits returns the resolved range of Accepts.Column.
 func (u *Use) Limits() (low, high float64) { return u.limits[0], u.limits[1] }
 
