@@ -125,6 +125,8 @@ func TestFormat(t *testing.T) {
 		{Value{Number: 70.06400334, Unit: "yr", Log10: true}, "10^70.064 yr"},
 		{Value{Number: 9, Unit: "yr", Log10: true}, "10^9.000 yr (1e9 yr)"},
 		{Value{Number: 1e26, Unit: "yr", Log10: true}, "10^(10^26.000) yr"},
+		{Value{Number: -1000, Unit: "yr", Log10: true}, "at once"},
+		{Value{Number: -5e19, Unit: "K", Log10: true}, "10^(-5e19) K"},
 		{Value{Number: math.Inf(1), Unit: "yr", Log10: true}, "never"},
 		{Value{Number: math.Inf(-1), Unit: "yr", Log10: true}, "0 yr"},
 		{Value{Number: 6.1703e-9, Unit: "K"}, "6.1703e-9 K"},

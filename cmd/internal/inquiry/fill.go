@@ -6,6 +6,7 @@ import (
 	"strings"
 
 	"wane/sim/law"
+	"wane/sim/scenario/quantity"
 )
 
 // sweep replaces one input by a column of values.
@@ -105,7 +106,7 @@ func (a *asking) fillRadius(c column, rows int, s *sweep) ([]float64, bool) {
 	for i := range out {
 		out[i] = radius(a.kinds[kinds[i]], mass[i])
 	}
-	a.why[c.raw] = "by its structure"
+	a.why[c.raw] = "of a " + a.kinds[kinds[0]] + " of this mass"
 	return out, true
 }
 
@@ -228,7 +229,15 @@ func (a *asking) speaks(in law.Batch) error {
 	low, high := a.use.Limits()
 	if v != nil && !(v[0] >= low && v[0] < high) {
 		info, _ := law.ColumnNamed("", accepts.Column)
-		return fmt.Errorf("law %s: %s %v %s is outside its range, %v .. %v", a.use.ID(), accepts.Column, v[0], info.Unit, low, high)
+		want := ""
+		if !math.IsInf(low, -1) {
+			want = "from " + quantity.Format(low, info.Unit)
+		}
+		if !math.IsInf(high, 1) {
+			want += " to below " + quantity.Format(high, info.Unit)
+		}
+		return fmt.Errorf("law %s: %s %s is outside its range: want %s", a.use.ID(), accepts.Column,
+			quantity.Format(v[0], info.Unit), strings.TrimPrefix(strings.TrimSpace(want), "to "))
 	}
 	return nil
 }

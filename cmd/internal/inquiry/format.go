@@ -18,6 +18,10 @@ func Symbol(v Value) string {
 	return v.Unit
 }
 
+// atOnce is the log10 of a time in years below which it is none: laws answer
+// 10^-1000 yr for what has happened already.
+const atOnce = -300
+
 // Format prints a value with its unit, for people.
 func Format(v Value) string {
 	unit := quantity.Shown(v.Unit)
@@ -28,6 +32,10 @@ func Format(v Value) string {
 		return "never"
 	case v.Log10 && math.IsInf(v.Number, -1):
 		return strings.TrimSpace("0 " + unit)
+	case v.Log10 && v.Unit == "yr" && v.Number <= atOnce:
+		return "at once"
+	case v.Log10 && v.Number < -1e6:
+		return strings.TrimSpace("10^(" + short(v.Number, 5) + ") " + unit)
 	case v.Log10 && v.Number > 1e6:
 		return strings.TrimSpace("10^(10^" + strconv.FormatFloat(num.Log10(v.Number), 'f', 3, 64) + ") " + unit)
 	case v.Log10:
