@@ -1,8 +1,6 @@
 package num
 
-import (
-	"math"
-)
+import "math"
 
 // logEntry is a reciprocal of 10 bits and minus its logarithm in two parts,
 // the high one a multiple of 2^-42.
@@ -29,9 +27,12 @@ const (
 func Log(x float64) float64 {
 	bits := math.Float64bits(x)
 	if bits-leastBits >= normalBits {
-		return logFar(x, logNormal)
+		return logFar(x, &logTable, logSum)
 	}
-	return logNormal(bits, 0)
+	k, index, high, low := logReduce(bits)
+	t := &logTable[index]
+	a, b := logSplit(t.inverse, high, low)
+	return largeAndSmall(float64(k*lnTwoHigh)+t.high, a, logSmall(k, a, b, t))
 }
 
 // LogInto sets dst[i] to Log(src[i]), bit for bit.
@@ -42,13 +43,13 @@ func LogInto(dst, src []float64) {
 	for i, x := range src {
 		bits := math.Float64bits(x)
 		if bits-leastBits >= normalBits {
-			dst[i] = logFar(x, logNormal)
+			dst[i] = logFar(x, &logTable, logSum)
 			continue
 		}
 		k, index, high, low := logReduce(bits)
 		t := &logTable[index]
 		a, b := logSplit(t.inverse, high, low)
-		dst[i] = logSum(k, a, b, t)
+		dst[i] = largeAndSmall(float64(k*lnTwoHigh)+t.high, a, logSmall(k, a, b, t))
 	}
 }
 
@@ -58,9 +59,12 @@ func LogInto(dst, src []float64) {
 func Log10(x float64) float64 {
 	bits := math.Float64bits(x)
 	if bits-leastBits >= normalBits {
-		return logFar(x, log10Normal)
+		return logFar(x, &log10Table, log10Sum)
 	}
-	return log10Normal(bits, 0)
+	k, index, high, low := logReduce(bits)
+	t := &log10Table[index]
+	a, b := logSplit(t.inverse, high, low)
+	return largeAndSmall(float64(k*log10TwoHigh)+t.high, float64(a*tenHigh), log10Small(k, a, b, t))
 }
 
 // Log10Into sets dst[i] to Log10(src[i]), bit for bit.
@@ -71,33 +75,19 @@ func Log10Into(dst, src []float64) {
 	for i, x := range src {
 		bits := math.Float64bits(x)
 		if bits-leastBits >= normalBits {
-			dst[i] = logFar(x, log10Normal)
+			dst[i] = logFar(x, &log10Table, log10Sum)
 			continue
 		}
 		k, index, high, low := logReduce(bits)
 		t := &log10Table[index]
 		a, b := logSplit(t.inverse, high, low)
-		dst[i] = log10Sum(k, a, b, t)
+		dst[i] = largeAndSmall(float64(k*log10TwoHigh)+t.high, float64(a*tenHigh), log10Small(k, a, b, t))
 	}
 }
 
-func logNormal(bits uint64, exponent float64) float64 {
-	k, index, high, low := logReduce(bits)
-	t := &logTable[index]
-	a, b := logSplit(t.inverse, high, low)
-	return logSum(k+exponent, a, b, t)
-}
-
-func log10Normal(bits uint64, exponent float64) float64 {
-	k, index, high, low := logReduce(bits)
-	t := &log10Table[index]
-	a, b := logSplit(t.inverse, high, low)
-	return log10Sum(k+exponent, a, b, t)
-}
-
-// logFar is a logarithm of what is not positive, normal and finite; finish is
-// the logarithm of a number of given bits times 2^exponent.
-func logFar(x float64, finish func(bits uint64, exponent float64) float64) float64 {
+// logFar is a logarithm of what is not positive, normal and finite, by
+// the table and the sum of its base.
+func logFar(x float64, table *[128]logEntry, sum func(k, a, b float64, t *logEntry) float64) float64 {
 	switch {
 	case x == 0:
 		return math.Inf(-1)
@@ -106,7 +96,10 @@ func logFar(x float64, finish func(bits uint64, exponent float64) float64) float
 	case math.IsNaN(x) || math.IsInf(x, 1):
 		return x
 	}
-	return finish(math.Float64bits(x*0x1p54), -54)
+	k, index, high, low := logReduce(math.Float64bits(x * 0x1p54))
+	t := &table[index]
+	a, b := logSplit(t.inverse, high, low)
+	return sum(k-54, a, b, t)
 }
 
 // logReduce writes a normal number as 2^k z with z in [0.6836, 1.3672), z as
@@ -127,10 +120,18 @@ func logSplit(inverse, high, low float64) (a, b float64) {
 // logSum returns k ln 2 + ln c + ln(1 + a + b). The first two high parts and a
 // are exact and added without loss; all else is small.
 func logSum(k, a, b float64, t *logEntry) float64 {
-	w := float64(k*lnTwoHigh) + t.high
+	return largeAndSmall(float64(k*lnTwoHigh)+t.high, a, logSmall(k, a, b, t))
+}
+
+func logSmall(k, a, b float64, t *logEntry) float64 {
+	return logSeries(a+b) + (b + (float64(k*lnTwoLow) + t.low))
+}
+
+// largeAndSmall returns w + a + small, with |a| < |w| or w = 0, and small far
+// below both.
+func largeAndSmall(w, a, small float64) float64 {
 	sum := w + a
-	r := a + b
-	return sum + (((w - sum) + a) + (b + (float64(k*lnTwoLow) + t.low)) + logSeries(r))
+	return sum + (((w - sum) + a) + small)
 }
 
 // logSeries returns ln(1 + r) - r by its series to r^7/7.
@@ -140,17 +141,19 @@ func logSeries(r float64) float64 {
 		float64(r2*((-1.0/4+float64(r*(1.0/5)))+float64(r2*(-1.0/6+float64(r*(1.0/7))))))))
 }
 
+// log10e, and in two parts of which the first has 26 bits.
+const (
+	tenHigh = 0x1.bcb7b10000000p-2
+	tenLow  = 0x1.49b9438ca9aaep-28
+	ten     = 0x1.bcb7b1526e50ep-2
+)
+
 // log10Sum returns k log10 2 + log10 c + log10(1 + a + b); the product of a
-// with the 26-bit high part of log10 e is exact.
+// with the high part of log10 e is exact.
 func log10Sum(k, a, b float64, t *logEntry) float64 {
-	const (
-		eHigh = 0x1.bcb7b10000000p-2
-		eLow  = 0x1.49b9438ca9aaep-28
-		e     = 0x1.bcb7b1526e50ep-2
-	)
-	w := float64(k*log10TwoHigh) + t.high
-	ae := float64(a * eHigh)
-	sum := w + ae
-	small := float64(a*eLow) + float64((b+logSeries(a+b))*e)
-	return sum + (((w - sum) + ae) + (float64(k*log10TwoLow) + t.low + small))
+	return largeAndSmall(float64(k*log10TwoHigh)+t.high, float64(a*tenHigh), log10Small(k, a, b, t))
+}
+
+func log10Small(k, a, b float64, t *logEntry) float64 {
+	return float64((b+logSeries(a+b))*ten) + (float64(a*tenLow) + (float64(k*log10TwoLow) + t.low))
 }
