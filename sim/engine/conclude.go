@@ -1,9 +1,9 @@
 package engine
 
 import (
-	"fmt"
 	"math"
 	"math/bits"
+	"strings"
 
 	"wane/sim/fade"
 	"wane/sim/law"
@@ -199,6 +199,9 @@ func (m *Model) causeWord(code uint8) string {
 
 // lawOf is the law behind a cause, "process/name".
 func (m *Model) lawOf(code uint8) string {
+	if strings.HasPrefix(m.Causes[code].Outcome, becameWord) {
+		return m.live.ID() // what a star leaves does not set its date
+	}
 	if u := m.Set.Of(m.Causes[code].Process); u != nil {
 		return u.ID()
 	}
@@ -222,5 +225,3 @@ func (w *Workspace) evaporationStarts() float64 {
 	}
 	return math.NaN()
 }
-
-var _ = fmt.Sprint

@@ -30,9 +30,6 @@ func (w *Workspace) dynamics(ctx context.Context) error {
 		w.endAt = min(w.endAt, l)
 	}
 	w.endAt = w.linear(w.endAt)
-	if w.table == nil {
-		w.table = newRows(min(chunk, c.n))
-	}
 	clear(w.few)
 	if err := w.exposeAll(); err != nil {
 		return err

@@ -1,7 +1,5 @@
 package engine
 
-import "wane/sim/law"
-
 // exposeAll asks the susceptibilities of both stages of every object and
 // fills the sums. In a compact run nothing is held: see enterQuiet.
 func (w *Workspace) exposeAll() error {
@@ -46,27 +44,13 @@ func (w *Workspace) exposeAll() error {
 // first and in the second stage, and which way their hits are diverted.
 func (w *Workspace) exposeChunk(first, n int) (s0, s1 [][]float64, err error) {
 	m, c, a := w.m, &w.c, w.ask
-	r := w.table
-	r.resize(n)
 	stars := false
-	for i := range n {
-		j := first + i
-		r.id[i], r.gen[i] = uint32(j), 0
-		r.place[i], r.origin[i] = law.Bound, law.Founded
-		r.kind[i], r.comp[i], r.mass[i], r.birthMass[i] = c.kind0[j], law.Hydrogen, c.mass0[j], c.mass0[j]
-		r.metals[i] = c.metalsOf(j)
-		stars = stars || c.died[j] != 0
+	for _, d := range c.died[first : first+n] {
+		stars = stars || d != 0
 	}
-	r.contiguous = true
-	answers, err := a.exposures(r)
-	if err != nil {
+	r := a.firstStage(c, first, n)
+	if s0, err = a.exposures(r); err != nil {
 		return nil, nil, err
-	}
-	if w.hold == nil {
-		w.hold = make([][]float64, len(m.Clocks))
-	}
-	for k := range answers {
-		w.hold[k] = append(w.hold[k][:0], answers[k]...)
 	}
 	w.meets.take(w, 0, first, r)
 	if err := w.divertChunk(0, first, r); err != nil {
@@ -74,17 +58,18 @@ func (w *Workspace) exposeChunk(first, n int) (s0, s1 [][]float64, err error) {
 	}
 	if !stars {
 		w.meets.take(w, 1, first, r)
-		return w.hold, w.hold, w.divertChunk(1, first, r)
+		return s0, s0, w.divertChunk(1, first, r)
 	}
-	for i := range n {
-		j := first + i
-		r.kind[i], r.comp[i], r.mass[i], r.birthMass[i] = c.kind1[j], c.comp1[j], c.mass1[j], c.mass1[j]
+	w.hold = grown(w.hold, len(m.Clocks))
+	for k := range s0 {
+		w.hold[k], a.exposed[k] = a.exposed[k], w.hold[k] // kept from the next asking
 	}
-	if answers, err = a.exposures(r); err != nil {
+	r = a.secondStage(c, first, n)
+	if s1, err = a.exposures(r); err != nil {
 		return nil, nil, err
 	}
 	w.meets.take(w, 1, first, r)
-	return w.hold, answers, w.divertChunk(1, first, r)
+	return w.hold, s1, w.divertChunk(1, first, r)
 }
 
 // divertChunk is divert for objects first .. first+n-1.
@@ -109,7 +94,7 @@ func (w *Workspace) divert(stage int, r *rows, id func(int) int) error {
 		}
 		stream := w.ask.streams[d.use.Card.Process]
 		for i, share := range out.Columns[d.column].Values {
-			u := stream.Uniform(uint64(s.id[i]), s.gen[i]&^(mergerGeneration-1), drawDivert+uint32(d.column))
+			u := stream.Uniform(uint64(s.idOf(i)), s.genOf(i)&^(mergerGeneration-1), drawDivert+uint32(d.column))
 			if u < share {
 				w.c.turned[id(at(pick, i))] |= 1 << (2*d.clock + stage)
 			}

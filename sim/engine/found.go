@@ -11,134 +11,132 @@ import (
 // found makes the objects of one realisation: their births, lives, remnants
 // and prospects, whole generations in one batch a question.
 func (a *asker) found(c *columns) error {
-	m := a.m
-	c.resize(m, m.Objects)
-	r := newRows(min(chunk, m.Objects))
+	c.resize(a.m, a.m.Objects)
 	for first := 0; first < c.n; first += chunk {
-		n := min(chunk, c.n-first)
-		if err := a.foundChunk(c, r, first, n); err != nil {
+		if err := a.foundChunk(c, first, min(chunk, c.n-first)); err != nil {
 			return err
 		}
 	}
 	return nil
 }
 
-func (a *asker) foundChunk(c *columns, r *rows, first, n int) error {
+func (a *asker) foundChunk(c *columns, first, n int) error {
 	m := a.m
-	r.resize(n)
-	for i := range n {
-		r.id[i], r.gen[i] = uint32(first+i), 0
-		r.kind[i], r.comp[i], r.place[i], r.origin[i] = law.Star, law.Hydrogen, law.Bound, law.Founded
+	kind := c.kind0[first : first+n]
+	for i := range kind {
+		kind[i] = law.Star
 	}
-	r.contiguous = true
+	r := a.firstStage(c, first, n)
 	out, err := a.ask(m.mass, "mass", r, drawU)
 	if err != nil {
 		return err
 	}
-	copy(r.mass, out.Columns[0].Values)
-	copy(r.birthMass, r.mass)
+	copy(c.mass0[first:first+n], out.Columns[0].Values)
 	if out, err = a.ask(m.birth, "birth", r, drawU); err != nil {
 		return err
 	}
-	dates := a.arenaCopy(out.Columns[0].Values)
-	num.Exp10Into(c.birth[first:first+n], dates)
-	if err := a.foundMetals(c, r, first, dates); err != nil {
+	a.kept = append(a.kept[:0], out.Columns[0].Values...)
+	num.Exp10Into(c.birth[first:first+n], a.kept)
+	if err := a.foundMetals(c, r, a.kept); err != nil {
 		return err
 	}
 	if out, err = a.ask(m.sort, "sort", r, drawU); err != nil {
 		return err
 	}
-	copy(r.kind, out.Columns[0].Words)
-	copy(c.kind0[first:], r.kind)
-	copy(c.mass0[first:], r.mass)
-	return a.foundLives(c, r, first)
+	copy(kind, out.Columns[0].Words)
+	j := first + n
+	copy(c.death[first:j], c.birth[first:j])
+	clear(c.died[first:j])
+	clear(c.left[first:j])
+	clear(c.turned[first:j])
+	fill(c.leave[first:j], never)
+	place := c.place[first:j]
+	for i := range place {
+		place[i] = law.Bound
+	}
+	return a.foundLives(c, r)
 }
 
-// arenaCopy keeps an answer beyond the next ask.
-func (a *asker) arenaCopy(v []float64) []float64 {
-	a.kept = append(a.kept[:0], v...)
-	return a.kept
-}
-
-func (a *asker) foundMetals(c *columns, r *rows, first int, dates []float64) error {
+func (a *asker) foundMetals(c *columns, r *rows, dates []float64) error {
+	first := int(r.first)
 	r.other = append(r.other[:0], law.Numbers("log10_date", dates))
 	out, err := a.ask(a.m.metals, "metals", r, drawU)
 	if err != nil {
 		return err
 	}
-	copy(r.metals, out.Columns[0].Values)
+	z := out.Columns[0].Values
 	if first == 0 {
-		c.metals, c.metal = nil, r.metals[0]
+		c.metals, c.metal = nil, z[0]
 	}
-	for i, z := range r.metals {
-		if c.metals == nil && z != c.metal {
+	if c.metals == nil {
+		same := true
+		for _, v := range z {
+			same = same && v == c.metal
+		}
+		if !same {
 			c.metals = make([]float64, c.n)
-			for j := range first + i {
-				c.metals[j] = c.metal
-			}
-		}
-		if c.metals != nil {
-			c.metals[first+i] = z
+			fill(c.metals[:first], c.metal)
 		}
 	}
+	if c.metals != nil {
+		copy(c.metals[first:], z)
+	}
+	r.metals = a.metalColumn(c, first, r.n)
 	r.other = r.other[:0]
 	return nil
 }
 
 // foundLives asks how stars live and what they leave, then the prospects of
 // what they leave and of all that never was a star.
-func (a *asker) foundLives(c *columns, r *rows, first int) error {
-	m := a.m
-	n := r.n
-	for i := range n {
-		j := first + i
-		c.death[j], c.died[j] = c.birth[j], 0
-		c.leave[j], c.left[j], c.place[j], c.turned[j] = never, 0, law.Bound, 0
-	}
+func (a *asker) foundLives(c *columns, r *rows) error {
+	m, first, n := a.m, int(r.first), r.n
 	stars, pick := a.spoken(m.live, r)
 	if stars.n > 0 {
 		out, err := a.ask(m.live, "live", stars, drawU)
 		if err != nil {
 			return err
 		}
-		waits := out.Columns[0].Values
 		a.kept = grown(a.kept, stars.n)
-		num.Exp10Into(a.kept[:stars.n], waits)
-		for i := range stars.n {
-			j := first + at(pick, i)
-			c.death[j] = c.birth[j] + a.kept[i]
+		num.Exp10Into(a.kept, out.Columns[0].Values)
+		death, birth := c.death[first:first+n], c.birth[first:first+n]
+		for i, wait := range a.kept {
+			j := at(pick, i)
+			death[j] = birth[j] + wait
 		}
 	}
-	a.starProspect, a.latest = false, never
-	for _, u := range a.m.wearing {
-		a.starProspect = a.starProspect || u.Speaks(law.Star, 1, 0.02)
-	}
-	for _, u := range a.m.turning {
-		a.starProspect = a.starProspect || u.Speaks(law.Star, 1, 0.02)
-	}
-	var starEnd []prospect
-	if a.starProspect {
-		p, err := a.prospects(r, func(i int) float64 { return num.Log10(c.birth[first+i]) })
-		if err != nil {
-			return err
-		}
-		starEnd = append(starEnd, p...)
+	a.latest = never
+	starEnd, err := a.starProspects(c, r)
+	if err != nil {
+		return err
 	}
 	for _, u := range m.ends {
-		if err := a.remnantsOf(c, r, u, func(i int) int { return first + i }); err != nil {
+		if err := a.remnantsOf(c, r, u, nil); err != nil {
 			return err
 		}
 	}
-	for i := range n {
-		j := first + i
-		if c.kind0[j] == law.Star && c.died[j] == 0 && c.death[j] < never {
+	for i, k := range c.kind0[first : first+n] {
+		if j := first + i; k == law.Star && c.died[j] == 0 && c.death[j] < never {
 			return fmt.Errorf("engine: no law says what a star of %v Msun leaves", c.mass0[j])
 		}
 	}
-	return a.foundProspects(c, r, first, starEnd)
+	return a.foundProspects(c, first, n, starEnd)
 }
 
-// remnantsOf fills the second stage of the stars of r that u speaks for.
+// starProspects asks what wearing and turning laws have in store for stars, if
+// any speaks for them; else nil.
+func (a *asker) starProspects(c *columns, r *rows) ([]prospect, error) {
+	first := int(r.first)
+	for _, u := range append(append([]*law.Use(nil), a.m.wearing...), a.m.turning...) {
+		if any, _ := u.SpeaksForKind(law.Star); any {
+			p, err := a.prospects(r, func(i int) float64 { return num.Log10(c.birth[first+i]) })
+			return append([]prospect(nil), p...), err
+		}
+	}
+	return nil, nil
+}
+
+// remnantsOf fills the second stage of the stars of r that u speaks for. id
+// gives the object of a row; nil: rows are contiguous.
 func (a *asker) remnantsOf(c *columns, r *rows, u *law.Use, id func(int) int) error {
 	stars, pick := a.spoken(u, r)
 	if stars.n == 0 {
@@ -154,40 +152,49 @@ func (a *asker) remnantsOf(c *columns, r *rows, u *law.Use, id func(int) int) er
 		return err
 	}
 	s := a.streams[u.Card.Process]
-	a.words = grown(a.words, stars.n)
+	a.words, a.kinds = grown(a.words, stars.n), grown(a.kinds, stars.n)
 	for i := range stars.n {
-		w := 0
-		if len(words) > 1 {
-			w = pickWord(out, 0, len(words), i, s.Uniform(uint64(stars.id[i]), stars.gen[i], drawPick))
+		w := sure(out, len(words), i)
+		if w < 0 {
+			w = pickWord(out, 0, len(words), i, s.Uniform(uint64(stars.idOf(i)), stars.genOf(i), drawPick))
 		}
-		a.words[i] = uint8(w)
+		a.words[i], a.kinds[i] = uint8(w), kinds[w]
 	}
-	// The kind asked about in remain is that of the remnant, while r still
-	// says star for the other laws.
-	saved := a.savedKinds(stars)
-	for i := range stars.n {
-		stars.kind[i] = kinds[a.words[i]]
-	}
-	if out, err = a.ask(u, "remain", stars, drawSize); err != nil {
+	// The kind asked about in remain is that of the remnant, while the table
+	// still says star for the other laws.
+	asStars := stars.kind
+	stars.kind = a.kinds
+	out, err = a.ask(u, "remain", stars, drawSize)
+	stars.kind = asStars
+	if err != nil {
 		return err
 	}
 	mass, comp := out.Columns[0].Values, out.Columns[1].Words
 	for i := range stars.n {
-		j := id(at(pick, i))
-		if !(mass[i] <= c.mass0[j]) || mass[i] < 0 {
+		j := at(pick, i)
+		if id != nil {
+			j = id(j)
+		} else {
+			j += int(r.first)
+		}
+		if !(mass[i] <= c.mass0[j]) {
 			return &law.Fault{Law: u.ID(), Question: "remain", Row: i, Column: "mass",
 				Object: fmt.Sprintf("star, %.6g Msun", c.mass0[j]), Got: fmt.Sprintf("%v Msun", mass[i]), Want: "0 .. the star's mass"}
 		}
-		c.kind1[j], c.mass1[j], c.comp1[j] = stars.kind[i], mass[i], comp[i]
+		c.kind1[j], c.mass1[j], c.comp1[j] = a.kinds[i], mass[i], comp[i]
 		c.died[j] = causes[a.words[i]]
 	}
-	copy(stars.kind, saved)
 	return nil
 }
 
-func (a *asker) savedKinds(r *rows) []uint8 {
-	a.kinds = append(a.kinds[:0], r.kind[:r.n]...)
-	return a.kinds
+// sure returns the word that has all the chance, -1 when there is none.
+func sure(out law.Batch, words, row int) int {
+	for w := range words {
+		if out.Columns[w].Values[row] == 1 {
+			return w
+		}
+	}
+	return -1
 }
 
 // pickWord picks a word by its chances: the columns from first on, in order.
@@ -207,42 +214,38 @@ func pickWord(out law.Batch, first, words, row int, u float64) int {
 	return 0
 }
 
-// foundProspects turns r into the second stage and asks what ends it.
-func (a *asker) foundProspects(c *columns, r *rows, first int, starEnd []prospect) error {
+// foundProspects completes the second stage and asks what ends it.
+func (a *asker) foundProspects(c *columns, first, n int, starEnd []prospect) error {
 	latest := c.lastDeath
-	for i := range r.n {
-		j := first + i
-		if c.kind0[j] != law.Star || c.died[j] == 0 {
+	for j := first; j < first+n; j++ {
+		if c.died[j] == 0 {
 			c.kind1[j], c.mass1[j], c.comp1[j] = c.kind0[j], c.mass0[j], law.Hydrogen
 		}
 		if starEnd != nil && c.kind0[j] == law.Star {
-			if p := starEnd[i]; p.cause != 0 && p.date < 300 && num.Exp10(p.date) < c.death[j] {
-				if p.kind == law.NoWord {
-					return fmt.Errorf("engine: a star of %.6g Msun would be gone before it dies: not supported", c.mass0[j])
-				}
-				c.death[j], c.died[j] = num.Exp10(p.date), p.cause
-				c.kind1[j], c.mass1[j], c.comp1[j] = p.kind, p.mass, a.m.compositionOf(p.kind, r.comp[i])
+			if err := a.cutShort(c, j, starEnd[j-first]); err != nil {
+				return err
 			}
 		}
-		if c.death[j] > latest && !math.IsInf(c.death[j], 1) {
-			latest = c.death[j]
-		}
-		if c.birth[j] > latest {
-			latest = c.birth[j]
-		}
-		c.founded += c.mass0[j]
-		r.kind[i], r.mass[i], r.comp[i], r.birthMass[i] = c.kind1[j], c.mass1[j], c.comp1[j], c.mass1[j]
-		if c.died[j] != 0 {
-			r.gen[i] = 1
+		if d := c.death[j]; d <= math.MaxFloat64 {
+			latest = max(latest, d)
+		} else {
+			latest = max(latest, c.birth[j])
 		}
 	}
-	r.contiguous = false
 	c.lastDeath = latest
+	for _, x := range c.mass0[first : first+n] {
+		c.founded += x
+	}
+	r := a.secondStage(c, first, n)
+	since := func(i int) float64 { return num.Log10(c.death[first+i]) }
 	a.latest = num.Log10(latest)
-	if err := a.wearBound(c, r, func(i int) float64 { return num.Log10(c.death[first+i]) }); err != nil {
+	if err := a.wearBound(c, r, since); err != nil {
 		return err
 	}
-	ps, err := a.prospects(r, func(i int) float64 { return num.Log10(c.death[first+i]) })
+	if a.m.simpleEnds() {
+		return a.simpleProspects(c, r, since)
+	}
+	ps, err := a.prospects(r, since)
 	if err != nil {
 		return err
 	}
@@ -251,4 +254,18 @@ func (a *asker) foundProspects(c *columns, r *rows, first int, starEnd []prospec
 		c.noteGas(uint32(first+i), 0, p)
 	}
 	return a.foundChains(c, r, first, ps)
+}
+
+// cutShort ends a star's life by a prospect that comes before its death.
+func (a *asker) cutShort(c *columns, j int, p prospect) error {
+	if p.cause == 0 || p.date > 300 || num.Exp10(p.date) >= c.death[j] {
+		return nil
+	}
+	if p.kind == law.NoWord {
+		return fmt.Errorf("engine: law %s: a star of %.6g Msun would be gone before it dies: the engine has no place for that",
+			a.m.lawOf(p.cause), c.mass0[j])
+	}
+	c.death[j], c.died[j] = num.Exp10(p.date), p.cause
+	c.kind1[j], c.mass1[j], c.comp1[j] = p.kind, p.mass, a.m.compositionOf(p.kind, law.Hydrogen)
+	return nil
 }

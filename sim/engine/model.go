@@ -58,7 +58,8 @@ type Model struct {
 	timed                           []bool // per declared: moves with time alone
 	timedSlots                      []int
 	sums                            []bool // per clock: its sum is declared
-	deathsMatter                    bool   // a declared value changes when a star dies
+	simple                          bool
+	deathsMatter                    bool // a declared value changes when a star dies
 	stopFate                        law.Fate
 	stopCause, allAdrift            uint8
 	populations                     []population
@@ -126,6 +127,7 @@ func Compile(s Setup) (*Model, error) {
 	m.turning = actives(s.Set.OfRole(law.Turning))
 	m.cooling = actives(s.Set.OfRole(law.Cooling))
 	m.compileCauses()
+	m.compileSimple()
 	return m, errors.Join(m.compileClocks(), m.compileThresholds(), m.compilePopulations())
 }
 

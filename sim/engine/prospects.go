@@ -21,9 +21,9 @@ type prospect struct {
 // date at which the row's object entered its kind. The slice is good until
 // the next call.
 func (a *asker) prospects(r *rows, since func(int) float64) ([]prospect, error) {
-	a.found1 = grown(a.found1, r.n)
+	a.offers = grown(a.offers, r.n)
 	for i := range r.n {
-		a.found1[i] = prospect{date: never, kind: law.NoWord}
+		a.offers[i] = prospect{date: never, kind: law.NoWord}
 	}
 	if err := a.worn(r, since); err != nil {
 		return nil, err
@@ -33,12 +33,12 @@ func (a *asker) prospects(r *rows, since func(int) float64) ([]prospect, error) 
 			return nil, err
 		}
 	}
-	return a.found1, nil
+	return a.offers, nil
 }
 
 func (a *asker) offer(i int, p prospect) {
-	if p.date < a.found1[i].date {
-		a.found1[i] = p
+	if p.date < a.offers[i].date {
+		a.offers[i] = p
 	}
 }
 
@@ -147,10 +147,7 @@ func (a *asker) spokenAlone(w int, u *law.Use, r *rows) (*rows, []int32) {
 	if len(a.pick2) == s.n {
 		return s, pick
 	}
-	a.alone.resize(len(a.pick2))
-	for i, j := range a.pick2 {
-		a.alone.copyRow(i, r, int(j))
-	}
+	a.alone.gather(r, a.pick2)
 	return a.alone, a.pick2
 }
 
@@ -173,7 +170,7 @@ func (a *asker) turned(u *law.Use, r *rows, since func(int) float64) error {
 		}
 		w := 0
 		if words > 1 {
-			w = pickWord(out, 1, words, i, stream.Uniform(uint64(s.id[i]), s.gen[i], drawPick))
+			w = pickWord(out, 1, words, i, stream.Uniform(uint64(s.idOf(i)), s.genOf(i), drawPick))
 		}
 		o := u.Card.Outcomes[w]
 		if mass[i]+gas[i] > s.mass[i]*(1+1e-12) {

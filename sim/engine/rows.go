@@ -5,84 +5,175 @@ import (
 	"wane/sim/law"
 )
 
-// chunk is how many rows are asked at a time.
-const chunk = 16384
+// chunk is how many rows are asked at a time: few enough for their columns to
+// stay in the processor's cache. No answer depends on it.
+const chunk = 4096
 
-// rows is a table of objects about to be asked about. All columns have n rows.
+// rows is a table of objects about to be asked about. All columns have n rows;
+// they may be views of the galaxy's own columns, which laws only read.
 type rows struct {
-	n                         int
-	id                        []uint32
-	gen                       []uint32
-	kind, comp, place, origin []uint8
-	mass, birthMass, metals   []float64
-	other                     []law.Column // further columns by name
-	contiguous                bool         // ids rise by one, all of generation 0
+	n                       int
+	first                   uint32   // when contiguous: the id of row 0, ids rise by one
+	contiguous              bool     //
+	id                      []uint32 // otherwise
+	gen                     []uint32 // nil: all of generation gen0
+	gen0                    uint32
+	kind, comp              []uint8
+	place, origin           []uint8
+	mass, birthMass, metals []float64
+	other                   []law.Column // further columns by name
 }
 
 func newRows(capacity int) *rows {
-	return &rows{
-		id: make([]uint32, 0, capacity), gen: make([]uint32, 0, capacity),
-		kind: make([]uint8, 0, capacity), comp: make([]uint8, 0, capacity),
-		place: make([]uint8, 0, capacity), origin: make([]uint8, 0, capacity),
-		mass: make([]float64, 0, capacity), birthMass: make([]float64, 0, capacity),
-		metals: make([]float64, 0, capacity),
-	}
+	r := &rows{}
+	r.resize(capacity)
+	r.resize(0)
+	return r
 }
 
-// resize sets the number of rows; new rows hold anything.
+// resize makes a table of its own of n rows, which hold anything.
 func (r *rows) resize(n int) {
-	r.n = n
+	r.n, r.contiguous, r.gen0 = n, false, 0
 	r.id, r.gen = grown(r.id, n), grown(r.gen, n)
 	r.kind, r.comp, r.place, r.origin = grown(r.kind, n), grown(r.comp, n), grown(r.place, n), grown(r.origin, n)
 	r.mass, r.birthMass, r.metals = grown(r.mass, n), grown(r.birthMass, n), grown(r.metals, n)
-	r.other, r.contiguous = r.other[:0], false
+	r.other = r.other[:0]
 }
 
 func grown[T any](s []T, n int) []T {
 	if cap(s) < n {
-		return make([]T, n, 2*n)
+		return make([]T, n, n+n/4)
 	}
 	return s[:n]
 }
 
-// copyRow copies row j of from to row i.
+func (r *rows) idOf(i int) uint32 {
+	if r.contiguous {
+		return r.first + uint32(i)
+	}
+	return r.id[i]
+}
+
+func (r *rows) genOf(i int) uint32 {
+	if r.gen == nil {
+		return r.gen0
+	}
+	return r.gen[i]
+}
+
+// copyRow copies row j of from to row i of a table of its own.
 func (r *rows) copyRow(i int, from *rows, j int) {
-	r.id[i], r.gen[i] = from.id[j], from.gen[j]
+	r.id[i], r.gen[i] = from.idOf(j), from.genOf(j)
 	r.kind[i], r.comp[i], r.place[i], r.origin[i] = from.kind[j], from.comp[j], from.place[j], from.origin[j]
 	r.mass[i], r.birthMass[i], r.metals[i] = from.mass[j], from.birthMass[j], from.metals[j]
 }
 
+// gather fills r with the picked rows of from.
+func (r *rows) gather(from *rows, pick []int32) {
+	r.resize(len(pick))
+	for i, j := range pick {
+		r.id[i], r.gen[i] = from.idOf(int(j)), from.genOf(int(j))
+	}
+	gatherColumn(r.kind, from.kind, pick)
+	gatherColumn(r.comp, from.comp, pick)
+	gatherColumn(r.place, from.place, pick)
+	gatherColumn(r.origin, from.origin, pick)
+	gatherColumn(r.mass, from.mass, pick)
+	gatherColumn(r.birthMass, from.birthMass, pick)
+	gatherColumn(r.metals, from.metals, pick)
+	for _, o := range from.other {
+		c := law.Column{Name: o.Name, Values: make([]float64, len(pick))}
+		gatherColumn(c.Values, o.Values, pick)
+		r.other = append(r.other, c)
+	}
+}
+
+func gatherColumn[T any](dst, src []T, pick []int32) {
+	for i, j := range pick {
+		dst[i] = src[j]
+	}
+}
+
 // asker asks laws about rows. One per worker.
 type asker struct {
-	m            *Model
-	realisation  uint64
-	streams      map[string]draw.Stream
-	arena        law.Arena
-	columns      []law.Column
-	sub          *rows // rows of one law of several
+	m       *Model
+	streams map[string]draw.Stream
+	sky     Sky
+	arena   law.Arena
+	columns []law.Column
+	latest  float64 // log10: no since of the rows being asked is later
+
+	sub, alone   *rows // gathered rows
 	pick, pick2  []int32
-	alone        *rows
 	nodes        rows
-	found1       []prospect
+	view         rows // of the galaxy's columns
+	constants    constantColumns
+	offers       []prospect
+	linked       []int32
+	links        []prospect
 	kept, start  []float64
-	words        []uint8
-	kinds        []uint8
+	gens         []uint32
+	words, kinds []uint8
 	exposed      [][]float64
 	soughts      [][]float64
-	sky          Sky
-	latest       float64 // log10: no since of the rows being asked is later
-	starProspect bool
+}
+
+// constantColumns are columns that say the same of every row of a chunk.
+type constantColumns struct {
+	hydrogen, bound, founded []uint8
+	metals                   []float64
 }
 
 func newAsker(m *Model) *asker {
-	return &asker{m: m, streams: map[string]draw.Stream{}, sub: newRows(0), alone: newRows(0)}
+	a := &asker{m: m, streams: map[string]draw.Stream{}, sub: newRows(0), alone: newRows(0)}
+	n := min(chunk, m.Objects)
+	a.constants = constantColumns{make([]uint8, n), make([]uint8, n), make([]uint8, n), make([]float64, n)}
+	for i := range n {
+		a.constants.hydrogen[i], a.constants.bound[i], a.constants.founded[i] = law.Hydrogen, law.Bound, law.Founded
+	}
+	return a
 }
 
 func (a *asker) begin(realisation uint64) {
-	a.realisation = realisation
 	for _, p := range law.Processes {
 		a.streams[p.Name] = a.m.stream(realisation, p.Name)
 	}
+}
+
+// firstStage is a view of objects first .. first+n-1 as they are born.
+func (a *asker) firstStage(c *columns, first, n int) *rows {
+	a.view = rows{n: n, first: uint32(first), contiguous: true, other: a.view.other[:0],
+		kind: c.kind0[first : first+n], comp: a.constants.hydrogen[:n],
+		place: a.constants.bound[:n], origin: a.constants.founded[:n],
+		mass: c.mass0[first : first+n], birthMass: c.mass0[first : first+n], metals: a.metalColumn(c, first, n)}
+	return &a.view
+}
+
+// secondStage is a view of them as what they become.
+func (a *asker) secondStage(c *columns, first, n int) *rows {
+	r := a.firstStage(c, first, n)
+	r.kind, r.comp = c.kind1[first:first+n], c.comp1[first:first+n]
+	r.mass, r.birthMass = c.mass1[first:first+n], c.mass1[first:first+n]
+	r.gen = grown(a.gens, n)
+	a.gens = r.gen
+	for i := range n {
+		r.gen[i] = 0
+		if c.died[first+i] != 0 {
+			r.gen[i] = 1
+		}
+	}
+	return r
+}
+
+func (a *asker) metalColumn(c *columns, first, n int) []float64 {
+	if c.metals != nil {
+		return c.metals[first : first+n]
+	}
+	m := a.constants.metals[:n]
+	if n > 0 && (m[0] != c.metal || m[n-1] != c.metal) {
+		fill(a.constants.metals, c.metal)
+	}
+	return m
 }
 
 // ask asks one question about every row of r. number is the draw number of a
@@ -138,55 +229,56 @@ func (a *asker) column(use *law.Use, name, base string, r *rows, number uint32) 
 
 func (a *asker) uniforms(dst []float64, process string, r *rows, number uint32) {
 	s := a.streams[process]
-	if r.contiguous && r.n > 0 {
-		s.Uniforms(dst[:r.n], uint64(r.id[0]), 0, number)
+	if r.contiguous && r.gen == nil {
+		s.Uniforms(dst[:r.n], uint64(r.first), r.gen0, number)
 		return
 	}
 	for i := range r.n {
-		dst[i] = s.Uniform(uint64(r.id[i]), r.gen[i], number)
+		dst[i] = s.Uniform(uint64(r.idOf(i)), r.genOf(i), number)
 	}
 }
 
 func (a *asker) exponentials(dst []float64, process string, r *rows, number uint32) {
 	s := a.streams[process]
-	if r.contiguous && r.n > 0 {
-		s.Exps(dst[:r.n], uint64(r.id[0]), 0, number)
+	if r.contiguous && r.gen == nil {
+		s.Exps(dst[:r.n], uint64(r.first), r.gen0, number)
 		return
 	}
 	for i := range r.n {
-		dst[i] = s.Exp(uint64(r.id[i]), r.gen[i], number)
+		dst[i] = s.Exp(uint64(r.idOf(i)), r.genOf(i), number)
 	}
 }
 
 // spoken returns the rows of r that use speaks for: r itself when it speaks
-// for all, else a gathered copy, with the row numbers in a.pick. The copy is
-// good until the next call.
-func (a *asker) spoken(use *law.Use, r *rows) (*rows, []int32) {
-	a.pick = a.pick[:0]
-	for i := range r.n {
-		if use.Speaks(r.kind[i], r.mass[i], r.metals[i]) {
-			a.pick = append(a.pick, int32(i))
-		}
+// for all, else a gathered copy, with the row numbers in pick. Both are good
+// until the next call.
+func (a *asker) spoken(use *law.Use, r *rows) (s *rows, pick []int32) {
+	var some, all [256]bool
+	for k := range a.m.Set.Kinds {
+		some[k], all[k] = use.SpeaksForKind(uint8(k))
 	}
-	if len(a.pick) == r.n {
+	whole, none := true, true
+	for _, k := range r.kind[:r.n] {
+		whole = whole && all[k]
+		none = none && !some[k]
+	}
+	if whole {
 		return r, nil
 	}
-	a.sub.resize(len(a.pick))
-	for i, j := range a.pick {
-		a.sub.copyRow(i, r, int(j))
-	}
-	for _, o := range r.other {
-		c := law.Column{Name: o.Name, Values: a.arenaless(len(a.pick))}
-		for i, j := range a.pick {
-			c.Values[i] = o.Values[j]
+	a.pick = a.pick[:0]
+	if !none {
+		for i, k := range r.kind[:r.n] {
+			if all[k] || some[k] && use.Speaks(k, r.mass[i], r.metals[i]) {
+				a.pick = append(a.pick, int32(i))
+			}
 		}
-		a.sub.other = append(a.sub.other, c)
 	}
+	if len(a.pick) == r.n && r.n > 0 {
+		return r, nil
+	}
+	a.sub.gather(r, a.pick)
 	return a.sub, a.pick
 }
-
-// arenaless returns a fresh column: gathered columns outlive the arena's reset.
-func (a *asker) arenaless(n int) []float64 { return make([]float64, n) }
 
 // at returns the row of r that row i of the spoken rows stands for.
 func at(pick []int32, i int) int {

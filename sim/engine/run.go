@@ -36,7 +36,6 @@ type Workspace struct {
 	few           map[uint32]few // of the objects on the clocks in a compact run
 	hold          [][]float64
 	view          [2][][]float64
-	table         *rows
 	active        []uint32
 	isActive      []bool
 	unspent       [maxClocks]float64
