@@ -48,10 +48,10 @@ func TestErrorAgainstMpmath(t *testing.T) {
 		{"Log10", "log10(x)", num.Log10, 0.25, 4, 0.53},
 		{"Log10", "log10(x)", num.Log10, 1e-300, 1e300, 0.53},
 		{"Log10 subnormal", "log10(x)", num.Log10, 5e-324, 2e-308, 0.53},
-		{"Log1p", "log1p(x)", num.Log1p, -0.01, 0.01, 0.9},
-		{"Log1p", "log1p(x)", num.Log1p, -0.999999, 3, 0.9},
-		{"Log1p tiny", "log1p(x)", num.Log1p, 1e-18, 1e-2, 0.9},
-		{"Log1p", "log1p(x)", num.Log1p, 1e-3, 1e17, 0.9},
+		{"Log1p", "log1p(x)", num.Log1p, -0.01, 0.01, 0.53},
+		{"Log1p", "log1p(x)", num.Log1p, -0.999999, 3, 0.53},
+		{"Log1p tiny", "log1p(x)", num.Log1p, 1e-18, 1e-2, 0.53},
+		{"Log1p", "log1p(x)", num.Log1p, 1e-3, 1e17, 0.53},
 		{"Expm1", "expm1(x)", num.Expm1, -0.3, 0.3, 0.8},
 		{"Expm1", "expm1(x)", num.Expm1, -41, 41, 0.8},
 		{"Expm1 tiny", "expm1(x)", num.Expm1, 1e-18, 0.3, 0.8},
@@ -91,11 +91,11 @@ func TestPowAgainstMpmath(t *testing.T) {
 		name                     string
 		xLow, xHigh, yMax, bound float64
 	}{
-		{"moderate", 0.01, 100, 20, 0.7},
-		{"wide", 1e-300, 1e300, 1, 0.7},
-		{"near 1", 0.99, 1.01, 6e4, 0.7},
-		{"at 1", 1 - 1e-7, 1 + 1e-7, 6e9, 0.7},
-		{"subnormal", 5e-324, 1e-308, 0.95, 0.7},
+		{"moderate", 0.01, 100, 20, 0.52},
+		{"wide", 1e-300, 1e300, 1, 0.52},
+		{"near 1", 0.99, 1.01, 6e4, 0.52},
+		{"at 1", 1 - 1e-7, 1 + 1e-7, 6e9, 0.52},
+		{"subnormal", 5e-324, 1e-308, 0.95, 0.52},
 	} {
 		xs, ys := spread(f.xLow, f.xHigh, n), spread(-f.yMax, f.yMax, n+1)[:n]
 		worst, at := 0.0, 0
