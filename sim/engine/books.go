@@ -9,8 +9,16 @@ import (
 // books follows every solar mass of the sample.
 type books struct {
 	founded, bound, adrift, central, gas, radiated compensated
-	fired                                          []int64 // by cause
-	radiates                                       []bool  // by cause: what it takes is radiated rather than blown off
+	fired                                          []int64                         // by cause
+	radiates, turns                                []bool                          // by cause: what it takes is radiated; it is a turning
+	part                                           struct{ gas, radiated float64 } // of one chunk
+}
+
+// post enters a chunk's plain sums.
+func (b *books) post() {
+	b.gas.add(b.part.gas)
+	b.radiated.add(b.part.radiated)
+	b.part.gas, b.part.radiated = 0, 0
 }
 
 // compensated is a sum without gathered rounding (Neumaier 1974).
@@ -36,13 +44,13 @@ func abs(x float64) float64 {
 }
 
 func (b *books) reset(m *Model, c *columns) {
-	*b = books{fired: grown(b.fired, len(m.Causes)), radiates: b.radiates}
+	*b = books{fired: grown(b.fired, 256), radiates: b.radiates, turns: b.turns}
 	clear(b.fired)
 	if len(b.radiates) < len(m.Causes) {
-		b.radiates = make([]bool, len(m.Causes))
+		b.radiates, b.turns = make([]bool, len(m.Causes)), make([]bool, len(m.Causes))
 		for i, cause := range m.Causes {
 			p, _ := law.ProcessNamed(cause.Process)
-			b.radiates[i] = p.Role == law.Wearing
+			b.radiates[i], b.turns[i] = p.Role == law.Wearing, p.Role == law.Turning
 		}
 	}
 	for _, x := range c.mass0 {
@@ -75,7 +83,7 @@ func (b *books) life(w *Workspace, i uint32, dates [3]float64, limit float64) (m
 		return 0, stateGone
 	}
 	at = w.each(i, dates, limit, func(_ float64, from, to state, cause uint8) {
-		b.count(cause)
+		b.fired[cause]++
 		switch {
 		case from == stateGone:
 		case cause == c.left[i] && (to == stateGone || to%6/2 != from%6/2) && b.leaves(c, i, to):
@@ -104,12 +112,7 @@ func (b *books) leaves(c *columns, i uint32, to state) bool {
 	return (to == stateGone) == (c.place[i] != law.Adrift)
 }
 
-func (b *books) count(cause uint8) {
-	for int(cause) >= len(b.fired) {
-		b.fired = append(b.fired, 0)
-	}
-	b.fired[cause]++
-}
+func (b *books) count(cause uint8) { b.fired[cause]++ }
 
 // takes enters a mass that left the bound galaxy for the centre or as gas.
 func (b *books) takes(w *Workspace, i uint32, mass float64) {
@@ -125,22 +128,17 @@ func (b *books) takes(w *Workspace, i uint32, mass float64) {
 
 // loses enters what a change of stage gave off.
 func (b *books) loses(w *Workspace, i uint32, step int, cause uint8, loss float64) {
-	if w.turning(cause) {
+	if b.turns[cause] {
 		gas := w.c.gas[[2]uint32{i, uint32(max(step, 0))}]
 		b.gas.add(gas)
 		b.radiated.add(loss - gas)
 		return
 	}
-	if int(cause) < len(b.radiates) && b.radiates[cause] {
+	if b.radiates[cause] {
 		b.radiated.add(loss)
 		return
 	}
 	b.gas.add(loss)
-}
-
-func (w *Workspace) turning(cause uint8) bool {
-	p, _ := law.ProcessNamed(w.m.Causes[cause].Process)
-	return p.Role == law.Turning
 }
 
 // stageMass is the mass with which object i enters a stage.

@@ -113,20 +113,7 @@ func (w *Workspace) tally(end float64) error {
 	for first := 0; first < c.n; first += chunk {
 		size := min(chunk, c.n-first)
 		w.logChunk(first, size)
-		for i := range size {
-			id := uint32(first + i)
-			d := [3]float64{n.logs[0][i], n.logs[1][i], n.logs[2][i]}
-			if c.kind0[id] == law.NoWord {
-				continue
-			}
-			mass, at := w.books.life(w, id, d, end)
-			w.each(id, d, end, n.change)
-			switch at {
-			case stateGone:
-			default:
-				w.rests(at, mass)
-			}
-		}
+		w.tallyChunk(first, size, end)
 	}
 	h := stateOf(law.CentralHole, law.Central, law.Founded)
 	for _, e := range w.central.log {
@@ -140,6 +127,87 @@ func (w *Workspace) tally(end float64) error {
 		}
 	}
 	return w.tallyWarm(end)
+}
+
+// tallyChunk tallies objects first .. first+size-1. Most have lived the plain
+// life of birth, death, leaving and end, which plainLife knows by heart; the
+// rest go the general way.
+func (w *Workspace) tallyChunk(first, size int, end float64) {
+	c, n := &w.c, &w.counts
+	births, deaths, leaves := n.logs[0][:size], n.logs[1][:size], n.logs[2][:size]
+	special := c.chain != nil || c.origin != nil || c.gas != nil || end < never
+	for i := range size {
+		id := first + i
+		if !special && births[i] <= leaves[i] && w.plainLife(id, births[i], deaths[i], leaves[i]) {
+			continue
+		}
+		if c.kind0[id] == law.NoWord {
+			continue
+		}
+		d := [3]float64{births[i], deaths[i], leaves[i]}
+		if mass, at := w.books.life(w, uint32(id), d, end); at != stateGone {
+			w.rests(at, mass)
+		}
+		w.each(uint32(id), d, end, n.change)
+	}
+	w.books.post()
+}
+
+// plainLife tallies an object that lives without links, mergers or an end of
+// the run: it is born, may die as a star, may leave, and may end by its
+// prospect. It must say what books.life and each say.
+func (w *Workspace) plainLife(i int, birth, death, leave float64) bool {
+	c, n, b := &w.c, &w.counts, &w.books
+	now := stateOf(c.kind0[i], law.Bound, law.Founded)
+	n.change(birth, stateGone, now, 0)
+	mass, died, left := c.mass1[i], c.died[i], c.left[i]
+	adrift := c.place[i] == law.Adrift
+	if died != 0 {
+		if leave < death {
+			mass = c.mass0[i]
+			b.fired[left]++
+			if !adrift {
+				n.change(leave, now, stateGone, left)
+				b.takes(w, uint32(i), mass)
+				return true
+			}
+			n.change(leave, now, now+2*law.Adrift, left)
+			now += 2 * law.Adrift
+			leave = never
+		}
+		if death == never {
+			w.rests(now, c.mass0[i])
+			return true
+		}
+		to := stateOf(c.kind1[i], 0, law.Founded) + now%statesAKind
+		n.change(death, now, to, died)
+		b.fired[died]++
+		if b.radiates[died] {
+			b.part.radiated += c.mass0[i] - c.mass1[i]
+		} else {
+			b.part.gas += c.mass0[i] - c.mass1[i]
+		}
+		now, mass = to, c.mass1[i]
+	}
+	last, ended := c.end[i], c.ended[i]
+	if leave <= last && leave < never {
+		b.fired[left]++
+		if !adrift {
+			n.change(leave, now, stateGone, left)
+			b.takes(w, uint32(i), mass)
+			return true
+		}
+		n.change(leave, now, now+2*law.Adrift, left)
+		now += 2 * law.Adrift
+	}
+	if last == never {
+		w.rests(now, mass)
+		return true
+	}
+	n.change(last, now, stateGone, ended)
+	b.fired[ended]++
+	b.part.radiated += mass
+	return true
 }
 
 // rests enters what an object still weighs at the end.
