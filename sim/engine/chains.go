@@ -99,41 +99,59 @@ func (a *asker) linkUp(r *rows, owner *[]uint32, dates *[]float64, c *columns) e
 
 // exposures asks every susceptibility of every row, one column a clock. For
 // encounter clocks it is what the object seeks; what is sought of it is in
-// a.soughts. Good until the next call.
+// a.soughts. Good until the call after the next; a.soughts until the next.
 func (a *asker) exposures(r *rows) ([][]float64, error) {
-	for _, set := range []*[][]float64{&a.exposed, &a.soughts} {
-		*set = grown(*set, len(a.m.Clocks))
-		for k := range *set {
-			(*set)[k] = grown((*set)[k], r.n)
-			clear((*set)[k])
-		}
-	}
+	a.turn = 1 + a.turn%2
+	arena := &a.arenas[a.turn]
+	arena.Reset()
+	exposed := grown(a.exposed[a.turn-1], len(a.m.Clocks))
+	a.exposed[a.turn-1] = exposed
+	clear(exposed)
+	a.soughts = grown(a.soughts, len(a.m.Clocks))
+	clear(a.soughts)
+	a.arena = arena
+	defer func() { a.arena = &a.arenas[0] }()
 	for _, x := range a.m.exposing {
 		s, pick := a.spoken(x.use, r)
+		n := len(x.use.Card.Clocks)
 		if s.n == 0 {
 			continue
 		}
-		out, err := a.ask(x.use, "expose", s, drawU)
+		out, err := a.askKeeping(x.use, "expose", s, drawU)
 		if err != nil {
 			return nil, err
 		}
-		for k := range x.use.Card.Clocks {
-			dst := a.exposed[x.first+k]
-			for i, v := range out.Columns[k].Values {
-				dst[at(pick, i)] = v
-			}
-		}
-		if x.use != a.m.encounter {
-			continue
-		}
-		for k := range x.use.Card.Clocks {
-			dst := a.soughts[x.first+k]
-			for i, v := range out.Columns[len(x.use.Card.Clocks)+k].Values {
-				dst[at(pick, i)] = v
+		for k := range n {
+			exposed[x.first+k] = spread(arena, out.Columns[k].Values, pick, r.n)
+			if x.use == a.m.encounter {
+				a.soughts[x.first+k] = spread(arena, out.Columns[n+k].Values, pick, r.n)
 			}
 		}
 	}
-	return a.exposed, nil
+	for k := range exposed {
+		if exposed[k] == nil {
+			exposed[k] = arena.Values(r.n)
+			clear(exposed[k])
+		}
+		if a.soughts[k] == nil && a.m.encounter != nil {
+			a.soughts[k] = arena.Values(r.n)
+			clear(a.soughts[k])
+		}
+	}
+	return exposed, nil
+}
+
+// spread puts the answers for picked rows in their places, 0 in the others.
+func spread(arena *law.Arena, v []float64, pick []int32, n int) []float64 {
+	if pick == nil {
+		return v
+	}
+	dst := arena.Values(n)
+	clear(dst)
+	for i, j := range pick {
+		dst[j] = v[i]
+	}
+	return dst
 }
 
 // compositionOf is what an object of a kind is made of when a law does not

@@ -43,7 +43,7 @@ func (w *Workspace) exposeAll() error {
 // exposeChunk asks for objects first .. first+n-1: susceptibilities in the
 // first and in the second stage, and which way their hits are diverted.
 func (w *Workspace) exposeChunk(first, n int) (s0, s1 [][]float64, err error) {
-	m, c, a := w.m, &w.c, w.ask
+	c, a := &w.c, w.ask
 	stars := false
 	for _, d := range c.died[first : first+n] {
 		stars = stars || d != 0
@@ -60,16 +60,12 @@ func (w *Workspace) exposeChunk(first, n int) (s0, s1 [][]float64, err error) {
 		w.meets.take(w, 1, first, r)
 		return s0, s0, w.divertChunk(1, first, r)
 	}
-	w.hold = grown(w.hold, len(m.Clocks))
-	for k := range s0 {
-		w.hold[k], a.exposed[k] = a.exposed[k], w.hold[k] // kept from the next asking
-	}
 	r = a.secondStage(c, first, n)
 	if s1, err = a.exposures(r); err != nil {
 		return nil, nil, err
 	}
 	w.meets.take(w, 1, first, r)
-	return w.hold, s1, w.divertChunk(1, first, r)
+	return s0, s1, w.divertChunk(1, first, r)
 }
 
 // divertChunk is divert for objects first .. first+n-1.

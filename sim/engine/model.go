@@ -59,6 +59,7 @@ type Model struct {
 	timedSlots                      []int
 	sums                            []bool // per clock: its sum is declared
 	simple                          bool
+	voices                          map[*law.Use]*voice
 	deathsMatter                    bool // a declared value changes when a star dies
 	stopFate                        law.Fate
 	stopCause, allAdrift            uint8
@@ -128,6 +129,7 @@ func Compile(s Setup) (*Model, error) {
 	m.cooling = actives(s.Set.OfRole(law.Cooling))
 	m.compileCauses()
 	m.compileSimple()
+	m.compileVoices()
 	return m, errors.Join(m.compileClocks(), m.compileThresholds(), m.compilePopulations())
 }
 

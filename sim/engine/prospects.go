@@ -147,7 +147,7 @@ func (a *asker) spokenAlone(w int, u *law.Use, r *rows) (*rows, []int32) {
 	if len(a.pick2) == s.n {
 		return s, pick
 	}
-	a.alone.gather(r, a.pick2)
+	a.alone.gather(r, a.pick2, hasAll)
 	return a.alone, a.pick2
 }
 

@@ -68,19 +68,69 @@ func (r *rows) copyRow(i int, from *rows, j int) {
 	r.mass[i], r.birthMass[i], r.metals[i] = from.mass[j], from.birthMass[j], from.metals[j]
 }
 
-// gather fills r with the picked rows of from.
-func (r *rows) gather(from *rows, pick []int32) {
+// columnSet is a set of object columns.
+type columnSet uint8
+
+const (
+	hasKind columnSet = 1 << iota
+	hasComposition
+	hasPlace
+	hasOrigin
+	hasMass
+	hasBirthMass
+	hasMetals
+	hasAll = 1<<iota - 1
+)
+
+var columnBits = map[string]columnSet{"kind": hasKind, "composition": hasComposition, "place": hasPlace, "origin": hasOrigin,
+	"mass": hasMass, "birth_mass": hasBirthMass, "metals": hasMetals, "radius": hasKind | hasMass}
+
+// reads is the set of object columns that any question of a law reads; kind
+// and mass are always among them, for the engine's own use.
+func reads(u *law.Use) columnSet {
+	set := hasKind | hasMass
+	for _, q := range u.Card.Questions {
+		for _, in := range q.Inputs {
+			set |= columnBits[in]
+		}
+	}
+	return set
+}
+
+// gather fills r with the picked rows of from: the wanted columns only.
+func (r *rows) gather(from *rows, pick []int32, want columnSet) {
 	r.resize(len(pick))
 	for i, j := range pick {
-		r.id[i], r.gen[i] = from.idOf(int(j)), from.genOf(int(j))
+		r.id[i] = from.idOf(int(j))
 	}
-	gatherColumn(r.kind, from.kind, pick)
-	gatherColumn(r.comp, from.comp, pick)
-	gatherColumn(r.place, from.place, pick)
-	gatherColumn(r.origin, from.origin, pick)
-	gatherColumn(r.mass, from.mass, pick)
-	gatherColumn(r.birthMass, from.birthMass, pick)
-	gatherColumn(r.metals, from.metals, pick)
+	if from.gen == nil {
+		for i := range r.gen {
+			r.gen[i] = from.gen0
+		}
+	} else {
+		gatherColumn(r.gen, from.gen, pick)
+	}
+	if want&hasKind != 0 {
+		gatherColumn(r.kind, from.kind, pick)
+	}
+	if want&hasComposition != 0 {
+		gatherColumn(r.comp, from.comp, pick)
+	}
+	if want&hasPlace != 0 {
+		gatherColumn(r.place, from.place, pick)
+	}
+	if want&hasOrigin != 0 {
+		gatherColumn(r.origin, from.origin, pick)
+	}
+	if want&hasMass != 0 {
+		gatherColumn(r.mass, from.mass, pick)
+	}
+	if want&hasBirthMass != 0 {
+		gatherColumn(r.birthMass, from.birthMass, pick)
+	}
+	if want&hasMetals != 0 {
+		gatherColumn(r.metals, from.metals, pick)
+	}
 	for _, o := range from.other {
 		c := law.Column{Name: o.Name, Values: make([]float64, len(pick))}
 		gatherColumn(c.Values, o.Values, pick)
@@ -99,7 +149,9 @@ type asker struct {
 	m       *Model
 	streams map[string]draw.Stream
 	sky     Sky
-	arena   law.Arena
+	arena   *law.Arena
+	arenas  [3]law.Arena // the first is for all but exposures, which outlive the next question
+	turn    int
 	columns []law.Column
 	latest  float64 // log10: no since of the rows being asked is later
 
@@ -114,7 +166,7 @@ type asker struct {
 	kept, start  []float64
 	gens         []uint32
 	words, kinds []uint8
-	exposed      [][]float64
+	exposed      [2][][]float64
 	soughts      [][]float64
 }
 
@@ -126,6 +178,7 @@ type constantColumns struct {
 
 func newAsker(m *Model) *asker {
 	a := &asker{m: m, streams: map[string]draw.Stream{}, sub: newRows(0), alone: newRows(0)}
+	a.arena = &a.arenas[0]
 	n := min(chunk, m.Objects)
 	a.constants = constantColumns{make([]uint8, n), make([]uint8, n), make([]uint8, n), make([]float64, n)}
 	for i := range n {
@@ -180,11 +233,16 @@ func (a *asker) metalColumn(c *columns, first, n int) []float64 {
 // u column. The answer is good until the next ask.
 func (a *asker) ask(use *law.Use, question string, r *rows, number uint32) (law.Batch, error) {
 	a.arena.Reset()
+	return a.askKeeping(use, question, r, number)
+}
+
+// askKeeping is ask without taking back the answers before.
+func (a *asker) askKeeping(use *law.Use, question string, r *rows, number uint32) (law.Batch, error) {
 	a.columns = a.columns[:0]
 	for _, name := range inputsOf(use, question) {
 		a.columns = append(a.columns, a.column(use, name, name, r, number))
 	}
-	return use.Ask(question, law.Batch{Rows: r.n, Columns: a.columns}.With(&a.arena))
+	return use.Ask(question, law.Batch{Rows: r.n, Columns: a.columns}.With(a.arena))
 }
 
 // column is one column of r, by its name in the catalogue (base), under the
@@ -253,14 +311,11 @@ func (a *asker) exponentials(dst []float64, process string, r *rows, number uint
 // for all, else a gathered copy, with the row numbers in pick. Both are good
 // until the next call.
 func (a *asker) spoken(use *law.Use, r *rows) (s *rows, pick []int32) {
-	var some, all [256]bool
-	for k := range a.m.Set.Kinds {
-		some[k], all[k] = use.SpeaksForKind(uint8(k))
-	}
+	v := a.m.voices[use]
 	whole, none := true, true
 	for _, k := range r.kind[:r.n] {
-		whole = whole && all[k]
-		none = none && !some[k]
+		whole = whole && v.all[k]
+		none = none && !v.some[k]
 	}
 	if whole {
 		return r, nil
@@ -268,7 +323,7 @@ func (a *asker) spoken(use *law.Use, r *rows) (s *rows, pick []int32) {
 	a.pick = a.pick[:0]
 	if !none {
 		for i, k := range r.kind[:r.n] {
-			if all[k] || some[k] && use.Speaks(k, r.mass[i], r.metals[i]) {
+			if v.all[k] || v.some[k] && use.Speaks(k, r.mass[i], r.metals[i]) {
 				a.pick = append(a.pick, int32(i))
 			}
 		}
@@ -276,8 +331,26 @@ func (a *asker) spoken(use *law.Use, r *rows) (s *rows, pick []int32) {
 	if len(a.pick) == r.n && r.n > 0 {
 		return r, nil
 	}
-	a.sub.gather(r, a.pick)
+	a.sub.gather(r, a.pick, v.reads)
 	return a.sub, a.pick
+}
+
+// voice is for which kinds a law speaks, for some or all objects of a kind,
+// and which columns it reads.
+type voice struct {
+	some, all [256]bool
+	reads     columnSet
+}
+
+func (m *Model) compileVoices() {
+	m.voices = map[*law.Use]*voice{}
+	for _, u := range m.Set.All() {
+		v := &voice{reads: reads(u)}
+		for k := range m.Set.Kinds {
+			v.some[k], v.all[k] = u.SpeaksForKind(uint8(k))
+		}
+		m.voices[u] = v
+	}
 }
 
 // at returns the row of r that row i of the spoken rows stands for.

@@ -34,7 +34,6 @@ type Workspace struct {
 	compact       bool           // susceptibilities are not held
 	s             [2][][]float64 // by stage, clock, object
 	few           map[uint32]few // of the objects on the clocks in a compact run
-	hold          [][]float64
 	view          [2][][]float64
 	active        []uint32
 	isActive      []bool

@@ -64,6 +64,6 @@ func (a *asker) simpleProspects(c *columns, r *rows, since func(int) float64) er
 		return nil
 	}
 	few := newRows(len(a.linked))
-	few.gather(r, a.linked)
+	few.gather(r, a.linked, hasAll)
 	return a.chains(few, append([]prospect(nil), a.links...), func(i int) uint32 { return few.id[i] }, c)
 }
