@@ -54,6 +54,11 @@ func (w *Workspace) dynamics(ctx context.Context) error {
 	if err := w.fillClocks(); err != nil {
 		return err
 	}
+	if w.countsDown() {
+		if err := w.countdown(ctx); err != nil {
+			return err
+		}
+	}
 	return w.loop(ctx, never)
 }
 

@@ -137,11 +137,7 @@ func (w *Workspace) fire(k int, i uint32, t float64) error {
 		stage = 1
 	}
 	if w.c.turned[i]&(1<<(2*k+stage)) != 0 {
-		for _, d := range w.m.diverts {
-			if d.clock == k {
-				fate, cause = law.FateCentral, d.cause
-			}
-		}
+		fate, cause = law.FateCentral, w.diverted(k)
 	}
 	w.remove(i, t, fate, cause)
 	return w.changed(t)

@@ -181,27 +181,26 @@ func (w *Workspace) enterQuiet() (bool, error) {
 		if err != nil {
 			return false, err
 		}
+		w.reached0 = grown(w.reached0, n)
+		clear(w.reached0)
+		hurt := 0
 		for k := range m.Clocks {
 			w.drawExponentials(k, first, n)
+			hurt += markReached(w.reached0, c.reading[k][first:first+n], s0[k], s1[k], w.caps[k])
 		}
-		for i := range n {
-			j := first + i
-			hurt := false
-			for k := range m.Clocks {
-				if c.reading[k][j] <= max(s0[k][i], s1[k][i])*w.caps[k] {
-					hurt = true
+		if hurt > 0 {
+			for i, h := range w.reached0 {
+				if h {
+					w.active = append(w.active, uint32(first+i))
+					if w.compact {
+						w.hurt(first+i, s0, s1, i)
+					}
 				}
 			}
-			switch {
-			case hurt:
-				w.active = append(w.active, uint32(j))
-				if w.compact {
-					w.hurt(j, s0, s1, i)
-				}
-			case w.compact:
-				for k := range m.Clocks {
-					c.reading[k][j] = w.readingOf(k, j, c.reading[k][j], s0[k][i], s1[k][i], never)
-				}
+		}
+		if w.compact {
+			for k := range m.Clocks {
+				w.steadyReadings(k, first, n, s0[k], s1[k])
 			}
 		}
 		if len(w.active) > most {
@@ -209,6 +208,46 @@ func (w *Workspace) enterQuiet() (bool, error) {
 		}
 	}
 	return true, nil
+}
+
+// markReached marks the objects that a clock can reach before its cap, in
+// either stage, and counts them.
+func markReached(reached []bool, e, s0, s1 []float64, limit float64) int {
+	n := 0
+	s0, s1, e = s0[:len(reached)], s1[:len(reached)], e[:len(reached)]
+	for i, x := range e {
+		if x <= s0[i]*limit || x <= s1[i]*limit {
+			reached[i] = true
+			n++
+		}
+	}
+	return n
+}
+
+// steadyReadings is readingOf for a chunk, under the first piece of the
+// history and to the end of the leg; the objects that are on the clocks keep
+// their exponentials.
+func (w *Workspace) steadyReadings(k, first, n int, s0, s1 []float64) {
+	c, step := &w.c, &w.steps[0]
+	r, r0, t0 := step.rate[k], step.reading[k], step.t
+	x, birth, death, died := c.reading[k][first:first+n], c.birth[first:first+n], c.death[first:first+n], c.died[first:first+n]
+	s0, s1 = s0[:n], s1[:n]
+	for i, e := range x {
+		if w.reached0[i] {
+			continue
+		}
+		d := r0 + r*(birth[i]-t0)
+		if died[i] != 0 {
+			b := d
+			d = r0 + r*(death[i]-t0)
+			e -= s0[i] * (d - b)
+		}
+		if s1[i] == 0 {
+			x[i] = never
+			continue
+		}
+		x[i] = d + e/s1[i]
+	}
 }
 
 // susceptibilities of a chunk, held or asked anew.

@@ -22,29 +22,36 @@ func (w *Workspace) fillClocks() error {
 		w.clocks[k].reset()
 	}
 	w.setBounds()
-	for i := range uint32(c.n) {
-		if c.place[i] != law.Bound || w.stage[i] == 0 || w.stage[i]&waiting != 0 {
-			continue
-		}
-		if n == 1 {
-			if x := c.reading[0][i]; x < never {
-				w.clocks[0].put(x, i)
-			}
+	var now, rate [maxClocks]float64
+	for k := range n {
+		now[k], rate[k] = w.readingAt(k, w.t), w.env.Rates[k]
+	}
+	var lists [maxClocks]queue
+	for k := range n {
+		lists[k].keys, lists[k].ids = w.clocks[k].keys, w.clocks[k].ids
+	}
+	place, stage := c.place[:c.n], w.stage[:c.n]
+	for i, at := range place {
+		if at != law.Bound || stage[i] == 0 || stage[i]&waiting != 0 {
 			continue
 		}
 		var left [maxClocks]float64
 		first, soonest := 0, never
 		for k := range n {
-			left[k] = c.reading[k][i] - w.readingAt(k, w.t)
-			if r := w.env.Rates[k]; r > 0 && left[k]/r < soonest {
-				first, soonest = k, left[k]/r
+			left[k] = c.reading[k][i] - now[k]
+			if d := left[k] / rate[k]; d < soonest {
+				first, soonest = k, d
 			}
 		}
+		rho := &w.rho
 		for k := range n {
-			if x := c.reading[k][i]; x < never && (k == first || !(left[k] > w.rho[k][first]*left[first])) {
-				w.clocks[k].put(x, i)
+			if x := c.reading[k][i]; x < never && (k == first || !(left[k] > rho[k][first]*left[first])) {
+				lists[k].put(x, uint32(i))
 			}
 		}
+	}
+	for k := range n {
+		w.clocks[k].keys, w.clocks[k].ids = lists[k].keys, lists[k].ids
 	}
 	for k := range w.clocks {
 		w.clocks[k].sort()

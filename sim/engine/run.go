@@ -37,6 +37,7 @@ type Workspace struct {
 	view          [2][][]float64
 	active        []uint32
 	isActive      []bool
+	reached0      []bool
 	unspent       [maxClocks]float64
 	stayed        []stay
 	rho           [maxClocks][maxClocks]float64
