@@ -45,23 +45,48 @@ type Scratch struct {
 // allocation once the scratch has seen a population as large.
 func (s *Scratch) Find(entries, exits []float64) Marks {
 	in, out := scan(entries), scan(exits)
-	m := Marks{Remaining: in.n - out.n, LastIndex: out.lastIndex}
-	m.PeakAt, m.Half, m.Hundredth, m.Last = inf, inf, inf, inf
-	switch {
-	case in.n == 0:
+	if m, ok := s.apart(in.n, in.last, exits, out); ok {
 		return m
-	case out.n == 0 || in.last < out.first && out.first > 0:
-		// Everybody is in before the first leaves: marks are order
-		// statistics of the exits. (With negative dates: see below, slower.)
-		m.Peak, m.PeakAt = in.n, in.last
-		m.Half, m.Hundredth = s.orderStatistics(exits, out, in.n-in.n/2, in.n-in.n/100)
-	default:
-		s.search(&m, entries, exits, in, out)
 	}
+	m := newMarks(in.n, out)
+	s.search(&m, entries, exits, in, out)
+	m.close(out)
+	return m
+}
+
+// FindAfter is Find for a population that is known to have had so many
+// entries, all finite, the last at lastEntry; ok is false, and nothing is
+// found, when somebody leaves before that: then the entries matter one by one.
+func (s *Scratch) FindAfter(entered int, lastEntry float64, exits []float64) (m Marks, ok bool) {
+	return s.apart(entered, lastEntry, exits, scan(exits))
+}
+
+// apart finds the marks when everybody is in before the first leaves: they are
+// order statistics of the exits. (With negative dates it leaves the work to
+// search.)
+func (s *Scratch) apart(entered int, lastEntry float64, exits []float64, out extent) (m Marks, ok bool) {
+	m = newMarks(entered, out)
+	if entered == 0 {
+		return m, true
+	}
+	if out.n > 0 && !(lastEntry < out.first && out.first > 0) {
+		return m, false
+	}
+	m.Peak, m.PeakAt = entered, lastEntry
+	m.Half, m.Hundredth = s.orderStatistics(exits, out, entered-entered/2, entered-entered/100)
+	m.close(out)
+	return m, true
+}
+
+func newMarks(entered int, out extent) Marks {
+	return Marks{Remaining: entered - out.n, LastIndex: out.lastIndex, PeakAt: inf, Half: inf, Hundredth: inf, Last: inf}
+}
+
+// close sets the last date.
+func (m *Marks) close(out extent) {
 	if m.Remaining == 0 && m.Peak > 0 {
 		m.Last = out.last
 	}
-	return m
 }
 
 var inf = math.Inf(1)
