@@ -80,7 +80,10 @@ func (a *asker) linkUp(r *rows, owner *[]uint32, dates *[]float64, c *columns) e
 	for i, p := range ps {
 		l := link{mass: r.mass[i], kind: r.kind[i], comp: r.comp[i], end: p.date, ended: p.cause}
 		for k := range a.m.Clocks {
-			l.s[k], l.sought[k] = s[k][i], a.soughts[k][i]
+			l.s[k] = s[k][i]
+			if a.m.encounter != nil {
+				l.sought[k] = a.soughts[k][i]
+			}
 		}
 		c.chain[(*owner)[i]] = append(c.chain[(*owner)[i]], l)
 		c.noteGas((*owner)[i], len(c.chain[(*owner)[i]]), p)

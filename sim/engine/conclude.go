@@ -2,53 +2,12 @@ package engine
 
 import (
 	"math"
-	"math/bits"
 	"strings"
 
 	"wane/sim/fade"
 	"wane/sim/law"
 	"wane/sim/num"
 )
-
-// counts gathers entries and exits of the populations.
-type counts struct {
-	mask    [256]uint64 // populations without a condition on warmth, by state
-	entries [][]float64
-	exits   [][]float64
-	causes  [][]uint8
-	scratch fade.Scratch
-	logs    [3][]float64
-}
-
-func (n *counts) reset(m *Model) {
-	p := len(m.populations)
-	n.entries, n.exits, n.causes = grown(n.entries, p), grown(n.exits, p), grown(n.causes, p)
-	n.mask = [256]uint64{}
-	for i, pop := range m.populations {
-		n.entries[i], n.exits[i], n.causes[i] = n.entries[i][:0], n.exits[i][:0], n.causes[i][:0]
-		if pop.Warmth != nil {
-			continue
-		}
-		for s, in := range pop.in {
-			if in && state(s) != stateGone {
-				n.mask[s] |= 1 << i
-			}
-		}
-	}
-}
-
-// change enters one change of state.
-func (n *counts) change(date float64, from, to state, cause uint8) {
-	before, after := n.mask[from], n.mask[to]
-	for x := before &^ after; x != 0; x &= x - 1 {
-		p := bits.TrailingZeros64(x)
-		n.exits[p], n.causes[p] = append(n.exits[p], date), append(n.causes[p], cause)
-	}
-	for x := after &^ before; x != 0; x &= x - 1 {
-		p := bits.TrailingZeros64(x)
-		n.entries[p] = append(n.entries[p], date)
-	}
-}
 
 // conclude ends the realisation: the central hole's last prospect, the books,
 // and the populations.
@@ -67,7 +26,7 @@ func (w *Workspace) conclude() (*Outcome, error) {
 	if err := w.endCentral(o.End); err != nil {
 		return nil, err
 	}
-	w.counts.reset(m)
+	w.counts.reset(m, w.plainRun(o.End))
 	if err := w.tally(o.End); err != nil {
 		return nil, err
 	}
@@ -80,8 +39,8 @@ func (w *Workspace) conclude() (*Outcome, error) {
 			o.Fired[m.Causes[code].Process] += count
 		}
 	}
-	for i := range m.populations {
-		o.Populations = append(o.Populations, w.fadeOf(i, o.End))
+	for i, marks := range w.marks(o.End) {
+		o.Populations = append(o.Populations, w.fadeOf(i, marks))
 	}
 	o.Events = w.events
 	return o, nil
@@ -102,6 +61,14 @@ func (w *Workspace) endCentral(end float64) error {
 	return nil
 }
 
+// plainRun tells whether every life is plain: birth, perhaps a death as a star,
+// perhaps a leaving, perhaps one end by a prospect after that, all dates of the
+// dynamics in years, and no end of the run.
+func (w *Workspace) plainRun(end float64) bool {
+	c := &w.c
+	return c.chain == nil && c.origin == nil && c.gas == nil && end == never && !w.endsScheduled && w.env.unit == 0
+}
+
 // tally runs through all histories: books and populations, up to the end.
 func (w *Workspace) tally(end float64) error {
 	c, n := &w.c, &w.counts
@@ -112,102 +79,106 @@ func (w *Workspace) tally(end float64) error {
 	}
 	for first := 0; first < c.n; first += chunk {
 		size := min(chunk, c.n-first)
-		w.logChunk(first, size)
-		w.tallyChunk(first, size, end)
+		if n.plain {
+			w.tallyPlain(first, size)
+		} else {
+			w.tallyChunk(first, size, end)
+		}
 	}
-	h := stateOf(law.CentralHole, law.Central, law.Founded)
 	for _, e := range w.central.log {
-		if e.date > end {
+		date := e.date
+		if date > end {
 			continue
 		}
 		if e.exit {
-			n.change(e.date, h, stateGone, e.cause)
-		} else {
-			n.change(e.date, stateGone, h, 0)
+			n.ends(date, centralState, e.cause)
+			continue
 		}
+		if n.plain {
+			date = num.Exp10(date)
+		}
+		n.change(date, stateGone, centralState, 0)
 	}
 	return w.tallyWarm(end)
 }
 
-// tallyChunk tallies objects first .. first+size-1. Most have lived the plain
-// life of birth, death, leaving and end, which plainLife knows by heart; the
-// rest go the general way.
+// tallyChunk tallies objects first .. first+size-1.
 func (w *Workspace) tallyChunk(first, size int, end float64) {
 	c, n := &w.c, &w.counts
-	births, deaths, leaves := n.logs[0][:size], n.logs[1][:size], n.logs[2][:size]
-	special := c.chain != nil || c.origin != nil || c.gas != nil || end < never
+	w.logChunk(first, size)
 	for i := range size {
-		id := first + i
-		if !special && births[i] <= leaves[i] && w.plainLife(id, births[i], deaths[i], leaves[i]) {
-			continue
-		}
+		id := uint32(first + i)
 		if c.kind0[id] == law.NoWord {
 			continue
 		}
-		d := [3]float64{births[i], deaths[i], leaves[i]}
-		if mass, at := w.books.life(w, uint32(id), d, end); at != stateGone {
+		d := [3]float64{n.logs[0][i], n.logs[1][i], n.logs[2][i]}
+		if mass, at := w.books.life(w, id, d, end); at != stateGone {
 			w.rests(at, mass)
 		}
-		w.each(uint32(id), d, end, n.change)
+		w.each(id, d, end, n.change)
 	}
-	w.books.post()
 }
 
-// plainLife tallies an object that lives without links, mergers or an end of
-// the run: it is born, may die as a star, may leave, and may end by its
-// prospect. It must say what books.life and each say.
-func (w *Workspace) plainLife(i int, birth, death, leave float64) bool {
+// tallyPlain is tallyChunk in a plain run. It must say what books.life and each
+// say; it has no need to ask what kinds of things can happen.
+func (w *Workspace) tallyPlain(first, size int) {
 	c, n, b := &w.c, &w.counts, &w.books
-	now := stateOf(c.kind0[i], law.Bound, law.Founded)
-	n.change(birth, stateGone, now, 0)
-	mass, died, left := c.mass1[i], c.died[i], c.left[i]
-	adrift := c.place[i] == law.Adrift
-	if died != 0 {
-		if leave < death {
-			mass = c.mass0[i]
+	for i := first; i < first+size; i++ {
+		birth, death, leave := c.birth[i], c.death[i], c.leave[i]
+		died, left, adrift := c.died[i], c.left[i], c.place[i] == law.Adrift
+		now := stateOf(c.kind0[i], law.Bound, law.Founded)
+		mass := c.mass1[i]
+		if leave < birth {
+			b.fired[left]++
+			b.takes(w, uint32(i), c.mass0[i])
+			continue
+		}
+		n.change(birth, stateGone, now, 0)
+		if died != 0 {
+			if leave < death {
+				b.fired[left]++
+				if !adrift {
+					n.change(leave, now, stateGone, left)
+					b.takes(w, uint32(i), c.mass0[i])
+					continue
+				}
+				n.change(leave, now, now+2*law.Adrift, left)
+				now += 2 * law.Adrift
+				leave = never
+			}
+			if death == never {
+				w.rests(now, c.mass0[i])
+				continue
+			}
+			to := stateOf(c.kind1[i], 0, law.Founded) + now%statesAKind
+			n.change(death, now, to, died)
+			now = to
+			b.fired[died]++
+			if b.radiates[died] {
+				b.part.radiated += c.mass0[i] - mass
+			} else {
+				b.part.gas += c.mass0[i] - mass
+			}
+		}
+		if leave < never {
 			b.fired[left]++
 			if !adrift {
 				n.change(leave, now, stateGone, left)
 				b.takes(w, uint32(i), mass)
-				return true
+				continue
 			}
 			n.change(leave, now, now+2*law.Adrift, left)
 			now += 2 * law.Adrift
-			leave = never
 		}
-		if death == never {
-			w.rests(now, c.mass0[i])
-			return true
+		if c.end[i] == never {
+			w.rests(now, mass)
+			continue
 		}
-		to := stateOf(c.kind1[i], 0, law.Founded) + now%statesAKind
-		n.change(death, now, to, died)
-		b.fired[died]++
-		if b.radiates[died] {
-			b.part.radiated += c.mass0[i] - c.mass1[i]
-		} else {
-			b.part.gas += c.mass0[i] - c.mass1[i]
-		}
-		now, mass = to, c.mass1[i]
+		n.ends(c.end[i], now, c.ended[i])
+		b.fired[c.ended[i]]++
+		b.part.radiated += mass
 	}
-	last, ended := c.end[i], c.ended[i]
-	if leave <= last && leave < never {
-		b.fired[left]++
-		if !adrift {
-			n.change(leave, now, stateGone, left)
-			b.takes(w, uint32(i), mass)
-			return true
-		}
-		n.change(leave, now, now+2*law.Adrift, left)
-		now += 2 * law.Adrift
-	}
-	if last == never {
-		w.rests(now, mass)
-		return true
-	}
-	n.change(last, now, stateGone, ended)
-	b.fired[ended]++
-	b.part.radiated += mass
-	return true
+	b.post()
 }
 
 // rests enters what an object still weighs at the end.
@@ -234,27 +205,22 @@ func (w *Workspace) logChunk(first, n int) {
 	}
 }
 
-// fadeOf finds the marks of population p.
-func (w *Workspace) fadeOf(p int, end float64) PopulationOutcome {
+// fadeOf puts the marks of population p into words.
+func (w *Workspace) fadeOf(p int, marks fade.Marks) PopulationOutcome {
 	n := &w.counts
-	marks := n.scratch.Find(n.entries[p], n.exits[p])
 	o := PopulationOutcome{Peak: int64(marks.Peak), PeakDate: marks.PeakAt, Half: marks.Half, Hundredth: marks.Hundredth,
 		Last: marks.Last, Left: map[string]int64{}, Remaining: int64(marks.Remaining), RealLast: math.NaN()}
 	if o.Peak == 0 {
 		o.PeakDate = math.NaN()
 	}
 	o.CutHalf, o.CutHundredth, o.CutLast = o.Half == never, o.Hundredth == never, o.Last == never
-	tally := make([]int64, len(w.m.Causes)+1)
-	for _, cause := range n.causes[p] {
-		tally[cause]++
-	}
-	for code, count := range tally {
+	for code, count := range n.left[p] {
 		if count > 0 {
 			o.Left[w.m.causeWord(uint8(code))] += count
 		}
 	}
 	if marks.LastIndex >= 0 && marks.Last < never {
-		o.Hangs = w.m.lawOf(n.causes[p][marks.LastIndex])
+		o.Hangs = w.m.lawOf(n.lastWhy[p])
 	}
 	return o
 }

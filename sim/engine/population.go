@@ -25,7 +25,8 @@ func (s state) kind() uint8 { return uint8(s) / statesAKind }
 // warmth its members must have.
 type population struct {
 	galaxy.Population
-	in [256]bool
+	in        [256]bool
+	holdsEnds bool // a member may be adrift, or central, and no star: it ends by a prospect
 }
 
 func (m *Model) compilePopulations() error {
@@ -39,6 +40,9 @@ func (m *Model) compilePopulations() error {
 				for origin := range uint8(2) {
 					c.in[stateOf(kind, place, origin)] = matches(p.Kinds, m.Set.Kinds[kind]) &&
 						matches(p.Places, law.PlaceWords[place]) && matches(p.Origins, law.OriginWords[origin])
+					if c.in[stateOf(kind, place, origin)] && place != law.Bound && kind != law.Star {
+						c.holdsEnds = true
+					}
 				}
 			}
 		}

@@ -70,17 +70,17 @@ func (w *Workspace) enterWarm(p int, x *galaxy.Warmth, stays []stay, cross []flo
 		}
 		if !(from < to) || from > end {
 			if open {
-				n.exits[p], n.causes[p] = append(n.exits[p], s.enter), append(n.causes[p], w.m.coolCause(s.state.kind()))
+				n.exit(p, s.enter, w.m.coolCause(s.state.kind()))
 			}
 			open = false
 			continue
 		}
 		if !open {
-			n.entries[p] = append(n.entries[p], from)
+			n.give(p, from)
 		}
 		open = s.goes && to == s.leave
 		if !open && to <= end && to < never {
-			n.exits[p], n.causes[p] = append(n.exits[p], to), append(n.causes[p], cause)
+			n.exit(p, to, cause)
 		}
 	}
 }

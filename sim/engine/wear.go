@@ -293,12 +293,16 @@ func (w *Workspace) lighten(i uint32, loss float64) {
 func (w *Workspace) setSusceptibilities(i uint32, s, sought [][]float64, row int) {
 	stage := w.stageOf(i)
 	for k := range w.m.Clocks {
+		x := 0.0
+		if sought[k] != nil {
+			x = sought[k][row]
+		}
 		if stage > 2 {
 			l := &w.c.chain[i][stage-3]
-			l.s[k], l.sought[k] = s[k][row], sought[k][row]
+			l.s[k], l.sought[k] = s[k][row], x
 			continue
 		}
 		w.s[stage-1][k][i] = s[k][row]
-		w.meets.set(stage-1, k, i, sought[k][row])
+		w.meets.set(stage-1, k, i, x)
 	}
 }

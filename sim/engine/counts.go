@@ -1,0 +1,199 @@
+package engine
+
+import (
+	"math/bits"
+
+	"wane/sim/fade"
+	"wane/sim/law"
+	"wane/sim/num"
+)
+
+// counts gathers entries and exits of the populations in one realisation.
+//
+// Most populations have seen their last member enter before the first leaves.
+// Then the number of entries and the last of them are enough, and only exits
+// are kept; where they are not, a second run through the histories gathers the
+// entries of those populations.
+//
+// In a plain run (see Workspace.plainRun) birth, death and leaving are in years
+// and the end of a remnant in log10 years. A population none of whose members
+// ends that way is counted in years, and only its marks are turned into
+// logarithms.
+type counts struct {
+	mask    [256]uint64 // populations without a condition on warmth, by state
+	plain   bool        // dates of change are in years
+	inLog   uint64      // populations counted in log10 years
+	direct  uint64      // populations whose entries and exits are given, in log10 years
+	wanted  uint64      // populations whose entries are being gathered
+	entries [][]float64
+	exits   [][]float64
+	entered []int
+	lastIn  []float64 // of entries by change
+	left    [][256]int64
+	lastOut []float64
+	lastWhy []uint8
+	scratch fade.Scratch
+	logs    [3][]float64
+}
+
+func (n *counts) reset(m *Model, plain bool) {
+	p := len(m.populations)
+	n.entries, n.exits, n.entered = grown(n.entries, p), grown(n.exits, p), grown(n.entered, p)
+	n.lastIn, n.lastOut = grown(n.lastIn, p), grown(n.lastOut, p)
+	n.left, n.lastWhy = grown(n.left, p), grown(n.lastWhy, p)
+	n.mask, n.plain, n.inLog, n.direct, n.wanted = [256]uint64{}, plain, 0, 0, 0
+	clear(n.left)
+	for i := range m.populations {
+		pop := &m.populations[i]
+		n.entries[i], n.exits[i] = n.entries[i][:0], n.exits[i][:0]
+		n.entered[i], n.lastIn[i], n.lastOut[i] = 0, -never, -never
+		if pop.Warmth != nil {
+			n.direct |= 1 << i
+			n.inLog |= 1 << i
+			continue
+		}
+		if !plain || pop.holdsEnds {
+			n.inLog |= 1 << i
+		}
+		for s, in := range pop.in {
+			if in && state(s) != stateGone {
+				n.mask[s] |= 1 << i
+			}
+		}
+	}
+}
+
+// change enters one change of state.
+func (n *counts) change(date float64, from, to state, cause uint8) {
+	before, after := n.mask[from], n.mask[to]
+	for x := before &^ after; x != 0; x &= x - 1 {
+		p := bits.TrailingZeros64(x)
+		v := date
+		if n.plain && n.inLog>>p&1 != 0 {
+			v = num.Log10(date)
+		}
+		n.exit(p, v, cause)
+	}
+	for x := after &^ before; x != 0; x &= x - 1 {
+		p := bits.TrailingZeros64(x)
+		n.entered[p]++
+		n.lastIn[p] = max(n.lastIn[p], date)
+	}
+}
+
+// ends enters the end of an object at a log10 date.
+func (n *counts) ends(date float64, from state, cause uint8) {
+	for x := n.mask[from]; x != 0; x &= x - 1 {
+		n.exit(bits.TrailingZeros64(x), date, cause)
+	}
+}
+
+func (n *counts) exit(p int, date float64, cause uint8) {
+	n.exits[p] = append(n.exits[p], date)
+	n.left[p][cause]++
+	if date >= n.lastOut[p] {
+		n.lastOut[p], n.lastWhy[p] = date, cause
+	}
+}
+
+// enter gathers an entry for the populations that want it.
+func (n *counts) enter(date float64, from, to state, _ uint8) {
+	for x := n.mask[to] &^ n.mask[from] & n.wanted; x != 0; x &= x - 1 {
+		p := bits.TrailingZeros64(x)
+		v := date
+		if n.plain && n.inLog>>p&1 != 0 {
+			v = num.Log10(date)
+		}
+		n.entries[p] = append(n.entries[p], v)
+	}
+}
+
+// give enters a member directly, for populations with a condition on warmth.
+func (n *counts) give(p int, from float64) { n.entries[p] = append(n.entries[p], from) }
+
+// marks finds the marks of all populations, in log10 years.
+func (w *Workspace) marks(end float64) []fade.Marks {
+	n := &w.counts
+	out := make([]fade.Marks, len(w.m.populations))
+	for p := range out {
+		if n.direct>>p&1 != 0 {
+			out[p] = n.scratch.Find(n.entries[p], n.exits[p])
+			continue
+		}
+		last := n.lastIn[p]
+		if n.plain && n.inLog>>p&1 != 0 && n.entered[p] > 0 {
+			last = num.Log10(last)
+		}
+		var ok bool
+		if out[p], ok = n.scratch.FindAfter(n.entered[p], last, n.exits[p]); !ok {
+			n.wanted |= 1 << p
+		}
+	}
+	if n.wanted != 0 {
+		w.replay(end)
+		for p := range out {
+			if n.wanted>>p&1 != 0 {
+				out[p] = n.scratch.Find(n.entries[p], n.exits[p])
+			}
+		}
+	}
+	for p := range out {
+		if n.inLog>>p&1 == 0 {
+			for _, x := range []*float64{&out[p].PeakAt, &out[p].Half, &out[p].Hundredth, &out[p].Last} {
+				*x = num.Log10(*x)
+			}
+		}
+	}
+	return out
+}
+
+// replay runs through the histories again for the entries that are wanted.
+func (w *Workspace) replay(end float64) {
+	c, n := &w.c, &w.counts
+	for _, t := range w.meets.journal {
+		if d := w.logDate(t.date); d <= end {
+			n.enter(d, t.from, t.to, t.cause)
+		}
+	}
+	for i := range uint32(c.n) {
+		if n.plain {
+			w.plainEntries(i)
+			continue
+		}
+		w.each(i, w.logDates(i), end, n.enter)
+	}
+	for _, e := range w.central.log {
+		if !e.exit && e.date <= end {
+			n.enter(e.date, stateGone, centralState, 0)
+		}
+	}
+}
+
+// plainEntries is each in a plain run, for entries alone: its dates are years.
+func (w *Workspace) plainEntries(i uint32) {
+	c, n := &w.c, &w.counts
+	birth, death, leave := c.birth[i], c.death[i], c.leave[i]
+	if leave < birth {
+		return
+	}
+	now := stateOf(c.kind0[i], law.Bound, law.Founded)
+	n.enter(birth, stateGone, now, 0)
+	if leave < death && leave < never {
+		if c.place[i] != law.Adrift {
+			return
+		}
+		n.enter(leave, now, now+2*law.Adrift, 0)
+		now += 2 * law.Adrift
+		leave = never
+	}
+	if c.died[i] != 0 && death < never {
+		to := stateOf(c.kind1[i], 0, law.Founded) + now%statesAKind
+		n.enter(death, now, to, 0)
+		now = to
+	}
+	if leave < never && c.place[i] == law.Adrift {
+		n.enter(leave, now, now+2*law.Adrift, 0)
+	}
+}
+
+const centralState = state(law.CentralHole*statesAKind + law.Central*2 + law.Founded)
