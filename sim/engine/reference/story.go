@@ -38,3 +38,8 @@ func (g *run) record(o *object, date float64, gone bool, cause Cause) {
 	}
 	o.changes = append(o.changes, c)
 }
+
+func (g *run) isTurning(c Cause) bool {
+	p, _ := law.ProcessNamed(c.Process)
+	return p.Role == law.Turning
+}
