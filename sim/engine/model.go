@@ -59,6 +59,7 @@ type Model struct {
 	timedSlots                      []int
 	sums                            []bool // per clock: its sum is declared
 	simple                          bool
+	coolsByMetals                   bool
 	voices                          map[*law.Use]*voice
 	deathsMatter                    bool // a declared value changes when a star dies
 	stopFate                        law.Fate
@@ -179,6 +180,7 @@ func (m *Model) compileCauses() {
 		}
 	}
 	for _, u := range m.cooling {
+		m.coolsByMetals = m.coolsByMetals || reads(u)&^(hasKind|hasMass|hasComposition) != 0
 		m.cause(u.Card.Process, cooledWord)
 	}
 	m.cause("warmth", cooledWord)

@@ -4,6 +4,7 @@ import (
 	"context"
 	"math"
 
+	"wane/sim/galaxy"
 	"wane/sim/law"
 	"wane/sim/num"
 )
@@ -40,6 +41,7 @@ type Workspace struct {
 	reached0      []bool
 	unspent       [maxClocks]float64
 	stayed        []stay
+	warmNodes     map[galaxy.Warmth]map[nodeKey]float64
 	rho           [maxClocks][maxClocks]float64
 	broken        [maxClocks][maxClocks]bool
 	checked       int

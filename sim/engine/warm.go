@@ -36,8 +36,12 @@ func (w *Workspace) tallyWarm(end float64) error {
 
 func (w *Workspace) tallyOne(p int, pop *population, end float64) error {
 	stays := w.stays(pop, end)
-	for first := 0; first < len(stays); first += chunk {
-		part := stays[first:min(first+chunk, len(stays))]
+	for first, last := 0, 0; first < len(stays); first = last {
+		last = min(first+chunk, len(stays))
+		for last < len(stays) && stays[last].follows {
+			last++ // the stays of one object are looked at together
+		}
+		part := stays[first:last]
 		cross, warmAtStart, err := w.crossings(pop.Warmth, part, end)
 		if err != nil {
 			return err
@@ -168,59 +172,165 @@ func (w *Workspace) crossings(x *galaxy.Warmth, stays []stay, end float64) ([]fl
 	if err != nil {
 		return nil, nil, err
 	}
-	low, high := make([]float64, n), make([]float64, n) // log10 ages of the bracket
-	warm, cross := make([]bool, n), make([]float64, n)
-	at := make([]float64, n)
+	f.cross, f.warm = make([]float64, n), make([]bool, n)
+	f.low, f.high = make([]float64, n), make([]float64, n)
+	f.glow, f.ghigh = make([]float64, n), make([]float64, n)
+	fill(f.cross, never)
+	// What has fallen below in one stay is still below in the next, unless
+	// something keeps it warmer there.
+	var first, next []int32
 	for j, s := range stays {
-		cross[j] = never
-		low[j] = num.Sub10(s.enter, s.entered)
-		at[j] = max(low[j], youngest)
+		if s.follows {
+			next = append(next, int32(j))
+		} else {
+			first = append(first, int32(j))
+		}
 	}
-	g, err := f.excess(at, nil)
-	if err != nil {
+	if err := f.solve(first, end); err != nil {
 		return nil, nil, err
+	}
+	open := next[:0]
+	for _, j := range next {
+		if f.warm[j-1] && f.cross[j-1] >= stays[j-1].leave || f.steady[j] > f.steady[j-1] {
+			open = append(open, j)
+		}
+	}
+	return f.cross, f.warm, f.solve(open, end)
+}
+
+// solve finds the crossings of the chosen stays.
+func (f *feeler) solve(which []int32, end float64) error {
+	if len(which) == 0 {
+		return nil
+	}
+	ages := make([]float64, len(which))
+	for k, j := range which {
+		s := &f.stays[j]
+		f.low[j] = youngest
+		if s.enter > s.entered {
+			f.low[j] = max(num.Sub10(s.enter, s.entered), youngest)
+		}
+		ages[k] = f.low[j]
+	}
+	g, err := f.excess(ages, which)
+	if err != nil {
+		return err
 	}
 	var open []int32
-	glow, ghigh := make([]float64, n), make([]float64, n)
-	for j, s := range stays {
-		warm[j] = g[j] > 0
-		if !warm[j] {
-			continue
+	for k, j := range which {
+		f.glow[j] = g[k]
+		if f.warm[j] = g[k] > 0; f.warm[j] {
+			open = append(open, j)
 		}
-		low[j], glow[j] = at[j], g[j]
-		last := min(s.leave, end)
-		if last > forever {
-			last = forever
-		}
-		high[j] = max(num.Sub10(last, s.entered), low[j])
-		open = append(open, int32(j))
 	}
-	pick := make([]float64, len(open))
+	if open, err = f.bracket(open, end); err != nil {
+		return err
+	}
+	if err := f.roots(open); err != nil {
+		return err
+	}
+	for _, j := range open {
+		s := &f.stays[j]
+		f.cross[j] = min(max(later(s.entered, f.high[j]), s.enter), s.leave)
+	}
+	return nil
+}
+
+// bracket brings a crossing between low and high: by the guess of the nodes
+// first, by the end of the stay where that fails. It returns the stays that
+// have one.
+func (f *feeler) bracket(open []int32, end float64) ([]int32, error) {
+	if len(open) == 0 {
+		return nil, nil
+	}
+	last := func(s *stay) float64 {
+		l := min(s.leave, end, forever)
+		if s.entered > l-unseen {
+			l = num.Sub10(l, s.entered)
+		}
+		return l
+	}
+	guess, err := f.guesses(open)
+	if err != nil {
+		return nil, err
+	}
+	tops := make([]float64, len(open))
 	for k, j := range open {
-		pick[k] = high[j]
+		tops[k] = max(last(&f.stays[j]), f.low[j])
+		if guess != nil && guess[k]+nodeMargin < tops[k] {
+			tops[k] = max(guess[k]+nodeMargin, f.low[j])
+		}
 	}
-	if g, err = f.excess(pick, open); err != nil {
-		return nil, nil, err
+	g, err := f.excess(tops, open)
+	if err != nil {
+		return nil, err
 	}
-	still := open[:0]
+	var have, missed []int32
 	for k, j := range open {
-		if ghigh[j] = g[k]; g[k] <= 0 {
-			still = append(still, j)
+		switch {
+		case g[k] <= 0:
+			f.high[j], f.ghigh[j] = tops[k], g[k]
+			have = append(have, j)
+		default:
+			if f.low[j] < tops[k] {
+				f.low[j], f.glow[j] = tops[k], g[k]
+			}
+			missed = append(missed, j)
 		}
 	}
-	if err := f.roots(still, low, high, glow, ghigh); err != nil {
-		return nil, nil, err
+	if err := f.raise(have, guess, open); err != nil {
+		return nil, err
 	}
-	for _, j := range still {
-		cross[j] = later(stays[j].entered, high[j])
-		if cross[j] > stays[j].leave {
-			cross[j] = stays[j].leave
-		}
-		if cross[j] < stays[j].enter {
-			cross[j] = stays[j].enter
+	if guess == nil || len(missed) == 0 {
+		return have, nil
+	}
+	tops = tops[:0]
+	for _, j := range missed {
+		tops = append(tops, max(last(&f.stays[j]), f.low[j]))
+	}
+	if g, err = f.excess(tops, missed); err != nil {
+		return nil, err
+	}
+	for k, j := range missed {
+		if g[k] <= 0 {
+			f.high[j], f.ghigh[j] = tops[k], g[k]
+			have = append(have, j)
 		}
 	}
-	return cross, warm, nil
+	return have, nil
+}
+
+// raise moves the lower ends of brackets up to just below the guess.
+func (f *feeler) raise(have []int32, guess []float64, open []int32) error {
+	if guess == nil {
+		return nil
+	}
+	var which []int32
+	var ages []float64
+	k := 0
+	for _, j := range have {
+		for open[k] != j {
+			k++
+		}
+		if g := guess[k] - nodeMargin; g > f.low[j] && g < f.high[j] {
+			which, ages = append(which, j), append(ages, g)
+		}
+	}
+	if len(which) == 0 {
+		return nil
+	}
+	g, err := f.excess(ages, which)
+	if err != nil {
+		return err
+	}
+	for k, j := range which {
+		if g[k] > 0 {
+			f.low[j], f.glow[j] = ages[k], g[k]
+		} else {
+			f.high[j], f.ghigh[j] = ages[k], g[k]
+		}
+	}
+	return nil
 }
 
 const (
@@ -240,6 +350,13 @@ type feeler struct {
 	part   *rows
 	age    []float64
 	g      []float64
+	bare   bool   // solving nodes
+	dark   []bool // the sky is too cold to be felt at the threshold
+
+	cross       []float64
+	warm        []bool
+	low, high   []float64 // log10 ages of the bracket
+	glow, ghigh []float64
 }
 
 func (w *Workspace) newFeeler(x *galaxy.Warmth, stays []stay) (*feeler, error) {
@@ -266,19 +383,35 @@ func (w *Workspace) newFeeler(x *galaxy.Warmth, stays []stay) (*feeler, error) {
 	if err := f.heats(); err != nil {
 		return nil, err
 	}
+	least := never
 	for j := range n {
-		switch {
-		case x.Unit == "floor":
-			f.goal[j] = num.Log10(x.Value)
-		case x.Quantity == "luminosity":
-			r := radiusOf(f.all.kind[j], f.all.mass[j]) * 1e3
-			f.goal[j] = 0.25 * num.Log10(x.Value*constant.SunL/(4*math.Pi*r*r*constant.StefanBoltzmann))
-		default:
-			f.goal[j] = num.Log10(x.Value)
-		}
+		f.goal[j] = f.goalOf(f.all.kind[j], f.all.mass[j])
+		least = min(least, f.goal[j])
+	}
+	f.dark = make([]bool, n)
+	from := -never
+	if w.sky != nil && x.Unit != "floor" {
+		from = w.sky.LogColderSince(least - skyUnfelt)
+	}
+	for j, s := range stays {
+		f.dark[j] = x.Unit != "floor" && s.enter >= from
 	}
 	return f, nil
 }
+
+// goalOf is log10 of the temperature an object must be above, in K; for a
+// floor, of the multiple.
+func (f *feeler) goalOf(kind uint8, mass float64) float64 {
+	if f.x.Quantity == "luminosity" && f.x.Unit != "floor" {
+		r := radiusOf(kind, mass) * 1e3
+		return 0.25 * num.Log10(f.x.Value*constant.SunL/(4*math.Pi*r*r*constant.StefanBoltzmann))
+	}
+	return num.Log10(f.x.Value)
+}
+
+// skyUnfelt: a sky colder than the threshold by this many decades adds less
+// than 1e-10 of the power.
+const skyUnfelt = 2.5
 
 // heats sums what keeps each object warm from within and without, but the sky.
 func (f *feeler) heats() error {
@@ -341,7 +474,7 @@ func (f *feeler) excess(age []float64, which []int32) ([]float64, error) {
 			j = int(which[k])
 		}
 		floor4 := f.steady[j]
-		if f.w.sky != nil {
+		if f.w.sky != nil && !f.dark[j] {
 			floor4 += num.Exp10(4 * f.w.sky.LogTemperature(later(f.stays[j].entered, f.age[k])))
 		}
 		goal := f.goal[j]
@@ -385,8 +518,9 @@ func (f *feeler) cool(r *rows) error {
 // roots narrows the brackets [low, high] (log10 ages) to the crossing by the
 // Illinois variant of regula falsi, all stays side by side, with a bisection
 // where that is slow. The answer is in high.
-func (f *feeler) roots(open []int32, low, high, glow, ghigh []float64) error {
+func (f *feeler) roots(open []int32) error {
 	open = append([]int32(nil), open...)
+	low, high, glow, ghigh := f.low, f.high, f.glow, f.ghigh
 	side := make([]int8, len(low))
 	ages := make([]float64, len(open))
 	for try := 0; len(open) > 0 && try < 200; try++ {
@@ -403,6 +537,8 @@ func (f *feeler) roots(open []int32, low, high, glow, ghigh []float64) error {
 		}
 		still := open[:0]
 		for k, j := range open {
+			// How far the zero can be from here, by the slope of the bracket.
+			off := math.Abs(g[k]) * (high[j] - low[j]) / (glow[j] - ghigh[j])
 			if g[k] > 0 {
 				low[j], glow[j] = ages[k], g[k]
 				if side[j] == 1 {
@@ -416,9 +552,11 @@ func (f *feeler) roots(open []int32, low, high, glow, ghigh []float64) error {
 				}
 				side[j] = -1
 			}
-			if high[j]-low[j] > coolTol && g[k] != 0 {
-				still = append(still, j)
+			if off < coolTol || high[j]-low[j] < coolTol {
+				high[j] = ages[k]
+				continue
 			}
+			still = append(still, j)
 		}
 		open = still
 	}
