@@ -34,7 +34,7 @@ func (w *Workspace) dynamics(ctx context.Context) error {
 	if err := w.exposeAll(); err != nil {
 		return err
 	}
-	w.quiet, w.steps = false, w.steps[:0]
+	w.quiet, w.steps, w.stepIndex.from = false, w.steps[:0], w.stepIndex.from[:0]
 	if err := w.refresh(0); err != nil {
 		return err
 	}
@@ -125,7 +125,9 @@ func (w *Workspace) quietLeg(ctx context.Context) error {
 		}
 	}
 	w.schedule.sort()
-	w.isActive = grown(w.isActive, c.n)
+	if len(w.isActive) < c.n {
+		w.isActive = make([]bool, c.n)
+	}
 	clear(w.isActive)
 	for _, i := range w.active {
 		w.isActive[i] = true

@@ -1,5 +1,10 @@
 package engine
 
+import (
+	"math"
+	"math/bits"
+)
+
 // exposeAll asks the susceptibilities of both stages of every object and
 // fills the sums. In a compact run nothing is held: see enterQuiet.
 func (w *Workspace) exposeAll() error {
@@ -123,9 +128,46 @@ func (w *Workspace) note() {
 	w.steps = append(w.steps, s)
 }
 
+// indexSteps prepares stepAt for many look-ups: where the pieces begin that
+// start in each of some thousand intervals of date.
+func (w *Workspace) indexSteps() {
+	x := &w.stepIndex
+	x.from = x.from[:0]
+	if len(w.steps) < 64 {
+		return
+	}
+	x.low = math.Float64bits(w.steps[0].t)
+	span := math.Float64bits(w.steps[len(w.steps)-1].t) - x.low
+	x.shift = uint(max(0, bits.Len64(span)-12))
+	at := 0
+	for i := range span>>x.shift + 1 {
+		for at+1 < len(w.steps) && (math.Float64bits(w.steps[at+1].t)-x.low)>>x.shift < i {
+			at++
+		}
+		x.from = append(x.from, int32(at))
+	}
+}
+
+// stepIndex holds, per interval of date, a piece that begins no later.
+type stepIndex struct {
+	from  []int32
+	low   uint64
+	shift uint
+}
+
 // stepAt finds the piece of the history that holds date t.
 func (w *Workspace) stepAt(t float64) *step {
 	low, high := 0, len(w.steps)
+	if x := &w.stepIndex; len(x.from) > 0 && t > 0 {
+		if b := math.Float64bits(t); b > x.low {
+			i := int((b - x.low) >> x.shift)
+			last := len(x.from) - 1
+			low = int(x.from[min(i, last)])
+			if i+1 <= last {
+				high = min(high, int(x.from[i+1])+2)
+			}
+		}
+	}
 	for high-low > 1 {
 		if mid := (low + high) / 2; w.steps[mid].t <= t {
 			low = mid
@@ -276,7 +318,14 @@ func (w *Workspace) settle(t float64) error {
 		return nil
 	}
 	w.quiet = false
+	w.indexSteps()
 	steady := w.compact && len(w.steps) == 1 && t >= c.lastDeath
+	if steady && len(w.active) == 0 {
+		for i := range w.stage {
+			w.stage[i] = 2
+		}
+		return nil
+	}
 	isActive := 0
 	for first := 0; first < c.n; first += chunk {
 		n := min(chunk, c.n-first)

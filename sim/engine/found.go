@@ -153,12 +153,13 @@ func (a *asker) remnantsOf(c *columns, r *rows, u *law.Use, id func(int) int) er
 	}
 	s := a.streams[u.Card.Process]
 	a.words, a.kinds = grown(a.words, stars.n), grown(a.kinds, stars.n)
-	for i := range stars.n {
-		w := sure(out, len(words), i)
-		if w < 0 {
-			w = pickWord(out, 0, len(words), i, s.Uniform(uint64(stars.idOf(i)), stars.genOf(i), drawPick))
+	unsure := markSure(a.words, out, len(words))
+	for i, w := range a.words {
+		if unsure && w == law.NoWord {
+			w = uint8(pickWord(out, 0, len(words), i, s.Uniform(uint64(stars.idOf(i)), stars.genOf(i), drawPick)))
+			a.words[i] = w
 		}
-		a.words[i], a.kinds[i] = uint8(w), kinds[w]
+		a.kinds[i] = kinds[w]
 	}
 	// The kind asked about in remain is that of the remnant, while the table
 	// still says star for the other laws.
@@ -170,7 +171,7 @@ func (a *asker) remnantsOf(c *columns, r *rows, u *law.Use, id func(int) int) er
 		return err
 	}
 	mass, comp := out.Columns[0].Values, out.Columns[1].Words
-	for i := range stars.n {
+	for i, k := range a.kinds {
 		j := at(pick, i)
 		if id != nil {
 			j = id(j)
@@ -181,20 +182,28 @@ func (a *asker) remnantsOf(c *columns, r *rows, u *law.Use, id func(int) int) er
 			return &law.Fault{Law: u.ID(), Question: "remain", Row: i, Column: "mass",
 				Object: fmt.Sprintf("star, %.6g Msun", c.mass0[j]), Got: fmt.Sprintf("%v Msun", mass[i]), Want: "0 .. the star's mass"}
 		}
-		c.kind1[j], c.mass1[j], c.comp1[j] = a.kinds[i], mass[i], comp[i]
+		c.kind1[j], c.mass1[j], c.comp1[j] = k, mass[i], comp[i]
 		c.died[j] = causes[a.words[i]]
 	}
 	return nil
 }
 
-// sure returns the word that has all the chance, -1 when there is none.
-func sure(out law.Batch, words, row int) int {
+// markSure sets each row's word where one word has all the chance, and tells
+// whether there are rows, left at NoWord, that have none.
+func markSure(dst []uint8, out law.Batch, words int) (unsure bool) {
+	for i := range dst {
+		dst[i] = law.NoWord
+	}
+	n := 0
 	for w := range words {
-		if out.Columns[w].Values[row] == 1 {
-			return w
+		for i, chance := range out.Columns[w].Values {
+			if chance == 1 {
+				dst[i] = uint8(w)
+				n++
+			}
 		}
 	}
-	return -1
+	return n < len(dst)
 }
 
 // pickWord picks a word by its chances: the columns from first on, in order.
@@ -239,11 +248,11 @@ func (a *asker) foundProspects(c *columns, first, n int, starEnd []prospect) err
 	r := a.secondStage(c, first, n)
 	since := func(i int) float64 { return num.Log10(c.death[first+i]) }
 	a.latest = num.Log10(latest)
-	if err := a.wearBound(c, r, since); err != nil {
-		return err
-	}
 	if a.m.simpleEnds() {
 		return a.simpleProspects(c, r, since)
+	}
+	if err := a.wearBound(c, r, since); err != nil {
+		return err
 	}
 	ps, err := a.prospects(r, since)
 	if err != nil {

@@ -1,6 +1,8 @@
 package engine
 
 import (
+	"bytes"
+
 	"wane/sim/draw"
 	"wane/sim/law"
 )
@@ -313,9 +315,13 @@ func (a *asker) exponentials(dst []float64, process string, r *rows, number uint
 func (a *asker) spoken(use *law.Use, r *rows) (s *rows, pick []int32) {
 	v := a.m.voices[use]
 	whole, none := true, true
-	for _, k := range r.kind[:r.n] {
-		whole = whole && v.all[k]
-		none = none && !v.some[k]
+	if kind, one := oneKind(r.kind[:r.n]); one {
+		whole, none = v.all[kind], !v.some[kind]
+	} else {
+		for _, k := range r.kind[:r.n] {
+			whole = whole && v.all[k]
+			none = none && !v.some[k]
+		}
 	}
 	if whole {
 		return r, nil
@@ -333,6 +339,14 @@ func (a *asker) spoken(use *law.Use, r *rows) (s *rows, pick []int32) {
 	}
 	a.sub.gather(r, a.pick, v.reads)
 	return a.sub, a.pick
+}
+
+// oneKind tells whether all are of one kind, and which.
+func oneKind(kinds []uint8) (kind uint8, one bool) {
+	if len(kinds) == 0 {
+		return 0, true
+	}
+	return kinds[0], bytes.Count(kinds, kinds[:1]) == len(kinds)
 }
 
 // voice is for which kinds a law speaks, for some or all objects of a kind,

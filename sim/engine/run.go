@@ -39,6 +39,7 @@ type Workspace struct {
 	active        []uint32
 	isActive      []bool
 	reached0      []bool
+	stepIndex     stepIndex
 	unspent       [maxClocks]float64
 	stayed        []stay
 	warmNodes     map[galaxy.Warmth]map[nodeKey]float64

@@ -32,6 +32,9 @@ func (a *asker) simpleProspects(c *columns, r *rows, since func(int) float64) er
 		if s.n == 0 {
 			continue
 		}
+		if err := a.wearBoundOf(c, u, s, pick, since); err != nil {
+			return err
+		}
 		starts, err := a.starts(u, s, pick, since)
 		if err != nil {
 			return err

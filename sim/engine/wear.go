@@ -50,25 +50,39 @@ func (a *asker) wearBound(c *columns, r *rows, since func(int) float64) error {
 		if s.n == 0 {
 			continue
 		}
-		out, err := a.ask(u, "wear", s, drawU)
-		if err != nil {
+		if err := a.wearBoundOf(c, u, s, pick, since); err != nil {
 			return err
-		}
-		share := num.Log10(0.9 * wearToStep / float64(len(a.m.wearing)))
-		for i, l := range out.Columns[0].Values {
-			// The logarithm of the mass is needed only where it could matter.
-			if share-l-5 > c.wearStep && share-l-5 > c.wearAt {
-				continue
-			}
-			d := share - l + num.Log10(s.mass[i])
-			c.wearStep = min(c.wearStep, d)
-			if d < c.wearAt {
-				c.wearAt = min(c.wearAt, later(since(at(pick, i)), d))
-			}
 		}
 	}
 	return nil
 }
+
+// wearBoundOf is wearBound for the rows that one law speaks for.
+func (a *asker) wearBoundOf(c *columns, u *law.Use, s *rows, pick []int32, since func(int) float64) error {
+	out, err := a.ask(u, "wear", s, drawU)
+	if err != nil {
+		return err
+	}
+	share := num.Log10(0.9 * wearToStep / float64(len(a.m.wearing)))
+	// The logarithm of the mass is needed only where it could matter: no
+	// object weighs less than 1e-5 solar masses, or it wears as if it did.
+	quick := share + lightestLog - max(c.wearStep, c.wearAt)
+	for i, l := range out.Columns[0].Values {
+		if l < quick {
+			continue
+		}
+		d := share - l + max(num.Log10(s.mass[i]), lightestLog)
+		c.wearStep = min(c.wearStep, d)
+		if d < c.wearAt {
+			c.wearAt = min(c.wearAt, later(since(at(pick, i)), d))
+		}
+		quick = share + lightestLog - max(c.wearStep, c.wearAt)
+	}
+	return nil
+}
+
+// lightestLog: lighter objects are taken to weigh this, log10 of solar masses.
+const lightestLog = -5
 
 // wearDown brings worn masses up to date.
 func (w *Workspace) wearDown() error {
