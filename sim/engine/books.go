@@ -53,9 +53,7 @@ func (b *books) reset(m *Model, c *columns) {
 			b.radiates[i], b.turns[i] = p.Role == law.Wearing, p.Role == law.Turning
 		}
 	}
-	for _, x := range c.mass0 {
-		b.founded.add(x)
-	}
+	b.founded = c.founded
 }
 
 // met enters what a meeting gave off.

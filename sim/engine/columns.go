@@ -41,10 +41,11 @@ type columns struct {
 	// by object and step; see noteGas.
 	gas map[[2]uint32]float64
 
-	lastDeath float64 // yr
-	founded   float64 // mass, solMass of the sample
-	wearAt    float64 // log10 date before which no object has lost 1 % by wearing
-	wearStep  float64 // log10 of the shortest time in which an object loses that
+	lastDeath float64     // yr
+	earliest  float64     // birth, yr
+	founded   compensated // mass, solMass of the sample
+	wearAt    float64     // log10 date before which no object has lost 1 % by wearing
+	wearStep  float64     // log10 of the shortest time in which an object loses that
 }
 
 // link is one further stage of an object, entered at the end of the one before.
@@ -76,7 +77,7 @@ func (c *columns) resize(m *Model, n int) {
 		c.reading[k] = grown(c.reading[k], n)
 	}
 	c.chain, c.generation, c.continued, c.gas = nil, nil, nil, nil
-	c.lastDeath, c.founded, c.wearAt, c.wearStep = 0, 0, never, never
+	c.lastDeath, c.earliest, c.founded, c.wearAt, c.wearStep = 0, never, compensated{}, never, never
 	if m.encounter != nil {
 		c.origin = grown(c.origin, n)
 		clear(c.origin)

@@ -155,6 +155,9 @@ func (w *Workspace) replay(end float64) {
 			n.enter(d, t.from, t.to, t.cause)
 		}
 	}
+	if n.plain && w.replayStars() {
+		return
+	}
 	for i := range uint32(c.n) {
 		if n.plain {
 			w.plainEntries(i)
@@ -167,6 +170,31 @@ func (w *Workspace) replay(end float64) {
 			n.enter(e.date, stateGone, centralState, 0)
 		}
 	}
+}
+
+// replayStars is replay where only populations of stars want entries, of stars
+// in any place: then births are all there is to gather.
+func (w *Workspace) replayStars() bool {
+	c, n := &w.c, &w.counts
+	for s, mask := range n.mask {
+		if state(s)%2 != law.Founded || state(s)%statesAKind/2 == law.Central {
+			continue // nothing merges in a plain run, and only a hole is central
+		}
+		star := state(s).kind() == law.Star
+		if star != (mask&n.wanted == n.wanted) || !star && mask&n.wanted != 0 {
+			return false
+		}
+	}
+	p := bits.TrailingZeros64(n.wanted)
+	if n.inLog&n.wanted != 0 || n.wanted != 1<<p {
+		return false
+	}
+	for i, kind := range c.kind0[:c.n] {
+		if kind == law.Star && !(c.leave[i] < c.birth[i]) {
+			n.entries[p] = append(n.entries[p], c.birth[i])
+		}
+	}
+	return true
 }
 
 // plainEntries is each in a plain run, for entries alone: its dates are years.

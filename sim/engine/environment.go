@@ -261,16 +261,19 @@ func (e *Environment) update() {
 	}
 }
 
-// lnNear is ln(1+x) for |x| up to a few per cent, error x^6/6.
+// lnNear is ln(1+x) to the fifth order: for the |x| <= 0.01 of a window the
+// error is below 2e-13.
 func lnNear(x float64) float64 {
-	return x * (1 - x*(1./2-x*(1./3-x*(1./4-x*(1./5)))))
+	x2 := x * x
+	return x - x2*(1./2-x*(1./3)+x2*(1./4-x*(1./5)))
 }
 
-// expNear is e^x; a short series for the small x of a window (error x^8/40320
-// relative), the full function beyond.
+// expNear is e^x: to the fifth order for the small x of a window (|x| <= 0.05,
+// error below 3e-11), the full function beyond.
 func expNear(x float64) float64 {
-	if x > 0.1 || x < -0.1 {
+	if x > 0.05 || x < -0.05 {
 		return num.Exp(x)
 	}
-	return 1 + x*(1+x*(1./2+x*(1./6+x*(1./24+x*(1./120+x*(1./720+x*(1./5040)))))))
+	x2 := x * x
+	return 1 + x + x2*(1./2+x*(1./6)+x2*(1./24+x*(1./120)))
 }

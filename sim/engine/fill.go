@@ -22,9 +22,9 @@ func (w *Workspace) fillClocks() error {
 		w.clocks[k].reset()
 	}
 	w.setBounds()
-	var now, rate [maxClocks]float64
+	var now, slow [maxClocks]float64 // readings, and years per unit of reading
 	for k := range n {
-		now[k], rate[k] = w.readingAt(k, w.t), w.env.Rates[k]
+		now[k], slow[k] = w.readingAt(k, w.t), 1/w.env.Rates[k]
 	}
 	var lists [maxClocks]queue
 	for k := range n {
@@ -39,7 +39,7 @@ func (w *Workspace) fillClocks() error {
 		first, soonest := 0, never
 		for k := range n {
 			left[k] = c.reading[k][i] - now[k]
-			if d := left[k] / rate[k]; d < soonest {
+			if d := left[k] * slow[k]; d < soonest {
 				first, soonest = k, d
 			}
 		}

@@ -3,6 +3,7 @@ package engine
 import (
 	"fmt"
 	"math"
+	"slices"
 
 	"wane/sim/law"
 	"wane/sim/num"
@@ -226,9 +227,11 @@ func pickWord(out law.Batch, first, words, row int, u float64) int {
 // foundProspects completes the second stage and asks what ends it.
 func (a *asker) foundProspects(c *columns, first, n int, starEnd []prospect) error {
 	latest := c.lastDeath
-	for j := first; j < first+n; j++ {
-		if c.died[j] == 0 {
-			c.kind1[j], c.mass1[j], c.comp1[j] = c.kind0[j], c.mass0[j], law.Hydrogen
+	kind1, mass1, comp1 := c.kind1[first:first+n], c.mass1[first:first+n], c.comp1[first:first+n]
+	for i, died := range c.died[first : first+n] {
+		j := first + i
+		if died == 0 {
+			kind1[i], mass1[i], comp1[i] = c.kind0[j], c.mass0[j], law.Hydrogen
 		}
 		if starEnd != nil && c.kind0[j] == law.Star {
 			if err := a.cutShort(c, j, starEnd[j-first]); err != nil {
@@ -242,9 +245,12 @@ func (a *asker) foundProspects(c *columns, first, n int, starEnd []prospect) err
 		}
 	}
 	c.lastDeath = latest
+	sum := 0.0
 	for _, x := range c.mass0[first : first+n] {
-		c.founded += x
+		sum += x
 	}
+	c.founded.add(sum)
+	c.earliest = min(c.earliest, slices.Min(c.birth[first:first+n]))
 	r := a.secondStage(c, first, n)
 	since := func(i int) float64 { return num.Log10(c.death[first+i]) }
 	a.latest = num.Log10(latest)

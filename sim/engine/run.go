@@ -94,10 +94,10 @@ func (w *Workspace) Run(ctx context.Context, realisation uint64) (*Outcome, erro
 func (w *Workspace) begin() {
 	m, c, e := w.m, &w.c, w.env
 	w.books.reset(m, c)
-	w.central.begin(m.CentralMass, earliest(c.birth))
+	w.central.begin(m.CentralMass, c.earliest)
 	e.Reset()
 	e.add(slotNumber, m.Real)
-	e.add(slotMass, m.Weight*c.founded)
+	e.add(slotMass, m.Weight*c.founded.value())
 	e.add(slotCentral, m.CentralMass)
 	if m.deathsMatter {
 		for i := range c.n {
@@ -105,7 +105,7 @@ func (w *Workspace) begin() {
 			e.add(m.slotMassKind(int(c.kind0[i])), m.Weight*c.mass0[i])
 		}
 	}
-	e.Founded(m.Weight * c.founded)
+	e.Founded(m.Weight * c.founded.value())
 	w.stoppedAt, w.broken = math.NaN(), [maxClocks][maxClocks]bool{}
 	w.t, w.base, w.bound, w.awaiting, w.events = 0, 0, c.n, 0, 0
 	clear(w.reading)
@@ -129,14 +129,6 @@ func linear(l float64) float64 {
 		return never
 	}
 	return num.Exp10(l)
-}
-
-func earliest(dates []float64) float64 {
-	first := never
-	for _, d := range dates {
-		first = min(first, d)
-	}
-	return first
 }
 
 // readingAt is what clock k shows at date t under the present rates.

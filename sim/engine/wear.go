@@ -1,6 +1,8 @@
 package engine
 
 import (
+	"math"
+
 	"wane/sim/law"
 	"wane/sim/num"
 )
@@ -64,25 +66,27 @@ func (a *asker) wearBoundOf(c *columns, u *law.Use, s *rows, pick []int32, since
 		return err
 	}
 	share := num.Log10(0.9 * wearToStep / float64(len(a.m.wearing)))
-	// The logarithm of the mass is needed only where it could matter: no
-	// object weighs less than 1e-5 solar masses, or it wears as if it did.
-	quick := share + lightestLog - max(c.wearStep, c.wearAt)
+	mass := s.mass[:s.n]
+	known := max(c.wearStep, c.wearAt)
 	for i, l := range out.Columns[0].Values {
-		if l < quick {
-			continue
+		if share-l+belowLog10(mass[i]) >= known {
+			continue // the exact logarithm would change nothing
 		}
-		d := share - l + max(num.Log10(s.mass[i]), lightestLog)
+		d := share - l + num.Log10(mass[i])
 		c.wearStep = min(c.wearStep, d)
 		if d < c.wearAt {
 			c.wearAt = min(c.wearAt, later(since(at(pick, i)), d))
 		}
-		quick = share + lightestLog - max(c.wearStep, c.wearAt)
+		known = max(c.wearStep, c.wearAt)
 	}
 	return nil
 }
 
-// lightestLog: lighter objects are taken to weigh this, log10 of solar masses.
-const lightestLog = -5
+// belowLog10 is a bound on log10 x from below, by its exponent: less than
+// log10 2 off.
+func belowLog10(x float64) float64 {
+	return float64(int(math.Float64bits(x)>>52)-1023) * (math.Ln2 / math.Ln10)
+}
 
 // wearDown brings worn masses up to date.
 func (w *Workspace) wearDown() error {
