@@ -42,6 +42,7 @@ type columns struct {
 	gas map[[2]uint32]float64
 
 	lastDeath float64     // yr
+	immortal  bool        // a star never dies by itself
 	earliest  float64     // birth, yr
 	founded   compensated // mass, solMass of the sample
 	wearAt    float64     // log10 date before which no object has lost 1 % by wearing
@@ -77,6 +78,7 @@ func (c *columns) resize(m *Model, n int) {
 		c.reading[k] = grown(c.reading[k], n)
 	}
 	c.chain, c.generation, c.continued, c.gas = nil, nil, nil, nil
+	c.immortal = false
 	c.lastDeath, c.earliest, c.founded, c.wearAt, c.wearStep = 0, never, compensated{}, never, never
 	if m.encounter != nil {
 		c.origin = grown(c.origin, n)

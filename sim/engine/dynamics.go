@@ -27,7 +27,9 @@ func (w *Workspace) dynamics(ctx context.Context) error {
 	w.endsScheduled = false
 	w.endAt, w.wear.at = never, w.linear(c.wearAt)
 	for _, l := range c.end {
-		w.endAt = min(w.endAt, l)
+		if l < w.endAt {
+			w.endAt = l
+		}
 	}
 	w.endAt = w.linear(w.endAt)
 	clear(w.few)

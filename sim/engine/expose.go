@@ -3,6 +3,7 @@ package engine
 import (
 	"math"
 	"math/bits"
+	"slices"
 )
 
 // exposeAll asks the susceptibilities of both stages of every object and
@@ -223,27 +224,16 @@ func (w *Workspace) enterQuiet() (bool, error) {
 		if err != nil {
 			return false, err
 		}
-		w.reached0 = grown(w.reached0, n)
-		clear(w.reached0)
-		hurt := 0
+		from := len(w.active)
 		for k := range m.Clocks {
 			w.drawExponentials(k, first, n)
-			hurt += markReached(w.reached0, c.reading[k][first:first+n], s0[k], s1[k], w.caps[k])
-		}
-		if hurt > 0 {
-			for i, h := range w.reached0 {
-				if h {
-					w.active = append(w.active, uint32(first+i))
-					if w.compact {
-						w.hurt(first+i, s0, s1, i)
-					}
-				}
-			}
-		}
-		if w.compact {
-			for k := range m.Clocks {
+			w.active = appendReached(w.active, first, c.reading[k][first:first+n], s0[k], s1[k], w.caps[k])
+			if w.compact {
 				w.steadyReadings(k, first, n, s0[k], s1[k])
 			}
+		}
+		if len(w.active) > from {
+			w.listActive(from, first, s0, s1)
 		}
 		if len(w.active) > most {
 			return false, nil
@@ -252,43 +242,49 @@ func (w *Workspace) enterQuiet() (bool, error) {
 	return true, nil
 }
 
-// markReached marks the objects that a clock can reach before its cap, in
-// either stage, and counts them.
-func markReached(reached []bool, e, s0, s1 []float64, limit float64) int {
-	n := 0
-	s0, s1, e = s0[:len(reached)], s1[:len(reached)], e[:len(reached)]
+// appendReached lists the objects that a clock can reach before its cap, in
+// either stage.
+func appendReached(list []uint32, first int, e, s0, s1 []float64, limit float64) []uint32 {
+	s0, s1 = s0[:len(e)], s1[:len(e)]
 	for i, x := range e {
 		if x <= s0[i]*limit || x <= s1[i]*limit {
-			reached[i] = true
-			n++
+			list = append(list, uint32(first+i))
 		}
 	}
-	return n
+	return list
+}
+
+// listActive orders what a chunk has added to the active objects and, in a
+// compact run, keeps their susceptibilities and gives them their exponentials
+// back.
+func (w *Workspace) listActive(from, first int, s0, s1 [][]float64) {
+	added := w.active[from:]
+	slices.Sort(added)
+	added = slices.Compact(added)
+	w.active = w.active[:from+len(added)]
+	if !w.compact {
+		return
+	}
+	for _, j := range added {
+		w.hurt(int(j), s0, s1, int(j)-first)
+		for k := range w.m.Clocks {
+			w.c.reading[k][j] = w.exponential(k, j, 0)
+		}
+	}
 }
 
 // steadyReadings is readingOf for a chunk, under the first piece of the
-// history and to the end of the leg; the objects that are on the clocks keep
-// their exponentials.
+// history and to the end of the leg. What is born and stays in its second
+// stage has its death at its birth.
 func (w *Workspace) steadyReadings(k, first, n int, s0, s1 []float64) {
 	c, step := &w.c, &w.steps[0]
 	r, r0, t0 := step.rate[k], step.reading[k], step.t
-	x, birth, death, died := c.reading[k][first:first+n], c.birth[first:first+n], c.death[first:first+n], c.died[first:first+n]
+	x, birth, death := c.reading[k][first:first+n], c.birth[first:first+n], c.death[first:first+n]
 	s0, s1 = s0[:n], s1[:n]
 	for i, e := range x {
-		if w.reached0[i] {
-			continue
-		}
-		d := r0 + r*(birth[i]-t0)
-		if died[i] != 0 {
-			b := d
-			d = r0 + r*(death[i]-t0)
-			e -= s0[i] * (d - b)
-		}
-		if s1[i] == 0 {
-			x[i] = never
-			continue
-		}
-		x[i] = d + e/s1[i]
+		b := r0 + r*(birth[i]-t0)
+		d := r0 + r*(death[i]-t0)
+		x[i] = d + (e-s0[i]*(d-b))/s1[i]
 	}
 }
 
@@ -319,7 +315,7 @@ func (w *Workspace) settle(t float64) error {
 	}
 	w.quiet = false
 	w.indexSteps()
-	steady := w.compact && len(w.steps) == 1 && t >= c.lastDeath
+	steady := w.compact && len(w.steps) == 1 && t >= c.lastDeath && !c.immortal
 	if steady && len(w.active) == 0 {
 		for i := range w.stage {
 			w.stage[i] = 2

@@ -144,7 +144,7 @@ func (a *asker) remnantsOf(c *columns, r *rows, u *law.Use, id func(int) int) er
 		return nil
 	}
 	words := wordsOf(u, "die")
-	kinds, causes := make([]uint8, len(words)), make([]uint8, len(words))
+	var kinds, causes [256]uint8
 	for w, word := range words {
 		kinds[w], causes[w] = a.m.Set.Kind(word), a.m.cause(u.Card.Process, becameWord+word)
 	}
@@ -154,12 +154,14 @@ func (a *asker) remnantsOf(c *columns, r *rows, u *law.Use, id func(int) int) er
 	}
 	s := a.streams[u.Card.Process]
 	a.words, a.kinds = grown(a.words, stars.n), grown(a.kinds, stars.n)
-	unsure := markSure(a.words, out, len(words))
-	for i, w := range a.words {
-		if unsure && w == law.NoWord {
-			w = uint8(pickWord(out, 0, len(words), i, s.Uniform(uint64(stars.idOf(i)), stars.genOf(i), drawPick)))
-			a.words[i] = w
+	if unsure := markSure(a.words, out, len(words)); unsure {
+		for i, w := range a.words {
+			if w == law.NoWord {
+				a.words[i] = uint8(pickWord(out, 0, len(words), i, s.Uniform(uint64(stars.idOf(i)), stars.genOf(i), drawPick)))
+			}
 		}
+	}
+	for i, w := range a.words {
 		a.kinds[i] = kinds[w]
 	}
 	// The kind asked about in remain is that of the remnant, while the table
@@ -171,17 +173,29 @@ func (a *asker) remnantsOf(c *columns, r *rows, u *law.Use, id func(int) int) er
 	if err != nil {
 		return err
 	}
+	return a.keepRemnants(c, r, u, stars.n, pick, id, out, &causes)
+}
+
+// keepRemnants puts kinds, masses and causes of death into the columns.
+func (a *asker) keepRemnants(c *columns, r *rows, u *law.Use, n int, pick []int32, id func(int) int, out law.Batch, causes *[256]uint8) error {
 	mass, comp := out.Columns[0].Values, out.Columns[1].Words
+	if pick == nil && id == nil {
+		j := int(r.first)
+		copy(c.kind1[j:j+n], a.kinds)
+		copy(c.mass1[j:j+n], mass)
+		copy(c.comp1[j:j+n], comp)
+		died := c.died[j : j+n]
+		for i, w := range a.words {
+			died[i] = causes[w]
+		}
+		return nil
+	}
 	for i, k := range a.kinds {
 		j := at(pick, i)
 		if id != nil {
 			j = id(j)
 		} else {
 			j += int(r.first)
-		}
-		if !(mass[i] <= c.mass0[j]) {
-			return &law.Fault{Law: u.ID(), Question: "remain", Row: i, Column: "mass",
-				Object: fmt.Sprintf("star, %.6g Msun", c.mass0[j]), Got: fmt.Sprintf("%v Msun", mass[i]), Want: "0 .. the star's mass"}
 		}
 		c.kind1[j], c.mass1[j], c.comp1[j] = k, mass[i], comp[i]
 		c.died[j] = causes[a.words[i]]
@@ -192,11 +206,15 @@ func (a *asker) remnantsOf(c *columns, r *rows, u *law.Use, id func(int) int) er
 // markSure sets each row's word where one word has all the chance, and tells
 // whether there are rows, left at NoWord, that have none.
 func markSure(dst []uint8, out law.Batch, words int) (unsure bool) {
-	for i := range dst {
-		dst[i] = law.NoWord
-	}
 	n := 0
-	for w := range words {
+	for i, chance := range out.Columns[0].Values {
+		dst[i] = law.NoWord
+		if chance == 1 {
+			dst[i] = 0
+			n++
+		}
+	}
+	for w := 1; w < words && n < len(dst); w++ {
 		for i, chance := range out.Columns[w].Values {
 			if chance == 1 {
 				dst[i] = uint8(w)
@@ -238,10 +256,13 @@ func (a *asker) foundProspects(c *columns, first, n int, starEnd []prospect) err
 				return err
 			}
 		}
-		if d := c.death[j]; d <= math.MaxFloat64 {
-			latest = max(latest, d)
-		} else {
-			latest = max(latest, c.birth[j])
+		if d := c.death[j]; d > latest {
+			if d <= math.MaxFloat64 {
+				latest = d
+			} else {
+				c.immortal = true
+				latest = max(latest, c.birth[j])
+			}
 		}
 	}
 	c.lastDeath = latest

@@ -38,7 +38,6 @@ type Workspace struct {
 	view          [2][][]float64
 	active        []uint32
 	isActive      []bool
-	reached0      []bool
 	stepIndex     stepIndex
 	unspent       [maxClocks]float64
 	stayed        []stay

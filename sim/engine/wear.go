@@ -69,13 +69,15 @@ func (a *asker) wearBoundOf(c *columns, u *law.Use, s *rows, pick []int32, since
 	mass := s.mass[:s.n]
 	known := max(c.wearStep, c.wearAt)
 	for i, l := range out.Columns[0].Values {
-		if share-l+belowLog10(mass[i]) >= known {
-			continue // the exact logarithm would change nothing
+		d := share - l + belowLog10(mass[i])
+		if d >= known {
+			continue // a bound that lowers neither need not be exact
 		}
-		d := share - l + num.Log10(mass[i])
-		c.wearStep = min(c.wearStep, d)
-		if d < c.wearAt {
-			c.wearAt = min(c.wearAt, later(since(at(pick, i)), d))
+		if d < c.wearStep {
+			c.wearStep = d
+		}
+		if at := later(since(at(pick, i)), d); at < c.wearAt {
+			c.wearAt = at
 		}
 		known = max(c.wearStep, c.wearAt)
 	}
