@@ -77,12 +77,11 @@ func (w *Workspace) tally(end float64) error {
 			n.change(d, t.from, t.to, t.cause)
 		}
 	}
-	for first := 0; first < c.n; first += chunk {
-		size := min(chunk, c.n-first)
-		if n.plain {
-			w.tallyPlain(first, size)
-		} else {
-			w.tallyChunk(first, size, end)
+	if n.plain {
+		w.tallyPlain()
+	} else {
+		for first := 0; first < c.n; first += chunk {
+			w.tallyChunk(first, min(chunk, c.n-first), end)
 		}
 	}
 	for _, e := range w.central.log {
@@ -117,68 +116,6 @@ func (w *Workspace) tallyChunk(first, size int, end float64) {
 		}
 		w.each(id, d, end, n.change)
 	}
-}
-
-// tallyPlain is tallyChunk in a plain run. It must say what books.life and each
-// say; it has no need to ask what kinds of things can happen.
-func (w *Workspace) tallyPlain(first, size int) {
-	c, n, b := &w.c, &w.counts, &w.books
-	for i := first; i < first+size; i++ {
-		birth, death, leave := c.birth[i], c.death[i], c.leave[i]
-		died, left, adrift := c.died[i], c.left[i], c.place[i] == law.Adrift
-		now := stateOf(c.kind0[i], law.Bound, law.Founded)
-		mass := c.mass1[i]
-		if leave < birth {
-			b.fired[left]++
-			b.takes(w, uint32(i), c.mass0[i])
-			continue
-		}
-		n.change(birth, stateGone, now, 0)
-		if died != 0 {
-			if leave < death {
-				b.fired[left]++
-				if !adrift {
-					n.change(leave, now, stateGone, left)
-					b.takes(w, uint32(i), c.mass0[i])
-					continue
-				}
-				n.change(leave, now, now+2*law.Adrift, left)
-				now += 2 * law.Adrift
-				leave = never
-			}
-			if death == never {
-				w.rests(now, c.mass0[i])
-				continue
-			}
-			to := stateOf(c.kind1[i], 0, law.Founded) + now%statesAKind
-			n.change(death, now, to, died)
-			now = to
-			b.fired[died]++
-			if b.radiates[died] {
-				b.part.radiated += c.mass0[i] - mass
-			} else {
-				b.part.gas += c.mass0[i] - mass
-			}
-		}
-		if leave < never {
-			b.fired[left]++
-			if !adrift {
-				n.change(leave, now, stateGone, left)
-				b.takes(w, uint32(i), mass)
-				continue
-			}
-			n.change(leave, now, now+2*law.Adrift, left)
-			now += 2 * law.Adrift
-		}
-		if c.end[i] == never {
-			w.rests(now, mass)
-			continue
-		}
-		n.ends(c.end[i], now, c.ended[i])
-		b.fired[c.ended[i]]++
-		b.part.radiated += mass
-	}
-	b.post()
 }
 
 // rests enters what an object still weighs at the end.

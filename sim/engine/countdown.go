@@ -11,131 +11,149 @@ import (
 // knows what loop has to find out: that the only value to change is a count,
 // and that a head of a clock stays its head until its object leaves.
 func (w *Workspace) countdown(ctx context.Context) error {
+	for w.bound > 0 {
+		more, err := w.countWindow()
+		if err != nil || !more {
+			return err
+		}
+		if w.bound == 0 {
+			return nil
+		}
+		if err := w.refresh(w.t); err != nil || w.env.Stop {
+			return err
+		}
+		if err := ctx.Err(); err != nil {
+			return err
+		}
+		w.checked = w.env.Refreshes
+		if err := w.proveBounds(); err != nil {
+			return err
+		}
+		w.grow()
+	}
+	return nil
+}
+
+// head is the first entry of a clock that still counts, and the clock's
+// reading and rate.
+type head struct {
+	key, reading, rate float64
+	id                 uint32
+	slope, rate0       float64
+	keys               []float64
+	ids                []uint32
+	pos                int // of the head
+}
+
+// advance drops entries of objects no longer bound.
+func (h *head) advance(place []uint8) {
+	for ; h.pos < len(h.ids); h.pos++ {
+		if id := h.ids[h.pos]; place[id] == law.Bound {
+			h.key, h.id = h.keys[h.pos], id
+			return
+		}
+	}
+	h.key, h.id = never, maxObjects
+}
+
+// countWindow takes hits until the rates must be asked again (more), or until
+// no hit comes before a limit.
+func (w *Workspace) countWindow() (more bool, err error) {
 	m, c, e := w.m, &w.c, w.env
 	n := len(m.Clocks)
-	weight := m.Weight
-	base := w.base
-	var reading, rate, slope, rate0 [maxClocks]float64
-	var key [maxClocks]float64
-	var id [maxClocks]uint32
-	load := func() {
-		base = w.base
-		for k := range n {
-			reading[k], rate[k], rate0[k] = w.reading[k], e.Rates[k], e.rate0[k]
-			slope[k] = 0
-			if len(m.declared) > 0 {
-				slope[k] = e.slope[k][0]
-			}
-			key[k], id[k] = w.clocks[k].next(c.place)
+	var heads [maxClocks]head
+	place, leave, left := c.place[:c.n], c.leave[:c.n], c.left[:c.n]
+	declared := len(m.declared) > 0
+	for k := range n {
+		q := &w.clocks[k]
+		h := &heads[k]
+		*h = head{reading: w.reading[k], rate: e.Rates[k], rate0: e.rate0[k], keys: q.keys, ids: q.ids, pos: q.pos}
+		if declared {
+			h.slope = e.slope[k][0]
 		}
+		h.advance(place)
 	}
-	// unload gives the heads back to the clocks.
-	unload := func() {
-		for k := range n {
-			if key[k] < never {
-				w.clocks[k].pos--
-			}
-		}
-		copy(w.reading, reading[:n])
-	}
-	load()
-	var limit float64
-	limit, _ = w.limits(never)
-	number0 := e.value[slotNumber]
-	if len(m.declared) > 0 {
+	base, weight, bound := w.base, m.Weight, w.bound
+	limit, _ := w.limits(never)
+	number0 := weight * float64(bound)
+	if declared {
 		number0 = e.base[0]
 	}
-	for w.bound > 0 {
+	for bound > 0 {
 		first, date := -1, never
-		for k := range n {
-			if d := base + (key[k]-reading[k])/rate[k]; d < date {
+		for k := range heads[:n] {
+			h := &heads[k]
+			if d := base + (h.key-h.reading)/h.rate; d < date {
 				first, date = k, d
 			}
 		}
 		if first < 0 || date > limit {
 			break
 		}
-		i := id[first]
-		for k := range n {
-			reading[k] += rate[k] * (date - base)
+		step := date - base
+		for k := range heads[:n] {
+			heads[k].reading += heads[k].rate * step
 		}
 		base = date
-		w.events++
-		clock := &m.Clocks[first]
-		fate, cause := clock.Fate, clock.cause
-		if turned := c.turned[i]; turned != 0 && turned&(2<<(2*first)) != 0 {
-			fate, cause = law.FateCentral, w.diverted(first)
-		}
-		w.bound--
-		c.leave[i], c.left[i] = date, cause
-		switch fate {
-		case law.FateAdrift:
-			c.place[i] = law.Adrift
-		case law.FateCentral:
-			c.place[i] = law.Central
-			w.t = date
-			e.add(slotCentral, weight*c.mass1[i])
-			w.central.swallow(w, date, weight*c.mass1[i])
-		default:
-			c.place[i] = placeGone
-		}
-		for k := range n {
-			if id[k] == i {
-				key[k], id[k] = w.clocks[k].next(c.place)
+		i := heads[first].id
+		bound--
+		w.hitBound(first, i, date)
+		leave[i] = date
+		left[i] = w.lastCause
+		for k := range heads[:n] {
+			if heads[k].id == i {
+				heads[k].pos++
+				heads[k].advance(place)
 			}
 		}
-		number := weight * float64(w.bound)
-		e.value[slotNumber], e.lost[slotNumber] = number, 0
-		x := (number - number0) / number0
-		if w.bound < fewObjects || x < -moveToRefresh {
-			w.t, w.base = date, base
-			unload()
-			if err := w.countdownRefresh(ctx); err != nil || e.Stop {
-				return err
-			}
-			load()
-			limit, _ = w.limits(never)
-			if len(m.declared) > 0 {
-				number0 = e.base[0]
-			}
-			continue
+		number := weight * float64(bound)
+		if bound < fewObjects || declared && number0-number > moveToRefresh*number0 {
+			more = true
+			break
 		}
-		if len(m.declared) > 0 {
-			x = lnNear(x)
-			for k := range n {
-				rate[k] = rate0[k] * expNear(slope[k]*x)
+		if declared {
+			x := lnNear((number - number0) / number0)
+			for k := range heads[:n] {
+				heads[k].rate = heads[k].rate0 * expNear(heads[k].slope*x)
 			}
 		}
 	}
-	w.t, w.base = max(w.t, base), base
-	unload()
-	copy(e.Rates, rate[:n])
-	return nil
+	w.events += int64(w.bound - bound)
+	w.bound, w.t, w.base = bound, max(w.t, base), base
+	e.value[slotNumber], e.lost[slotNumber] = weight*float64(bound), 0
+	for k := range n {
+		w.reading[k], e.Rates[k], w.clocks[k].pos = heads[k].reading, heads[k].rate, heads[k].pos
+	}
+	return more, nil
 }
 
-func (w *Workspace) countdownRefresh(ctx context.Context) error {
-	if w.bound == 0 {
-		return nil
+// hitBound sends an object where a clock's hit takes it, and leaves the cause
+// in lastCause.
+func (w *Workspace) hitBound(k int, i uint32, date float64) {
+	c, clock := &w.c, &w.m.Clocks[k]
+	fate := clock.Fate
+	w.lastCause = clock.cause
+	if turned := c.turned[i]; turned&(2<<(2*k)) != 0 {
+		fate, w.lastCause = law.FateCentral, w.diverted(k)
 	}
-	if err := w.refresh(w.t); err != nil {
-		return err
+	switch fate {
+	case law.FateAdrift:
+		c.place[i] = law.Adrift
+	case law.FateCentral:
+		c.place[i] = law.Central
+		mass := w.m.Weight * c.mass1[i]
+		w.env.add(slotCentral, mass)
+		w.central.swallow(w, date, mass)
+	default:
+		c.place[i] = placeGone
 	}
-	if err := ctx.Err(); err != nil {
-		return err
-	}
-	w.checked = w.env.Refreshes
-	if err := w.proveBounds(); err != nil {
-		return err
-	}
-	w.grow()
-	return nil
 }
 
 // countsDown tells whether countdown may take over: only hits can happen, in
-// years, and only the number bound matters.
+// years, to objects in their second stage, and only the number bound matters.
 func (w *Workspace) countsDown() bool {
 	m := w.m
-	if m.encounter != nil || m.deathsMatter || len(m.declared) > 1 || w.env.unit != 0 || w.awaiting > 0 || w.compact == false {
+	if m.encounter != nil || m.deathsMatter || len(m.declared) > 1 || w.env.unit != 0 || w.awaiting > 0 || !w.compact {
 		return false
 	}
 	if len(m.declared) == 1 && m.declared[0] != slotNumber {

@@ -29,6 +29,7 @@ type counts struct {
 	exits   [][]float64
 	entered []int
 	lastIn  []float64 // of entries by change
+	flows   flows
 	left    [][256]int64
 	lastOut []float64
 	lastWhy []uint8

@@ -108,6 +108,9 @@ func (w *Workspace) enterStage(i uint32, stage int, t float64) error {
 func (w *Workspace) keepUnspent(i uint32, t float64) {
 	for k := range w.m.Clocks {
 		w.unspent[k] = never
+		if e, ok := w.spared[k][i]; ok {
+			w.unspent[k] = e
+		}
 		if x := w.c.reading[k][i]; x < never {
 			w.unspent[k] = (x - w.readingAt(k, t)) * w.sus(k, i)
 		}
@@ -115,11 +118,21 @@ func (w *Workspace) keepUnspent(i uint32, t float64) {
 }
 
 // respend turns what is left into a reading under the new susceptibility. An
-// object that nothing could hit brings a fresh exponential of its generation.
+// object that nothing could hit so far brings its whole exponential.
 func (w *Workspace) respend(k int, i uint32, t float64) {
 	e := w.unspent[k]
-	if e == never {
+	if _, spared := w.spared[k][i]; e == never && !spared {
 		e = w.exponential(k, i, w.thresholdGeneration(i))
+	}
+	if w.sus(k, i) == 0 {
+		w.spare(k, i, e)
+	} else {
+		delete(w.spared[k], i)
+	}
+	if e == never {
+		w.spare(k, i, e)
+		w.c.reading[k][i] = never
+		return
 	}
 	w.c.reading[k][i] = over(w.readingAt(k, t), e, w.sus(k, i))
 	w.enqueue(k, i)
@@ -141,6 +154,15 @@ func (w *Workspace) fire(k int, i uint32, t float64) error {
 	}
 	w.remove(i, t, fate, cause)
 	return w.changed(t)
+}
+
+// spare keeps what is left of an exponential while nothing can hit the object;
+// +Inf: nothing ever will.
+func (w *Workspace) spare(k int, i uint32, e float64) {
+	if w.spared[k] == nil {
+		w.spared[k] = map[uint32]float64{}
+	}
+	w.spared[k][i] = e
 }
 
 // vanish ends a bound object whose prospect has come.

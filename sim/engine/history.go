@@ -117,9 +117,17 @@ func (w *Workspace) logDates(i uint32) [3]float64 {
 
 // flush writes the present life of object i up to a date into the journal and
 // the books, before a meeting overwrites it.
-func (w *Workspace) flush(i uint32, at float64) {
+func (w *Workspace) flush(i uint32, at float64, cause uint8) {
 	limit := w.logDate(at)
 	d := w.logDates(i)
+	if w.m.anyWarm {
+		all := &w.m.anyState
+		before := len(w.meets.stays)
+		w.meets.stays = w.staysOf(w.meets.stays, all, i, d, limit)
+		if n := len(w.meets.stays); n > before && w.meets.stays[n-1].leave == never {
+			w.meets.stays[n-1].leave, w.meets.stays[n-1].cause = limit, cause
+		}
+	}
 	w.each(i, d, limit, func(date float64, from, to state, cause uint8) {
 		w.meets.journal = append(w.meets.journal, transition{codedLog(date), i, from, to, cause})
 	})

@@ -16,6 +16,7 @@ type meetings struct {
 	cum     [][]float64    // running totals of what is sought, by clock
 	pairs   []pair
 	journal []transition
+	stays   []stay // of lives that are in the journal
 }
 
 // pair is two objects waiting for a refresh.
@@ -29,7 +30,10 @@ type pair struct {
 // has left, nobody is met.
 const maxTries = 4096
 
-func (x *meetings) begin() { x.pairs, x.journal, x.ids = x.pairs[:0], x.journal[:0], x.ids[:0] }
+func (x *meetings) begin() {
+	x.pairs, x.journal, x.ids = x.pairs[:0], x.journal[:0], x.ids[:0]
+	x.stays = x.stays[:0]
+}
 
 func (x *meetings) scale(f float64) {
 	for i := range x.pairs {
@@ -77,7 +81,8 @@ func (x *meetings) sought(w *Workspace, k int, i uint32) float64 {
 	}
 }
 
-// recount tabulates, at a refresh, who can be met.
+// recount tabulates, at a refresh, who can be met: all that are bound. Who is
+// not born when it is picked is passed over.
 func (x *meetings) recount(w *Workspace) {
 	x.ids = x.ids[:0]
 	x.cum = grown(x.cum, len(w.m.Clocks))
@@ -85,7 +90,7 @@ func (x *meetings) recount(w *Workspace) {
 		x.cum[k] = x.cum[k][:0]
 	}
 	for i := range uint32(w.c.n) {
-		if w.c.place[i] == law.Bound && w.bornBy(i) {
+		if w.c.place[i] == law.Bound {
 			x.ids = append(x.ids, i)
 		}
 	}
@@ -121,7 +126,7 @@ func (w *Workspace) meet(k int, i uint32, t float64) error {
 			u := stream.Uniform(uint64(i), gen, drawSeek+try) * cum[n-1]
 			at, _ := slices.BinarySearch(cum, u)
 			j := x.ids[min(at, n-1)]
-			if j == i || w.c.place[j] != law.Bound || w.stage[j]&waiting != 0 || x.sought(w, k, j) == 0 {
+			if j == i || w.c.place[j] != law.Bound || !w.bornBy(j) || w.stage[j]&waiting != 0 || x.sought(w, k, j) == 0 {
 				continue
 			}
 			if w.quiet && !w.isActive[j] {
@@ -135,7 +140,11 @@ func (w *Workspace) meet(k int, i uint32, t float64) error {
 		}
 	}
 	// Nobody left to meet: the clock has nothing more for this object.
+	w.spare(k, i, never)
 	w.c.reading[k][i] = never
+	for other := range w.m.Clocks { // one of which may have been left out for this one
+		w.enqueue(other, i)
+	}
 	return nil
 }
 
@@ -182,6 +191,7 @@ func (w *Workspace) resolve(t float64) error {
 				Got:    num1(after) + " Msun in all", Want: "no more than " + num1(before) + " Msun"}
 		}
 		w.books.met(w.m, gas, before-after)
+		w.books.count(cause)
 		for s, i := range [2]uint32{pr.seeker, pr.partner} {
 			if w.meetOne(i, pr.date, cause, kinds[s], masses[s], comps[s]) {
 				back = append(back, i)
@@ -227,7 +237,7 @@ func (w *Workspace) meetOne(i uint32, date float64, cause, kind uint8, mass floa
 	w.subtract(i)
 	from := stateOf(w.kindOf(i), law.Bound, w.originOf(i))
 	at := w.coded(date)
-	w.flush(i, at)
+	w.flush(i, at, cause)
 	w.stage[i] &^= waiting
 	if kind == law.NoWord {
 		w.meets.journal = append(w.meets.journal, transition{at, i, from, stateGone, cause})
@@ -238,6 +248,10 @@ func (w *Workspace) meetOne(i uint32, date float64, cause, kind uint8, mass floa
 	}
 	if kind != from.kind() || mass > w.massOf(i)*(1+1e-12) {
 		c.origin[i] = law.Merged
+	}
+	delete(w.wear.worn, i)
+	for step := range uint32(longestChain + 2) {
+		delete(c.gas, [2]uint32{i, step})
 	}
 	c.generation[i] = (w.generationOf(i)/mergerGeneration + 1) * mergerGeneration
 	c.kind0[i], c.mass0[i] = kind, mass
@@ -287,6 +301,7 @@ func (w *Workspace) rejoin(ids []uint32, t float64) error {
 	for _, i := range ids {
 		w.count(i, +1)
 		for k := range w.m.Clocks {
+			delete(w.spared[k], i)
 			c.reading[k][i] = over(w.readingAt(k, t), w.exponential(k, i, c.generation[i]), w.sus(k, i))
 			w.enqueue(k, i)
 		}
@@ -321,7 +336,7 @@ func (w *Workspace) resort(ids []uint32, r *rows) error {
 		r.kind[j] = kind
 		w.c.kind0[i], w.c.kind1[i] = kind, kind
 		if kind == law.Star {
-			w.stage[i] = 1
+			w.stage[i], r.comp[j] = 1, law.Hydrogen
 		}
 	}
 	return nil

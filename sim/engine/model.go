@@ -65,6 +65,8 @@ type Model struct {
 	stopFate                        law.Fate
 	stopCause, allAdrift            uint8
 	populations                     []population
+	anyState                        population    // every object
+	anyWarm                         bool          // some population has a condition on warmth
 	thresholds                      [][]threshold // [wearing law][kind]: mass, becomes, cause
 	causeOf                         map[Cause]uint8
 }

@@ -21,6 +21,9 @@ func stateOf(kind, place, origin uint8) state { return state(kind*statesAKind + 
 
 func (s state) kind() uint8 { return uint8(s) / statesAKind }
 
+// mostPopulations: a state knows its populations by the bits of one word.
+const mostPopulations = 64
+
 // population is a compiled population: its states as a bit set, and the
 // warmth its members must have.
 type population struct {
@@ -30,6 +33,15 @@ type population struct {
 }
 
 func (m *Model) compilePopulations() error {
+	if len(m.Populations) > mostPopulations {
+		return fmt.Errorf("engine: %d populations: at most %d", len(m.Populations), mostPopulations)
+	}
+	for s := range m.anyState.in {
+		m.anyState.in[s] = state(s) != stateGone
+	}
+	for _, p := range m.Populations {
+		m.anyWarm = m.anyWarm || p.Warmth != nil
+	}
 	if len(m.Set.Kinds) > maxKinds {
 		return fmt.Errorf("engine: %d kinds: at most %d", len(m.Set.Kinds), maxKinds)
 	}

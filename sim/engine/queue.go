@@ -1,10 +1,6 @@
 package engine
 
-import (
-	"math"
-
-	"wane/sim/law"
-)
+import "math"
 
 // queue is an ordered list of readings or dates: a run sorted once, and a heap
 // for what arrives late.
@@ -59,20 +55,6 @@ func (q *queue) head() (e entry, ok bool) {
 		return q.late[0], true
 	}
 	return e, ok
-}
-
-// next drops entries of objects no longer bound and returns the first that is
-// left, taken from the list; an infinite key when there is none. The list must
-// have nothing late.
-func (q *queue) next(place []uint8) (float64, uint32) {
-	for q.pos < len(q.keys) {
-		id := q.ids[q.pos]
-		q.pos++
-		if place[id] == law.Bound {
-			return q.keys[q.pos-1], id
-		}
-	}
-	return never, math.MaxUint32
 }
 
 // pop drops the first entry.

@@ -40,11 +40,13 @@ type Workspace struct {
 	isActive      []bool
 	stepIndex     stepIndex
 	unspent       [maxClocks]float64
+	spared        [maxClocks]map[uint32]float64 // of those that nothing can hit at present
 	stayed        []stay
 	warmNodes     map[galaxy.Warmth]map[nodeKey]float64
 	rho           [maxClocks][maxClocks]float64
 	broken        [maxClocks][maxClocks]bool
 	checked       int
+	lastCause     uint8
 	endAt         float64 // date before which no prospect ends a stage
 	endsScheduled bool
 	adriftPending bool
@@ -118,6 +120,9 @@ func (w *Workspace) begin() {
 	}
 	w.stage = grown(w.stage, c.n)
 	clear(w.stage)
+	for k := range w.spared {
+		clear(w.spared[k])
+	}
 	w.wear.begin()
 	w.meets.begin()
 }

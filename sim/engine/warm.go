@@ -19,6 +19,8 @@ type stay struct {
 	enter, leave  float64 // log10 dates of the stay
 	cause         uint8   // of leaving
 	follows, goes bool    // the stay before, or after, is of the same object without a gap
+	mass          float64 // with which its kind began
+	comp          uint8
 }
 
 // tallyWarm counts the populations with a condition on warmth.
@@ -103,6 +105,11 @@ func (m *Model) coolCause(kind uint8) uint8 {
 func (w *Workspace) stays(pop *population, end float64) []stay {
 	c := &w.c
 	out := w.stayed[:0]
+	for _, s := range w.meets.stays { // of lives that a meeting ended
+		if pop.in[s.state] {
+			out = append(out, s)
+		}
+	}
 	for first := 0; first < c.n; first += chunk {
 		size := min(chunk, c.n-first)
 		w.logChunk(first, size)
@@ -139,7 +146,18 @@ func (w *Workspace) staysOf(out []stay, pop *population, i uint32, dates [3]floa
 		stage = 2
 	}
 	last := -1
-	now := w.each(i, dates, end, func(date float64, from, to state, cause uint8) {
+	enter := func(s state, date float64, follows bool) {
+		mass, comp := w.atEntry(i, stage)
+		out = append(out, stay{i: i, stage: stage, state: s, entered: began, enter: date, leave: never, follows: follows, mass: mass, comp: comp})
+		last = len(out) - 1
+	}
+	if c := &w.c; c.continued[i] {
+		// It has been there since the meeting, which is in the journal.
+		if s := stateOf(c.kind0[i], law.Bound, w.originOf(i)); pop.in[s] {
+			enter(s, dates[0], false)
+		}
+	}
+	w.each(i, dates, end, func(date float64, from, to state, cause uint8) {
 		if last >= 0 {
 			out[last].leave, out[last].cause = date, cause
 		}
@@ -153,14 +171,33 @@ func (w *Workspace) staysOf(out []stay, pop *population, i uint32, dates [3]floa
 			if follows {
 				out[last].goes = true
 			}
-			out = append(out, stay{i: i, stage: stage, state: to, entered: began, enter: date, leave: never, follows: follows})
-			last = len(out) - 1
+			enter(to, date, follows)
 			return
 		}
 		last = -1
 	})
-	_ = now
 	return out
+}
+
+// atEntry is the mass with which object i entered a stage, and what it is made
+// of.
+func (w *Workspace) atEntry(i uint32, stage int) (mass float64, comp uint8) {
+	c := &w.c
+	switch {
+	case stage == 1:
+		mass, comp = c.mass0[i], law.Hydrogen
+	case stage == 2:
+		mass, comp = c.mass1[i], c.comp1[i]
+	default:
+		l := c.chain[i][stage-3]
+		mass, comp = l.mass, l.comp
+	}
+	for _, x := range w.wear.worn[i] {
+		if x.stage >= stage {
+			mass += x.mass
+		}
+	}
+	return mass, comp
 }
 
 // crossings finds, for each stay, the log10 date at which the object falls
@@ -369,16 +406,7 @@ func (w *Workspace) newFeeler(x *galaxy.Warmth, stays []stay) (*feeler, error) {
 		f.all.id[j], f.all.gen[j] = i, 0
 		f.all.kind[j], f.all.place[j], f.all.origin[j] = s.state.kind(), uint8(s.state)%statesAKind/2, uint8(s.state)%2
 		f.all.metals[j] = w.c.metalsOf(int(i))
-		switch {
-		case s.stage == 1:
-			f.all.mass[j], f.all.comp[j] = w.c.mass0[i], law.Hydrogen
-		case s.stage == 2:
-			f.all.mass[j], f.all.comp[j] = w.c.mass1[i], w.c.comp1[i]
-		default:
-			l := w.c.chain[i][s.stage-3]
-			f.all.mass[j], f.all.comp[j] = l.mass, l.comp
-		}
-		f.all.birthMass[j] = f.all.mass[j]
+		f.all.mass[j], f.all.comp[j], f.all.birthMass[j] = s.mass, s.comp, s.mass
 	}
 	if err := f.heats(); err != nil {
 		return nil, err

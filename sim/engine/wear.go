@@ -25,9 +25,16 @@ type wearing struct {
 	known []uint8   // stage for which these hold
 	ids   []uint32
 	lost  float64 // solMass of the sample
+	worn  map[uint32][]wornOff
 }
 
-func (x *wearing) begin() { x.at, x.lost = never, 0; x.known = x.known[:0] }
+// wornOff is how much an object has lost in a stage of its present life.
+type wornOff struct {
+	stage int
+	mass  float64
+}
+
+func (x *wearing) begin() { x.at, x.lost = never, 0; x.known = x.known[:0]; clear(x.worn) }
 
 func (x *wearing) scale(f float64) {
 	x.at *= f
@@ -303,6 +310,15 @@ func (w *Workspace) thresholdOf(kind uint8) float64 {
 func (w *Workspace) lighten(i uint32, loss float64) {
 	c := &w.c
 	w.wear.lost += loss
+	if w.wear.worn == nil {
+		w.wear.worn = map[uint32][]wornOff{}
+	}
+	worn := w.wear.worn[i]
+	if n := len(worn); n > 0 && worn[n-1].stage == w.stageOf(i) {
+		worn[n-1].mass += loss
+	} else {
+		w.wear.worn[i] = append(worn, wornOff{w.stageOf(i), loss})
+	}
 	c.mass0[i] -= loss
 	c.mass1[i] -= loss
 	for k := 0; k <= w.stageOf(i)-3; k++ {

@@ -1,0 +1,197 @@
+package engine
+
+import (
+	"math/bits"
+
+	"wane/sim/law"
+	"wane/sim/num"
+)
+
+// flow is one kind of change in a plain run: from one state, for one cause.
+// What it means for the populations is worked out once, and the changes only
+// counted; what must be kept one by one are the dates of exits.
+type flow struct {
+	count         int64
+	last          float64
+	exits, enters uint64 // populations
+	logs          uint64 // of the exits: those counted in log10 years while the date is in years
+	known         bool
+}
+
+// flows is the table of flows of one realisation. A birth is the flow of its
+// own state for cause 0.
+type flows struct {
+	table  []flow
+	causes int
+}
+
+func (f *flows) reset(m *Model) {
+	f.causes = len(m.Causes)
+	f.table = grown(f.table, len(m.Set.Kinds)*statesAKind*f.causes)
+	clear(f.table)
+}
+
+func (f *flows) of(from state, cause uint8) *flow { return &f.table[int(from)*f.causes+int(cause)] }
+
+// learn works out what a flow means. to is where it leads; years, that its
+// dates are in years.
+func (n *counts) learn(x *flow, from, to state, years bool) {
+	before, after := n.mask[from], n.mask[to]
+	x.exits, x.enters, x.known, x.last = before&^after, after&^before, true, -never
+	if years {
+		x.logs = x.exits & n.inLog
+	}
+}
+
+// move enters one change of a flow.
+func (n *counts) move(x *flow, date float64) {
+	x.count++
+	if date > x.last {
+		x.last = date
+	}
+	for e := x.exits; e != 0; e &= e - 1 {
+		p := bits.TrailingZeros64(e)
+		v := date
+		if x.logs>>p&1 != 0 {
+			v = num.Log10(date)
+		}
+		n.exits[p] = append(n.exits[p], v)
+	}
+}
+
+// settleFlows enters the flows into the populations' counts.
+func (n *counts) settleFlows(b *books) {
+	for i := range n.flows.table {
+		x := &n.flows.table[i]
+		if x.count == 0 {
+			continue
+		}
+		cause := uint8(i % n.flows.causes)
+		if cause != 0 {
+			b.fired[cause] += x.count
+		}
+		for e := x.exits; e != 0; e &= e - 1 {
+			p := bits.TrailingZeros64(e)
+			last := x.last
+			if x.logs>>p&1 != 0 {
+				last = num.Log10(last)
+			}
+			n.left[p][cause] += x.count
+			if last >= n.lastOut[p] {
+				n.lastOut[p], n.lastWhy[p] = last, cause
+			}
+		}
+		for e := x.enters; e != 0; e &= e - 1 {
+			p := bits.TrailingZeros64(e)
+			n.entered[p] += int(x.count)
+			n.lastIn[p] = max(n.lastIn[p], x.last)
+		}
+	}
+}
+
+// tallyPlain is tallyChunk for all objects in a plain run. It must say what
+// books.life and each say; it has no need to ask what kinds of things can
+// happen.
+func (w *Workspace) tallyPlain() {
+	c, n, b := &w.c, &w.counts, &w.books
+	n.flows.reset(w.m)
+	for first := 0; first < c.n; first += chunk {
+		w.tallyPlainChunk(first, min(chunk, c.n-first))
+		b.post()
+	}
+	n.settleFlows(b)
+}
+
+func (w *Workspace) tallyPlainChunk(first, size int) {
+	c, n, b := &w.c, &w.counts, &w.books
+	births, deaths, leaves := c.birth[first:first+size], c.death[first:first+size], c.leave[first:first+size]
+	died, left, place := c.died[first:first+size], c.left[first:first+size], c.place[first:first+size]
+	kind0, kind1 := c.kind0[first:first+size], c.kind1[first:first+size]
+	mass0, mass1 := c.mass0[first:first+size], c.mass1[first:first+size]
+	end, ended := c.end[first:first+size], c.ended[first:first+size]
+	for i, birth := range births {
+		leave := leaves[i]
+		if leave < birth {
+			b.fired[left[i]]++
+			b.takes(w, uint32(first+i), mass0[i])
+			continue
+		}
+		now := stateOf(kind0[i], law.Bound, law.Founded)
+		x := n.flows.of(now, 0)
+		if !x.known {
+			n.learn(x, stateGone, now, true)
+		}
+		x.count++
+		if birth > x.last {
+			x.last = birth
+		}
+		mass := mass1[i]
+		if why := died[i]; why != 0 {
+			death := deaths[i]
+			if leave < death {
+				if now = w.plainLeave(first+i, now, leave, mass0[i]); now == stateGone {
+					continue
+				}
+				leave = never
+			}
+			if death == never {
+				w.rests(now, mass0[i])
+				continue
+			}
+			x := n.flows.of(now, why)
+			to := stateOf(kind1[i], 0, law.Founded) + now%statesAKind
+			if !x.known {
+				n.learn(x, now, to, true)
+			}
+			n.move(x, death)
+			now = to
+			if b.radiates[why] {
+				b.part.radiated += mass0[i] - mass
+			} else {
+				b.part.gas += mass0[i] - mass
+			}
+		}
+		if leave < never {
+			if place[i] != law.Adrift {
+				w.plainLeave(first+i, now, leave, mass)
+				continue
+			}
+			x := n.flows.of(now, left[i])
+			to := now + 2*law.Adrift
+			if !x.known {
+				n.learn(x, now, to, true)
+			}
+			n.move(x, leave)
+			now = to
+		}
+		if end[i] == never {
+			w.rests(now, mass)
+			continue
+		}
+		x = n.flows.of(now, ended[i])
+		if !x.known {
+			n.learn(x, now, stateGone, false)
+		}
+		n.move(x, end[i])
+		b.part.radiated += mass
+	}
+}
+
+// plainLeave enters the leaving of object i, which weighs mass, and returns
+// the state it is in then.
+func (w *Workspace) plainLeave(i int, now state, leave, mass float64) state {
+	n, c := &w.counts, &w.c
+	to := stateGone
+	if c.place[i] == law.Adrift {
+		to = now + 2*law.Adrift
+	}
+	x := n.flows.of(now, c.left[i])
+	if !x.known {
+		n.learn(x, now, to, true)
+	}
+	n.move(x, leave)
+	if to == stateGone {
+		w.books.takes(w, uint32(i), mass)
+	}
+	return to
+}
