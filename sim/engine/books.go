@@ -127,7 +127,10 @@ func (b *books) takes(w *Workspace, i uint32, mass float64) {
 // loses enters what a change of stage gave off.
 func (b *books) loses(w *Workspace, i uint32, step int, cause uint8, loss float64) {
 	if b.turns[cause] {
-		gas := w.c.gas[[2]uint32{i, uint32(max(step, 0))}]
+		if step < 0 {
+			step = starStep
+		}
+		gas := w.c.gas[[2]uint32{i, uint32(step)}]
 		b.gas.add(gas)
 		b.radiated.add(loss - gas)
 		return

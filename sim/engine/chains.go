@@ -72,13 +72,17 @@ func (a *asker) linkUp(r *rows, owner *[]uint32, dates *[]float64, c *columns) e
 	if err := a.wearBound(c, r, func(i int) float64 { return d[i] }); err != nil {
 		return err
 	}
+	turned := make([]uint8, r.n)
+	if err := a.divert(r, func(i, clock int) { turned[i] |= 1 << clock }); err != nil {
+		return err
+	}
 	s, err := a.exposures(r)
 	if err != nil {
 		return err
 	}
 	kept := 0
 	for i, p := range ps {
-		l := link{mass: r.mass[i], kind: r.kind[i], comp: r.comp[i], end: p.date, ended: p.cause}
+		l := link{mass: r.mass[i], kind: r.kind[i], comp: r.comp[i], end: p.date, ended: p.cause, turned: turned[i]}
 		for k := range a.m.Clocks {
 			l.s[k] = s[k][i]
 			if a.m.encounter != nil {

@@ -56,6 +56,7 @@ type link struct {
 	kind   uint8
 	comp   uint8
 	ended  uint8
+	turned uint8              // bit k: clock k's hit falls to the centre
 	s      [maxClocks]float64 // susceptibilities
 	sought [maxClocks]float64
 }
@@ -103,6 +104,9 @@ func (c *columns) consume(i uint32) {
 	c.continued[i] = true
 	delete(c.chain, i)
 }
+
+// starStep is the step of noteGas that ends the first stage.
+const starStep = longestChain + 1
 
 // noteGas keeps how much of what a turning law takes goes to gas. Step 0 ends
 // the second stage, step n the n-th link.

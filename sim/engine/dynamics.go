@@ -93,13 +93,16 @@ func (w *Workspace) prepare() error {
 	for i := range c.n {
 		w.scheduleDeath(uint32(i), w.schedule.put)
 	}
-	w.schedule.sort()
+	w.schedule.sort(&w.sorter)
 	return nil
 }
 
 func (w *Workspace) scheduleDeath(i uint32, put func(float64, uint32)) {
-	if w.c.died[i] != 0 && w.c.death[i] < never {
-		put(w.c.death[i], i|eventDeath)
+	if w.c.died[i] == 0 {
+		return
+	}
+	if t := w.years(w.c.death[i]); t < never {
+		put(t, i|eventDeath)
 	}
 }
 
@@ -126,7 +129,7 @@ func (w *Workspace) quietLeg(ctx context.Context) error {
 			w.scheduleDeath(i, w.schedule.put)
 		}
 	}
-	w.schedule.sort()
+	w.schedule.sort(&w.sorter)
 	if len(w.isActive) < c.n {
 		w.isActive = make([]bool, c.n)
 	}
@@ -143,7 +146,14 @@ func (w *Workspace) quietLeg(ctx context.Context) error {
 	}
 	// What is still to come of the schedule, for all.
 	w.schedule.reset()
-	if t < c.lastDeath {
+	if t < c.lastDeath && w.compact {
+		// Now they are needed after all.
+		w.compact = false
+		if err := w.exposeAll(); err != nil {
+			return err
+		}
+	}
+	if t < c.lastDeath || m.encounter != nil {
 		for i := range uint32(c.n) {
 			if c.place[i] != law.Bound {
 				continue
@@ -155,7 +165,7 @@ func (w *Workspace) quietLeg(ctx context.Context) error {
 				w.scheduleDeath(i, w.schedule.put)
 			}
 		}
-		w.schedule.sort()
+		w.schedule.sort(&w.sorter)
 	}
 	return nil
 }
@@ -171,14 +181,14 @@ func (w *Workspace) linear(l float64) float64 {
 // loop takes events one by one until legEnd, or until a cap in a quiet leg.
 func (w *Workspace) loop(ctx context.Context, legEnd float64) error {
 	for {
-		if w.env.Stop && w.bound > 0 {
+		s, ok := w.schedule.head()
+		if w.env.Stop && w.bound > 0 && !(ok && s.key <= w.t) { // what is due goes first
 			return w.stop()
 		}
 		if w.bound == 0 {
 			return w.close()
 		}
 		k, id, date := w.nextHit()
-		s, ok := w.schedule.head()
 		limit, what := w.limits(legEnd)
 		switch {
 		case ok && s.key <= date && s.key <= limit:
@@ -271,6 +281,9 @@ func (w *Workspace) limits(legEnd float64) (float64, int) {
 		}
 	}
 	if w.quiet {
+		if what == atEnds || what == atWear {
+			what = atLegEnd // they are for all objects
+		}
 		for k, r := range w.env.Rates {
 			if r > 0 {
 				if d := w.base + (w.caps[k]-w.reading[k])/r; d < limit {
@@ -305,6 +318,7 @@ func (w *Workspace) reached(what int) (done bool, err error) {
 
 // stop ends the dynamics because the ejection law says so.
 func (w *Workspace) stop() error {
+	w.t = max(w.t, w.central.since*num.Exp10(-w.env.unit)) // no earlier than the galaxy
 	w.stoppedAt = w.logNow()
 	return w.castOff(w.m.stopFate, w.m.stopCause)
 }
@@ -371,10 +385,30 @@ func (w *Workspace) grow() {
 			w.env.Rates[k] *= num.Exp10(step)
 			w.env.rate0[k] *= num.Exp10(step)
 		}
-		w.schedule.scale(f)
+		w.central.grown *= f
+		w.reschedule()
 		w.meets.scale(f)
 		w.wear.scale(f)
 		w.relimit()
+	}
+}
+
+// reschedule puts everything still to come on the schedule anew, in the present
+// unit of time.
+func (w *Workspace) reschedule() {
+	w.schedule.reset()
+	for i := range uint32(w.c.n) {
+		if w.c.place[i] != law.Bound || w.stage[i]&waiting != 0 {
+			continue
+		}
+		if w.stage[i] == 0 {
+			w.schedule.push(w.years(w.c.birth[i]), i|eventBirth)
+		}
+		if w.stage[i] <= 1 {
+			w.scheduleDeath(i, w.schedule.push)
+		} else {
+			w.scheduleEnd(i)
+		}
 	}
 }
 
@@ -387,6 +421,9 @@ func (w *Workspace) relimit() {
 		if w.adriftAt < never || w.adriftPending {
 			w.adriftAt = w.linear(w.sky.Adrift())
 		}
+	}
+	if len(w.wear.known) == 0 {
+		w.wear.at = w.linear(w.c.wearAt)
 	}
 	if !w.endsScheduled {
 		w.endAt = never

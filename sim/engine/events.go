@@ -149,7 +149,11 @@ func (w *Workspace) fire(k int, i uint32, t float64) error {
 	if w.stageOf(i) >= 2 {
 		stage = 1
 	}
-	if w.c.turned[i]&(1<<(2*k+stage)) != 0 {
+	turned := w.c.turned[i]&(1<<(2*k+stage)) != 0
+	if s := w.stageOf(i); s > 2 {
+		turned = w.c.chain[i][s-3].turned&(1<<k) != 0
+	}
+	if turned {
 		fate, cause = law.FateCentral, w.diverted(k)
 	}
 	w.remove(i, t, fate, cause)

@@ -85,20 +85,25 @@ func (w *Workspace) divertChunk(stage, first int, r *rows) error {
 // divert decides for each object and clock whether a hit in this stage would
 // be taken by a diverting law. The draw is the same for both stages.
 func (w *Workspace) divert(stage int, r *rows, id func(int) int) error {
-	for _, d := range w.m.diverts {
-		s, pick := w.ask.spoken(d.use, r)
+	return w.ask.divert(r, func(i, clock int) { w.c.turned[id(i)] |= 1 << (2*clock + stage) })
+}
+
+// divert hands f each row and clock whose hit would be taken.
+func (a *asker) divert(r *rows, f func(row, clock int)) error {
+	for _, d := range a.m.diverts {
+		s, pick := a.spoken(d.use, r)
 		if s.n == 0 {
 			continue
 		}
-		out, err := w.ask.ask(d.use, "divert", s, drawU)
+		out, err := a.ask(d.use, "divert", s, drawU)
 		if err != nil {
 			return err
 		}
-		stream := w.ask.streams[d.use.Card.Process]
+		stream := a.streams[d.use.Card.Process]
 		for i, share := range out.Columns[d.column].Values {
 			u := stream.Uniform(uint64(s.idOf(i)), s.genOf(i)&^(mergerGeneration-1), drawDivert+uint32(d.column))
 			if u < share {
-				w.c.turned[id(at(pick, i))] |= 1 << (2*d.clock + stage)
+				f(at(pick, i), d.clock)
 			}
 		}
 	}
@@ -194,6 +199,16 @@ func (w *Workspace) readingOf(k int, j int, e, s0, s1, t float64) float64 {
 	}
 	d := w.stepAt(c.death[j]).at(k, c.death[j])
 	return over(d, e-s0*(d-b), s1)
+}
+
+// spareOf keeps what is left to an object that nothing can hit at date t.
+func (w *Workspace) spareOf(k int, j int, e, s0, s1, t float64) {
+	c := &w.c
+	if s1 != 0 || w.stage[j] != 2 || c.died[j] == 0 || s0 == 0 {
+		return
+	}
+	b, d := w.stepAt(c.birth[j]).at(k, c.birth[j]), w.stepAt(c.death[j]).at(k, c.death[j])
+	w.spare(k, uint32(j), e-s0*(d-b))
 }
 
 // over is reading + e/s, never when nothing can hit it.
@@ -348,6 +363,9 @@ func (w *Workspace) settle(t float64) error {
 					e = w.exponential(k, uint32(j), 0)
 				}
 				if w.stage[j] != 0 {
+					if m.encounter != nil || c.chain != nil {
+						w.spareOf(k, j, e, s0[k][i], s1[k][i], t)
+					}
 					e = w.readingOf(k, j, e, s0[k][i], s1[k][i], t)
 				}
 				c.reading[k][j] = e

@@ -127,13 +127,23 @@ func (a *asker) foundLives(c *columns, r *rows) error {
 // any speaks for them; else nil.
 func (a *asker) starProspects(c *columns, r *rows) ([]prospect, error) {
 	first := int(r.first)
-	for _, u := range append(append([]*law.Use(nil), a.m.wearing...), a.m.turning...) {
-		if any, _ := u.SpeaksForKind(law.Star); any {
-			p, err := a.prospects(r, func(i int) float64 { return num.Log10(c.birth[first+i]) })
-			return append([]prospect(nil), p...), err
+	if !a.m.starsEnd() {
+		return nil, nil
+	}
+	p, err := a.prospects(r, func(i int) float64 { return num.Log10(c.birth[first+i]) })
+	return append([]prospect(nil), p...), err
+}
+
+// starsEnd tells whether a wearing or turning law speaks for stars.
+func (m *Model) starsEnd() bool {
+	for _, uses := range [2][]*law.Use{m.wearing, m.turning} {
+		for _, u := range uses {
+			if any, _ := u.SpeaksForKind(law.Star); any {
+				return true
+			}
 		}
 	}
-	return nil, nil
+	return false
 }
 
 // remnantsOf fills the second stage of the stars of r that u speaks for. id
@@ -297,11 +307,18 @@ func (a *asker) cutShort(c *columns, j int, p prospect) error {
 	if p.cause == 0 || p.date > 300 || num.Exp10(p.date) >= c.death[j] {
 		return nil
 	}
+	c.death[j] = num.Exp10(p.date)
+	return a.becomes(c, j, p)
+}
+
+// becomes makes a star's second stage what a prospect makes of it.
+func (a *asker) becomes(c *columns, j int, p prospect) error {
 	if p.kind == law.NoWord {
 		return fmt.Errorf("engine: law %s: a star of %.6g Msun would be gone before it dies: the engine has no place for that",
 			a.m.lawOf(p.cause), c.mass0[j])
 	}
-	c.death[j], c.died[j] = num.Exp10(p.date), p.cause
+	c.died[j] = p.cause
+	c.noteGas(uint32(j), starStep, p)
 	c.kind1[j], c.mass1[j], c.comp1[j] = p.kind, p.mass, a.m.compositionOf(p.kind, law.Hydrogen)
 	return nil
 }

@@ -57,7 +57,7 @@ func (w *Workspace) each(i uint32, dates [3]float64, limit float64, f func(date 
 		stage, next, cause = 2, c.end[i], c.ended[i]
 	}
 	for {
-		if leave <= next {
+		if leave < next || leave == next && (leave == never || stage >= 2 && !w.passed(i, stage)) {
 			if leave > limit || leave == never {
 				return now
 			}
@@ -89,6 +89,10 @@ func (w *Workspace) each(i uint32, dates [3]float64, limit float64, f func(date 
 		next, cause = after, afterCause
 	}
 }
+
+// passed tells whether object i had left a stage, from the second on, when it
+// left the bound galaxy: what is due at a date happens before anything else.
+func (w *Workspace) passed(i uint32, stage int) bool { return w.stageOf(i) > stage }
 
 // enters tells what object i is in a stage, when that stage ends and why; ok
 // is false when there is no such stage.
@@ -162,6 +166,9 @@ type holeEvent struct {
 }
 
 func (h *centralHole) begin(mass, since float64) {
+	if since == never {
+		since = 1 // no object dates the galaxy
+	}
 	*h = centralHole{mass: mass, since: since, log: h.log[:0], end: prospect{date: never}}
 	if mass > 0 {
 		h.log = append(h.log, holeEvent{date: num.Log10(since)})
@@ -191,6 +198,7 @@ func (h *centralHole) look(w *Workspace, t float64) error {
 	}
 	if h.end.date <= num.Log10(t)+w.env.unit {
 		w.env.add(slotCentral, -h.mass)
+		w.books.count(h.end.cause)
 		h.finish()
 	}
 	return nil

@@ -306,7 +306,7 @@ func (w *Workspace) rejoin(ids []uint32, t float64) error {
 			w.enqueue(k, i)
 		}
 		if c.died[i] != 0 {
-			w.scheduleDeath(i, func(_ float64, id uint32) { w.schedule.push(w.years(c.death[i]), id) })
+			w.scheduleDeath(i, w.schedule.push)
 		} else {
 			w.scheduleEnd(i)
 		}
@@ -372,10 +372,36 @@ func (w *Workspace) reliveStars(ids []uint32, r *rows) error {
 			}
 		}
 	}
+	if err := w.cutShort(ids, r); err != nil {
+		return err
+	}
 	for j, i := range ids {
 		if c.died[i] != 0 {
 			r.kind[j], r.mass[j], r.comp[j], r.birthMass[j] = c.kind1[i], c.mass1[i], c.comp1[i], c.mass1[i]
 			r.gen[j]++
+		}
+	}
+	return nil
+}
+
+// cutShort ends the lives of stars among products by prospects that come
+// before their deaths.
+func (w *Workspace) cutShort(ids []uint32, r *rows) error {
+	c, a := &w.c, w.ask
+	if !a.m.starsEnd() {
+		return nil
+	}
+	a.latest = never
+	ps, err := a.prospects(r, func(j int) float64 { return w.logDate(c.birth[ids[j]]) })
+	if err != nil {
+		return err
+	}
+	for j, i := range ids {
+		if p := ps[j]; r.kind[j] == law.Star && p.cause != 0 && p.date < w.logDate(c.death[i]) {
+			if err := a.becomes(c, int(i), p); err != nil {
+				return err
+			}
+			c.death[i] = codedLog(p.date)
 		}
 	}
 	return nil

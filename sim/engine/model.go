@@ -264,7 +264,7 @@ func (m *Model) compileRates(dynamics []*law.Use) error {
 		if timed {
 			m.timedSlots = append(m.timedSlots, slot)
 		}
-		if slot == slotMass || slot >= slotKinds && !timed {
+		if slot == slotMass || slot == slotCarried || slot >= slotKinds && !timed {
 			m.deathsMatter = true
 		}
 		for k := range m.Clocks {

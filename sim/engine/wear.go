@@ -45,8 +45,9 @@ func (x *wearing) scale(f float64) {
 }
 
 // enter takes in that object i has entered a stage at date t.
-func (x *wearing) enter(w *Workspace, _ uint32, t float64) {
+func (x *wearing) enter(w *Workspace, i uint32, t float64) {
 	if len(x.known) > 0 {
+		x.known[i] = 0
 		x.at = min(x.at, t+w.linear(w.c.wearStep))
 	}
 }
@@ -100,9 +101,6 @@ func belowLog10(x float64) float64 {
 // wearDown brings worn masses up to date.
 func (w *Workspace) wearDown() error {
 	x, c, t := &w.wear, &w.c, w.t
-	if w.quiet {
-		panic("engine: wearing within a quiet leg")
-	}
 	if err := w.holdSusceptibilities(); err != nil {
 		return err
 	}
@@ -114,27 +112,33 @@ func (w *Workspace) wearDown() error {
 	if err := w.learnRates(); err != nil {
 		return err
 	}
+	// The date that led here may have been a bound; a step waits for its own.
+	if x.at = w.nextWearStep(); x.at > t*(1+1e-14) {
+		return nil
+	}
 	x.ids = x.ids[:0]
 	for i := range uint32(c.n) {
-		if w.wears(i) && x.rate[i]*(t-x.since[i]) >= wearToJoin*w.massOf(i) {
+		if w.wears(i) && x.rate[i]*(t-x.since[i]) >= wearToJoin*(1-1e-12)*w.massOf(i) {
 			x.ids = append(x.ids, i)
 		}
 	}
-	if len(x.ids) > 0 {
-		if err := w.wearStep(); err != nil {
-			return err
-		}
+	if err := w.wearStep(); err != nil {
+		return err
 	}
-	x.at = never
-	for i := range uint32(c.n) {
-		if w.wears(i) && x.rate[i] > 0 {
-			x.at = min(x.at, x.since[i]+wearToStep*w.massOf(i)/x.rate[i])
-		}
-	}
-	if x.at <= t {
-		x.at = t * (1 + 1e-15)
-	}
+	x.at = max(w.nextWearStep(), math.Nextafter(t, never))
 	return nil
+}
+
+// nextWearStep is the date at which the first bound object has lost 1 % since
+// its mass was last set.
+func (w *Workspace) nextWearStep() float64 {
+	x, at := &w.wear, never
+	for i := range uint32(w.c.n) {
+		if w.wears(i) && x.rate[i] > 0 {
+			at = min(at, x.since[i]+wearToStep*w.massOf(i)/x.rate[i])
+		}
+	}
+	return at
 }
 
 // wears tells whether object i is bound, in a stage that wears.
