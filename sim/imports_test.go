@@ -14,9 +14,9 @@ import (
 // fade < ensemble, scenario < sim < cmd.
 const allowed = `
 sim/num/internal/...     : sim/internal/... os
-sim/num                  :
+sim/num                  : golang.org/x/sys/cpu
 sim/draw/internal/...    : sim/internal/... sim/num os
-sim/draw                 : sim/num
+sim/draw                 : sim/num golang.org/x/sys/cpu
 sim/internal/...         : sim/num
 sim/physics/...          : sim/num sim/physics/... gonum.org/v1/gonum/...
 sim/law/lawtest          : sim/num sim/draw sim/physics/... sim/law math/rand/v2

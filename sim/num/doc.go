@@ -8,6 +8,9 @@
 // every product that is added to something is rounded first (an explicit
 // float64 conversion), so that no compiler fuses the two.
 //
+// Columns are done eight elements at once, by the same operations in the same
+// order, where the processor has AVX-512.
+//
 // Dates are log10(t/yr), which Add10, Sub10 and Sum10 add and subtract as
 // times. Errors are given in units in the last place (ulp), the largest found
 // against mpmath over the ranges of the tests.

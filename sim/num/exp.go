@@ -25,6 +25,17 @@ const (
 	// Between these sizes of the argument no result is special or subnormal.
 	expLeast, expGreatest     = 0x1p-60, 700
 	exp10Least, exp10Greatest = 0x1p-60, 304
+
+	// Above and below these the result is +Inf and 0.
+	expOver, expUnder     = 710, -746
+	exp10Over, exp10Under = 309, -324
+
+	// (ln 10)^n / n!
+	tenC1 = 0x1.26bb1bbb55516p+1
+	tenC2 = 0x1.53524c73cea69p+1
+	tenC3 = 0x1.0470591de2ca4p+1
+	tenC4 = 0x1.2bd7609fd98c4p+0
+	tenC5 = 0x1.1429ffd1d4d76p-1
 )
 
 // Exp returns e^x.
@@ -50,13 +61,12 @@ func Exp(x float64) float64 {
 // Shapes: dst at least as long as src; they may be the same slice.
 func ExpInto(dst, src []float64) {
 	dst = dst[:len(src)]
-	for i, x := range src {
-		if a := math.Abs(x); !(a >= expLeast && a < expGreatest) {
-			dst[i] = expFar(x)
-			continue
+	for len(src) > 0 {
+		done, next := expColumn(dst, src)
+		for i := done; i < next; i++ {
+			dst[i] = Exp(src[i])
 		}
-		k, r := expReduce(x)
-		dst[i] = scaled(k, expSeries(r))
+		dst, src = dst[next:], src[next:]
 	}
 }
 
@@ -76,13 +86,12 @@ func Exp10(x float64) float64 {
 // Shapes: dst at least as long as src; they may be the same slice.
 func Exp10Into(dst, src []float64) {
 	dst = dst[:len(src)]
-	for i, x := range src {
-		if a := math.Abs(x); !(a >= exp10Least && a < exp10Greatest) {
-			dst[i] = exp10Far(x)
-			continue
+	for len(src) > 0 {
+		done, next := exp10Column(dst, src)
+		for i := done; i < next; i++ {
+			dst[i] = Exp10(src[i])
 		}
-		k, r := exp10Reduce(x)
-		dst[i] = scaled(k, exp10Series(r))
+		dst, src = dst[next:], src[next:]
 	}
 }
 
@@ -108,17 +117,11 @@ func expSeries(r float64) float64 {
 		float64(float64(r2*r2)*(1.0/24+float64(r*(1.0/120)))))
 }
 
-// exp10Series returns 10^r - 1; coefficients (ln 10)^n / n!.
+// exp10Series returns 10^r - 1.
 func exp10Series(r float64) float64 {
-	const (
-		c1 = 0x1.26bb1bbb55516p+1
-		c2 = 0x1.53524c73cea69p+1
-		c3 = 0x1.0470591de2ca4p+1
-		c4 = 0x1.2bd7609fd98c4p+0
-		c5 = 0x1.1429ffd1d4d76p-1
-	)
 	r2 := float64(r * r)
-	return float64(r*c1) + (float64(r2*(c2+float64(r*c3))) + float64(float64(r2*r2)*(c4+float64(r*c5))))
+	return float64(r*tenC1) + (float64(r2*(tenC2+float64(r*tenC3))) +
+		float64(float64(r2*r2)*(tenC4+float64(r*tenC5))))
 }
 
 // scaled returns 2^(k/128) (1 + p) for a normal result.

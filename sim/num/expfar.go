@@ -7,9 +7,9 @@ func expFar(x float64) float64 {
 	switch {
 	case math.Abs(x) < expLeast:
 		return 1 + x
-	case x > 710:
+	case x > expOver:
 		return math.Inf(1)
-	case x < -746:
+	case x < expUnder:
 		return 0
 	case math.IsNaN(x):
 		return x
@@ -23,9 +23,9 @@ func exp10Far(x float64) float64 {
 	switch {
 	case math.Abs(x) < exp10Least:
 		return 1 + x
-	case x > 309:
+	case x > exp10Over:
 		return math.Inf(1)
-	case x < -324:
+	case x < exp10Under:
 		return 0
 	case math.IsNaN(x):
 		return x

@@ -3,8 +3,8 @@ package num
 import "math"
 
 // logEntry is a reciprocal of 10 bits and minus its logarithm in two parts,
-// the high one a multiple of 2^-42.
-type logEntry struct{ inverse, high, low float64 }
+// the high one a multiple of 2^-42; the last number fills 32 bytes.
+type logEntry struct{ inverse, high, low, unused float64 }
 
 const (
 	// logOffset is where the 128 intervals of a mantissa begin, 0.6836; it
@@ -40,16 +40,12 @@ func Log(x float64) float64 {
 // Shapes: dst at least as long as src; they may be the same slice.
 func LogInto(dst, src []float64) {
 	dst = dst[:len(src)]
-	for i, x := range src {
-		bits := math.Float64bits(x)
-		if bits-leastBits >= normalBits {
-			dst[i] = logFar(x, &logTable, logSum)
-			continue
+	for len(src) > 0 {
+		done, next := logColumn(dst, src)
+		for i := done; i < next; i++ {
+			dst[i] = Log(src[i])
 		}
-		k, index, high, low := logReduce(bits)
-		t := &logTable[index]
-		a, b := logSplit(t.inverse, high, low)
-		dst[i] = largeAndSmall(float64(k*lnTwoHigh)+t.high, a, logSmall(k, a, b, t))
+		dst, src = dst[next:], src[next:]
 	}
 }
 
@@ -72,16 +68,12 @@ func Log10(x float64) float64 {
 // Shapes: dst at least as long as src; they may be the same slice.
 func Log10Into(dst, src []float64) {
 	dst = dst[:len(src)]
-	for i, x := range src {
-		bits := math.Float64bits(x)
-		if bits-leastBits >= normalBits {
-			dst[i] = logFar(x, &log10Table, log10Sum)
-			continue
+	for len(src) > 0 {
+		done, next := log10Column(dst, src)
+		for i := done; i < next; i++ {
+			dst[i] = Log10(src[i])
 		}
-		k, index, high, low := logReduce(bits)
-		t := &log10Table[index]
-		a, b := logSplit(t.inverse, high, low)
-		dst[i] = largeAndSmall(float64(k*log10TwoHigh)+t.high, float64(a*tenHigh), log10Small(k, a, b, t))
+		dst, src = dst[next:], src[next:]
 	}
 }
 

@@ -55,7 +55,7 @@ func logTable(name, logarithm string, unit *big.Float) {
 			l = Neg(Quo(Log(New(inverse)), unit))
 		}
 		hi, lo := split(l, 42)
-		fmt.Printf("\t{%x, %x, %x},\n", inverse, hi, lo)
+		fmt.Printf("\t{%x, %x, %x, 0},\n", inverse, hi, lo)
 	}
 	fmt.Print("}\n\n")
 }
