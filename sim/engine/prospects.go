@@ -73,6 +73,9 @@ func (a *asker) wornAlone(w int, u *law.Use, r *rows, since func(int) float64) e
 		return nil
 	}
 	s, pick := a.spokenAlone(w, u, r)
+	s, pick = a.above(w, r, s, pick, func(j int, t *threshold) {
+		a.offer(j, prospect{date: since(j), mass: r.mass[j], cause: t.cause, kind: t.kind})
+	})
 	if s.n == 0 {
 		return nil
 	}
@@ -136,7 +139,7 @@ func (a *asker) spokenAlone(w int, u *law.Use, r *rows) (*rows, []int32) {
 	for i := range s.n {
 		alone := true
 		for v, other := range a.m.wearing {
-			if v != w && other.Speaks(s.kind[i], s.mass[i], s.metals[i]) {
+			if j := at(pick, i); v != w && other.Speaks(r.kind[j], r.mass[j], r.metals[j]) {
 				alone = false
 			}
 		}
@@ -149,6 +152,33 @@ func (a *asker) spokenAlone(w int, u *law.Use, r *rows) (*rows, []int32) {
 	}
 	a.alone.gather(r, a.pick2, hasAll)
 	return a.alone, a.pick2
+}
+
+// above hands those of the spoken rows s of r that are beyond their threshold
+// to cross, since they cross it at once, unasked. It returns the others.
+func (a *asker) above(w int, r, s *rows, pick []int32, cross func(row int, t *threshold)) (*rows, []int32) {
+	thresholds := a.m.thresholds[w]
+	beyond := func(i int) bool {
+		t := &thresholds[s.kind[i]]
+		return t.applies && s.mass[i] <= t.mass
+	}
+	first := 0
+	for first < s.n && !beyond(first) {
+		first++
+	}
+	if first == s.n {
+		return s, pick
+	}
+	a.pick3 = a.pick3[:0]
+	for i := range s.n {
+		if j := at(pick, i); beyond(i) {
+			cross(j, &thresholds[s.kind[i]])
+		} else {
+			a.pick3 = append(a.pick3, int32(j))
+		}
+	}
+	a.rest.gather(r, a.pick3, hasAll)
+	return a.rest, a.pick3
 }
 
 // turned offers each row what a turning law foretells.

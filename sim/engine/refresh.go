@@ -27,7 +27,8 @@ func (e *Environment) refresh(date float64, readings []float64) (float64, error)
 		return 0, err
 	}
 	window := e.window(date)
-	if math.IsInf(window, 1) {
+	if math.IsInf(window, 1) || e.value[slotDate] > followed {
+		window = math.Inf(1)
 		return window, nil
 	}
 	for k, x := range readings {
@@ -36,6 +37,11 @@ func (e *Environment) refresh(date float64, readings []float64) (float64, error)
 	e.value[slotDate] = num.Log10(date+0.5*window) + e.unit
 	return window, e.askRates()
 }
+
+// followed is the log10 date up to which values that move with time alone are
+// followed. Rates stand still from there on: a clock that slows down for ever
+// would call for windows without end.
+const followed = 300
 
 // window is how long the rates may stand.
 func (e *Environment) window(date float64) float64 {

@@ -42,9 +42,10 @@ func (r *rows) resize(n int) {
 	r.other = r.other[:0]
 }
 
+// grown returns s with n elements, which hold anything if it had to grow.
 func grown[T any](s []T, n int) []T {
 	if cap(s) < n {
-		return make([]T, n, n+n/4)
+		return make([]T, n)
 	}
 	return s[:n]
 }
@@ -157,19 +158,19 @@ type asker struct {
 	columns []law.Column
 	latest  float64 // log10: no since of the rows being asked is later
 
-	sub, alone   *rows // gathered rows
-	pick, pick2  []int32
-	nodes        rows
-	view         rows // of the galaxy's columns
-	constants    constantColumns
-	offers       []prospect
-	linked       []int32
-	links        []prospect
-	kept, start  []float64
-	gens         []uint32
-	words, kinds []uint8
-	exposed      [2][][]float64
-	soughts      [][]float64
+	sub, alone, rest   *rows // gathered rows
+	pick, pick2, pick3 []int32
+	nodes              rows
+	view               rows // of the galaxy's columns
+	constants          constantColumns
+	offers             []prospect
+	linked             []int32
+	links              []prospect
+	kept, start        []float64
+	gens               []uint32
+	words, kinds       []uint8
+	exposed            [2][][]float64
+	soughts            [][]float64
 }
 
 // constantColumns are columns that say the same of every row of a chunk.
@@ -179,7 +180,7 @@ type constantColumns struct {
 }
 
 func newAsker(m *Model) *asker {
-	a := &asker{m: m, streams: map[string]draw.Stream{}, sub: newRows(0), alone: newRows(0)}
+	a := &asker{m: m, streams: map[string]draw.Stream{}, sub: newRows(0), alone: newRows(0), rest: newRows(0)}
 	a.arena = &a.arenas[0]
 	n := min(chunk, m.Objects)
 	a.constants = constantColumns{make([]uint8, n), make([]uint8, n), make([]uint8, n), make([]float64, n)}

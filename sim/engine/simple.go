@@ -35,6 +35,16 @@ func (a *asker) simpleProspects(c *columns, r *rows, since func(int) float64) er
 		if err := a.wearBoundOf(c, u, s, pick, since); err != nil {
 			return err
 		}
+		s, pick = a.above(w, r, s, pick, func(j int, t *threshold) {
+			end[j], ended[j] = since(j), t.cause
+			if t.kind != law.NoWord {
+				a.linked = append(a.linked, int32(j))
+				a.links = append(a.links[:len(a.linked)-1], prospect{date: end[j], mass: r.mass[j], cause: t.cause, kind: t.kind})
+			}
+		})
+		if s.n == 0 {
+			continue
+		}
 		starts, err := a.starts(u, s, pick, since)
 		if err != nil {
 			return err
