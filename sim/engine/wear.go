@@ -253,6 +253,17 @@ func (w *Workspace) wearRates(r *rows, starts bool) (rate, start []float64, err 
 // wearStep sets the masses of wear.ids to what they weigh now.
 func (w *Workspace) wearStep() error {
 	x, t := &w.wear, w.t
+	ids := x.ids[:0]
+	for _, i := range x.ids {
+		if mass := w.massOf(i); mass-x.rate[i]*(t-x.since[i]) > w.thresholdOf(w.kindOf(i))*(1+1e-9) {
+			ids = append(ids, i)
+		} else {
+			x.rate[i], x.since[i] = 0, t // its prospect is about to end it
+		}
+	}
+	if x.ids = ids; len(ids) == 0 {
+		return nil
+	}
 	r := w.rowsOf(x.ids)
 	before := append([]float64(nil), r.mass...)
 	for j, i := range x.ids {

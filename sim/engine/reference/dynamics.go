@@ -371,6 +371,7 @@ func (g *run) nextWear() float64 {
 // or more to what it then weighs.
 func (g *run) wearStep() error {
 	heap.Pop(&g.wears)
+	stepped := false
 	for _, o := range g.objects {
 		s := o.now()
 		if !o.available() || o.wearRate == 0 {
@@ -380,16 +381,20 @@ func (g *run) wearStep() error {
 		if !(o.wearRate*dt >= wearToJoin*(1-1e-12)*s.mass) {
 			continue
 		}
-		r := o.row()
-		r.mass = s.mass - 0.5*o.wearRate*dt
-		mass := s.mass - g.wearOf(r)*dt
+		o.wearSince = g.t
 		least := 0.0
 		for _, u := range g.wearing {
 			if _, m, ok := g.thresholdOf(u, s.kind); ok {
 				least = max(least, m)
 			}
 		}
-		o.wearSince = g.t
+		mass := s.mass - o.wearRate*dt
+		if mass > least*(1+1e-9) {
+			r := o.row()
+			r.mass = s.mass - 0.5*o.wearRate*dt
+			mass = s.mass - g.wearOf(r)*dt
+			stepped = true
+		}
 		if !(mass > least*(1+1e-9)) {
 			o.wearRate = 0 // its prospect is about to end it
 			continue
@@ -404,6 +409,9 @@ func (g *run) wearStep() error {
 		g.count(o, +1)
 		g.spend(o)
 		g.setWear(o)
+	}
+	if !stepped {
+		return nil
 	}
 	return g.changed()
 }
