@@ -23,7 +23,7 @@ type columns struct {
 	// Clocks. reading is where clock k takes the object: first a unit
 	// exponential, then a reading.
 	reading [][]float64
-	turned  []uint8 // bit 2k: clock k's hit in the first stage falls to the centre; 2k+1: in the second
+	turned  []uint8 // bit 2k: clock k's hit in the first stage falls to the centre; 2k+1: in the second. Nil when no law diverts
 
 	leave []float64 // date it left the bound galaxy, +Inf: it has not
 	left  []uint8   // cause
@@ -68,8 +68,11 @@ func (c *columns) resize(m *Model, n int) {
 	for _, f := range []*[]float64{&c.birth, &c.death, &c.mass0, &c.mass1, &c.end, &c.leave} {
 		*f = grown(*f, n)
 	}
-	for _, b := range []*[]uint8{&c.kind0, &c.kind1, &c.comp1, &c.died, &c.ended, &c.left, &c.place, &c.turned} {
+	for _, b := range []*[]uint8{&c.kind0, &c.kind1, &c.comp1, &c.died, &c.ended, &c.left, &c.place} {
 		*b = grown(*b, n)
+	}
+	if len(m.diverts) > 0 {
+		c.turned = grown(c.turned, n)
 	}
 	if c.reading == nil {
 		k := len(m.Clocks)

@@ -26,7 +26,7 @@ func (w *Workspace) conclude() (*Outcome, error) {
 	if err := w.endCentral(o.End); err != nil {
 		return nil, err
 	}
-	w.counts.reset(m, w.plainRun(o.End))
+	w.counts.reset(m, w.plainRun(o.End), w.c.reading)
 	if err := w.tally(o.End); err != nil {
 		return nil, err
 	}

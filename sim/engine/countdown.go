@@ -133,7 +133,7 @@ func (w *Workspace) hitBound(k int, i uint32, date float64) {
 	c, clock := &w.c, &w.m.Clocks[k]
 	fate := clock.Fate
 	w.lastCause = clock.cause
-	if turned := c.turned[i]; turned&(2<<(2*k)) != 0 {
+	if c.turned != nil && c.turned[i]&(2<<(2*k)) != 0 {
 		fate, w.lastCause = law.FateCentral, w.diverted(k)
 	}
 	switch fate {

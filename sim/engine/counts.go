@@ -27,6 +27,8 @@ type counts struct {
 	wanted  uint64      // populations whose entries are being gathered
 	entries [][]float64
 	exits   [][]float64
+	own     [][]float64 // the populations' own memory for exits
+	spare   [][]float64 // memory lent by the dynamics, which has done with it
 	entered []int
 	lastIn  []float64 // of entries by change
 	flows   flows
@@ -37,8 +39,9 @@ type counts struct {
 	logs    [3][]float64
 }
 
-func (n *counts) reset(m *Model, plain bool) {
+func (n *counts) reset(m *Model, plain bool, spare [][]float64) {
 	p := len(m.populations)
+	n.own, n.spare = grown(n.own, p), append(n.spare[:0], spare...)
 	n.entries, n.exits, n.entered = grown(n.entries, p), grown(n.exits, p), grown(n.entered, p)
 	n.lastIn, n.lastOut = grown(n.lastIn, p), grown(n.lastOut, p)
 	n.left, n.lastWhy = grown(n.left, p), grown(n.lastWhy, p)
@@ -46,7 +49,7 @@ func (n *counts) reset(m *Model, plain bool) {
 	clear(n.left)
 	for i := range m.populations {
 		pop := &m.populations[i]
-		n.entries[i], n.exits[i] = n.entries[i][:0], n.exits[i][:0]
+		n.entries[i], n.exits[i] = n.entries[i][:0], n.own[i][:0]
 		n.entered[i], n.lastIn[i], n.lastOut[i] = 0, -never, -never
 		if pop.Warmth != nil {
 			n.direct |= 1 << i
@@ -90,11 +93,33 @@ func (n *counts) ends(date float64, from state, cause uint8) {
 }
 
 func (n *counts) exit(p int, date float64, cause uint8) {
-	n.exits[p] = append(n.exits[p], date)
+	n.keepExit(p, date)
 	n.left[p][cause]++
 	if date >= n.lastOut[p] {
 		n.lastOut[p], n.lastWhy[p] = date, cause
 	}
+}
+
+// keepExit keeps the date of one exit.
+func (n *counts) keepExit(p int, date float64) {
+	x := n.exits[p]
+	if len(x) == cap(x) {
+		x = n.moreRoom(p)
+	}
+	n.exits[p] = append(x, date)
+}
+
+// moreRoom moves a population's exits to where there is room for more: memory
+// that is lent if it is twice as large, else its own.
+func (n *counts) moreRoom(p int) []float64 {
+	x := n.exits[p]
+	if last := len(n.spare) - 1; last >= 0 && len(x) >= 4096 && cap(n.spare[last]) >= 2*len(x) {
+		to := append(n.spare[last][:0], x...)
+		n.spare = n.spare[:last]
+		return to
+	}
+	n.own[p] = append(make([]float64, 0, max(64, len(x)+len(x)/2)), x...)
+	return n.own[p]
 }
 
 // enter gathers an entry for the populations that want it.
@@ -135,6 +160,9 @@ func (w *Workspace) marks(end float64) []fade.Marks {
 		for p := range out {
 			if n.wanted>>p&1 != 0 {
 				out[p] = n.scratch.Find(n.entries[p], n.exits[p])
+				if n.entered[p] == w.c.n {
+					n.entries[p] = nil // it may be the column of births
+				}
 			}
 		}
 	}
@@ -189,6 +217,10 @@ func (w *Workspace) replayStars() bool {
 	p := bits.TrailingZeros64(n.wanted)
 	if n.inLog&n.wanted != 0 || n.wanted != 1<<p {
 		return false
+	}
+	if n.entered[p] == c.n {
+		n.entries[p] = c.birth[:c.n] // everything is a star: no need for a copy
+		return true
 	}
 	for i, kind := range c.kind0[:c.n] {
 		if kind == law.Star && !(c.leave[i] < c.birth[i]) {

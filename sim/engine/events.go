@@ -62,6 +62,7 @@ func (w *Workspace) born(i uint32, t float64) {
 	if c.died[i] == 0 {
 		w.stage[i] = 2
 		w.scheduleEnd(i)
+		w.wear.enter(w, i, t)
 	}
 	for k := range w.m.Clocks {
 		e := c.reading[k][i]
@@ -149,7 +150,7 @@ func (w *Workspace) fire(k int, i uint32, t float64) error {
 	if w.stageOf(i) >= 2 {
 		stage = 1
 	}
-	turned := w.c.turned[i]&(1<<(2*k+stage)) != 0
+	turned := w.c.turned != nil && w.c.turned[i]&(1<<(2*k+stage)) != 0
 	if s := w.stageOf(i); s > 2 {
 		turned = w.c.chain[i][s-3].turned&(1<<k) != 0
 	}

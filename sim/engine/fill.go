@@ -1,6 +1,8 @@
 package engine
 
 import (
+	"slices"
+
 	"wane/sim/law"
 	"wane/sim/num"
 )
@@ -26,12 +28,24 @@ func (w *Workspace) fillClocks() error {
 	for k := range n {
 		now[k], slow[k] = w.readingAt(k, w.t), 1/w.env.Rates[k]
 	}
-	var lists [maxClocks]queue
+	var lists [maxClocks]struct {
+		keys []float64
+		ids  []uint32
+	}
 	for k := range n {
 		lists[k].keys, lists[k].ids = w.clocks[k].keys, w.clocks[k].ids
 	}
 	place, stage := c.place[:c.n], w.stage[:c.n]
 	for i, at := range place {
+		if i == chunk {
+			// Room for as many as the first objects let expect, and no more.
+			for k := range n {
+				l := &lists[k]
+				room := len(l.keys)*(len(place)/chunk+1)*33/32 + 64
+				l.keys = slices.Grow(l.keys, max(0, room-len(l.keys)))
+				l.ids = slices.Grow(l.ids, max(0, room-len(l.ids)))
+			}
+		}
 		if at != law.Bound || stage[i] == 0 || stage[i]&waiting != 0 {
 			continue
 		}
@@ -46,7 +60,8 @@ func (w *Workspace) fillClocks() error {
 		rho := &w.rho
 		for k := range n {
 			if x := c.reading[k][i]; x < never && (k == first || !(left[k] > rho[k][first]*left[first])) {
-				lists[k].put(x, uint32(i))
+				l := &lists[k]
+				l.keys, l.ids = append(l.keys, x), append(l.ids, uint32(i))
 			}
 		}
 	}
@@ -54,7 +69,7 @@ func (w *Workspace) fillClocks() error {
 		w.clocks[k].keys, w.clocks[k].ids = lists[k].keys, lists[k].ids
 	}
 	for k := range w.clocks {
-		w.clocks[k].sort()
+		w.clocks[k].sort(&w.sorter)
 	}
 	return nil
 }

@@ -55,7 +55,7 @@ func (n *counts) move(x *flow, date float64) {
 		if x.logs>>p&1 != 0 {
 			v = num.Log10(date)
 		}
-		n.exits[p] = append(n.exits[p], v)
+		n.keepExit(p, v)
 	}
 }
 

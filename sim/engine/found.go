@@ -49,7 +49,9 @@ func (a *asker) foundChunk(c *columns, first, n int) error {
 	copy(c.death[first:j], c.birth[first:j])
 	clear(c.died[first:j])
 	clear(c.left[first:j])
-	clear(c.turned[first:j])
+	if c.turned != nil {
+		clear(c.turned[first:j])
+	}
 	fill(c.leave[first:j], never)
 	place := c.place[first:j]
 	for i := range place {

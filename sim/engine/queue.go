@@ -1,6 +1,9 @@
 package engine
 
-import "math"
+import (
+	"math"
+	"math/bits"
+)
 
 // queue is an ordered list of readings or dates: a run sorted once, and a heap
 // for what arrives late.
@@ -9,9 +12,13 @@ type queue struct {
 	ids  []uint32
 	pos  int
 	late []entry
+}
 
-	keys2 []float64 // scratch of the sort
-	ids2  []uint32
+// sorter is the scratch of sorting, one for all queues of a worker.
+type sorter struct {
+	keys   []float64
+	ids    []uint32
+	counts [3][radixSize]uint32
 }
 
 type entry struct {
@@ -90,46 +97,51 @@ func (q *queue) pop() {
 	q.late[i] = last
 }
 
-// Radix sort: three passes over the top 33 bits of the keys, which are not
-// negative, then insertion on the whole key, then on the id.
+// Radix sort: two passes over the leading bits of what differs between the
+// keys, three for long lists, then insertion on the whole key, then on the id.
+// The prefix leaves few keys together: it has many more values than there are
+// keys.
 const (
-	radixBits = 11
+	radixBits = 12
 	radixSize = 1 << radixBits
+	longList  = 1 << 20
 )
 
 // sort orders what was put. Equal keys keep the order of their ids if they
 // were put in it.
-func (q *queue) sort() {
+func (q *queue) sort(scratch *sorter) {
 	n := len(q.keys)
 	q.pos = 0
-	if n < 2 {
-		return
-	}
 	if n < 64 {
 		insertion(q.keys, q.ids)
 		return
 	}
-	q.keys2, q.ids2 = grown(q.keys2, n), grown(q.ids2, n)
-	// The bits that differ lie below the highest bit of the spread.
+	scratch.keys, scratch.ids = grown(scratch.keys, n), grown(scratch.ids, n)
 	low, high := uint64(math.MaxUint64), uint64(0)
 	for _, k := range q.keys {
 		b := math.Float64bits(k)
-		low, high = min(low, b), max(high, b)
+		if b < low {
+			low = b
+		}
+		if b > high {
+			high = b
+		}
 	}
-	spread := high - low
-	shift := uint(0)
-	for shift < 64-3*radixBits && spread>>shift >= 1<<(3*radixBits) {
-		shift++
+	passes := 2
+	if n > longList {
+		passes = 3
 	}
-	var counts [3][radixSize]uint32
+	shift := uint(max(0, bits.Len64(high-low)-passes*radixBits))
+	counts := &scratch.counts
+	clear(counts[:passes])
 	for _, k := range q.keys {
 		b := (math.Float64bits(k) - low) >> shift
-		counts[0][b&(radixSize-1)]++
-		counts[1][b>>radixBits&(radixSize-1)]++
-		counts[2][b>>(2*radixBits)&(radixSize-1)]++
+		for pass := range passes {
+			counts[pass][b>>(pass*radixBits)&(radixSize-1)]++
+		}
 	}
-	src, dst, srcID, dstID := q.keys, q.keys2[:n], q.ids, q.ids2[:n]
-	for pass := range 3 {
+	src, dst, srcID, dstID := q.keys, scratch.keys[:n], q.ids, scratch.ids[:n]
+	for pass := range passes {
 		c := &counts[pass]
 		sum, one := uint32(0), false
 		for i := range c {
@@ -148,7 +160,7 @@ func (q *queue) sort() {
 		}
 		src, dst, srcID, dstID = dst, src, dstID, srcID
 	}
-	q.keys, q.keys2, q.ids, q.ids2 = src, dst, srcID, dstID
+	q.keys, scratch.keys, q.ids, scratch.ids = src, dst, srcID, dstID
 	insertion(q.keys, q.ids)
 }
 

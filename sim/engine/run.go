@@ -30,6 +30,7 @@ type Workspace struct {
 	stage         []uint8   // of every object: 0 unborn, 1 first, 2 second, 3.. links; waiting is set on top
 	clocks        []queue
 	schedule      queue
+	sorter        sorter
 	caps          []float64      // clock readings at which a quiet leg ends
 	quiet         bool           // only the objects in active are on the clocks
 	compact       bool           // susceptibilities are not held

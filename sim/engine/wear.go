@@ -134,7 +134,7 @@ func (w *Workspace) wearDown() error {
 func (w *Workspace) nextWearStep() float64 {
 	x, at := &w.wear, never
 	for i := range uint32(w.c.n) {
-		if w.wears(i) && x.rate[i] > 0 {
+		if w.wears(i) && x.known[i] == w.stage[i] && x.rate[i] > 0 {
 			at = min(at, x.since[i]+wearToStep*w.massOf(i)/x.rate[i])
 		}
 	}
