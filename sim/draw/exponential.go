@@ -36,7 +36,9 @@ func (s Stream) Exp(object uint64, generation, number uint32) float64 {
 func (s Stream) Exps(dst []float64, first uint64, generation, number uint32) {
 	c := s.column(generation, number)
 	name, turned := c+first*phi, bits.RotateLeft64(c, halfRotation)
-	for i := range dst {
+	done := exponentialBlocks(dst, name, turned)
+	name += uint64(done) * phi
+	for i := done; i < len(dst); i++ {
 		z := mix(name) ^ turned
 		name += phi
 		b := mix(z)

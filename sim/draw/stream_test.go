@@ -50,6 +50,31 @@ func TestColumnsEqualScalars(t *testing.T) {
 	}
 }
 
+func TestColumnsOfAnyLength(t *testing.T) {
+	s := New(1, 2, "lengths")
+	for n := range 1100 {
+		if n > 40 && n < 500 {
+			continue
+		}
+		dst := make([]float64, n+1)
+		for _, fill := range []struct {
+			column func(dst []float64, first uint64, generation, number uint32)
+			scalar func(object uint64, generation, number uint32) float64
+		}{{s.Uniforms, s.Uniform}, {s.Exps, s.Exp}} {
+			dst[n] = 42
+			fill.column(dst[:n], 3, 0, 1)
+			if dst[n] != 42 {
+				t.Errorf("a column of %d wrote past its end", n)
+			}
+			for i, got := range dst[:n] {
+				if want := fill.scalar(3+uint64(i), 0, 1); got != want {
+					t.Errorf("column of %d, element %d: %x, scalar %x", n, i, got, want)
+				}
+			}
+		}
+	}
+}
+
 func TestEndsAreNeverReached(t *testing.T) {
 	low, high := uniform(0), uniform(1<<64-1)
 	if low <= 0 || low > 0x1p-54 {

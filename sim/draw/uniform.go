@@ -18,7 +18,9 @@ func (s Stream) Uniform(object uint64, generation, number uint32) float64 {
 func (s Stream) Uniforms(dst []float64, first uint64, generation, number uint32) {
 	c := s.column(generation, number)
 	name, turned := c+first*phi, bits.RotateLeft64(c, halfRotation)
-	for i := range dst {
+	done := uniformBlocks(dst, name, turned)
+	name += uint64(done) * phi
+	for i := done; i < len(dst); i++ {
 		dst[i] = uniform(mix(mix(name) ^ turned))
 		name += phi
 	}
