@@ -34,76 +34,93 @@ func (w *Workspace) countdown(ctx context.Context) error {
 	return nil
 }
 
-// head is the first entry of a clock that still counts, and the clock's
-// reading and rate.
+// head is the first entry of a clock that still counts: how far the reading
+// has to go to take it, and the clock's reading and rate.
 type head struct {
-	key, reading, rate float64
-	id                 uint32
-	slope, rate0       float64
-	keys               []float64
-	ids                []uint32
-	pos                int // of the head
+	left, rate   float64
+	reading      float64
+	slope, rate0 float64
+	id           uint32
+	place, cause uint8 // what a plain hit does
+	special      bool  // a hit may do something else
+	keys         []float64
+	ids          []uint32
+	pos          int // of the head
 }
 
 // advance drops entries of objects no longer bound.
 func (h *head) advance(place []uint8) {
 	for ; h.pos < len(h.ids); h.pos++ {
 		if id := h.ids[h.pos]; place[id] == law.Bound {
-			h.key, h.id = h.keys[h.pos], id
+			h.left, h.id = h.keys[h.pos]-h.reading, id
 			return
 		}
 	}
-	h.key, h.id = never, maxObjects
+	h.left, h.id = never, maxObjects
+}
+
+// heads takes the clocks as they stand.
+func (w *Workspace) heads(heads *[maxClocks]head) []head {
+	m, e := w.m, w.env
+	for k := range m.Clocks {
+		q, clock, h := &w.clocks[k], &m.Clocks[k], &heads[k]
+		*h = head{reading: w.reading[k], rate: e.Rates[k], rate0: e.rate0[k], keys: q.keys, ids: q.ids, pos: q.pos,
+			place: placeGone, cause: clock.cause, special: clock.Fate == law.FateCentral || w.c.turned != nil}
+		if clock.Fate == law.FateAdrift {
+			h.place = law.Adrift
+		}
+		if len(m.declared) > 0 {
+			h.slope = e.slope[k][0]
+		}
+		h.advance(w.c.place)
+	}
+	return heads[:len(m.Clocks)]
 }
 
 // countWindow takes hits until the rates must be asked again (more), or until
 // no hit comes before a limit.
 func (w *Workspace) countWindow() (more bool, err error) {
-	m, c, e := w.m, &w.c, w.env
-	n := len(m.Clocks)
-	var heads [maxClocks]head
+	c, e := &w.c, w.env
+	var memory [maxClocks]head
+	heads := w.heads(&memory)
 	place, leave, left := c.place[:c.n], c.leave[:c.n], c.left[:c.n]
-	declared := len(m.declared) > 0
-	for k := range n {
-		q := &w.clocks[k]
-		h := &heads[k]
-		*h = head{reading: w.reading[k], rate: e.Rates[k], rate0: e.rate0[k], keys: q.keys, ids: q.ids, pos: q.pos}
-		if declared {
-			h.slope = e.slope[k][0]
-		}
-		h.advance(place)
-	}
-	base, weight, bound := w.base, m.Weight, w.bound
+	declared := len(w.m.declared) > 0
+	date, weight, bound := w.base, w.m.Weight, w.bound
 	limit, _ := w.limits(never)
 	number0 := weight * float64(bound)
 	if declared {
 		number0 = e.base[0]
 	}
 	for bound > 0 {
-		first, date := -1, never
-		for k := range heads[:n] {
-			h := &heads[k]
-			if d := base + (h.key-h.reading)/h.rate; d < date {
-				first, date = k, d
+		first, step := -1, never
+		for k := range heads {
+			if d := heads[k].left / heads[k].rate; d < step {
+				first, step = k, d
 			}
 		}
-		if first < 0 || date > limit {
+		if first < 0 || date+step > limit {
 			break
 		}
-		step := date - base
-		for k := range heads[:n] {
-			heads[k].reading += heads[k].rate * step
+		date += step
+		for k := range heads {
+			h := &heads[k]
+			by := h.rate * step
+			h.left -= by
+			h.reading += by
 		}
-		base = date
-		i := heads[first].id
+		hit := &heads[first]
+		i := hit.id
 		bound--
-		w.hitBound(first, i, date)
 		leave[i] = date
-		left[i] = w.lastCause
-		for k := range heads[:n] {
-			if heads[k].id == i {
-				heads[k].pos++
-				heads[k].advance(place)
+		if hit.special {
+			place[i], left[i] = w.hitBound(first, i, date)
+		} else {
+			place[i], left[i] = hit.place, hit.cause
+		}
+		for k := range heads {
+			if h := &heads[k]; h.id == i {
+				h.pos++
+				h.advance(place)
 			}
 		}
 		number := weight * float64(bound)
@@ -113,40 +130,39 @@ func (w *Workspace) countWindow() (more bool, err error) {
 		}
 		if declared {
 			x := lnNear((number - number0) / number0)
-			for k := range heads[:n] {
+			for k := range heads {
 				heads[k].rate = heads[k].rate0 * expNear(heads[k].slope*x)
 			}
 		}
 	}
 	w.events += int64(w.bound - bound)
-	w.bound, w.t, w.base = bound, max(w.t, base), base
+	w.bound, w.t, w.base = bound, max(w.t, date), date
 	e.value[slotNumber], e.lost[slotNumber] = weight*float64(bound), 0
-	for k := range n {
+	for k := range heads {
 		w.reading[k], e.Rates[k], w.clocks[k].pos = heads[k].reading, heads[k].rate, heads[k].pos
 	}
 	return more, nil
 }
 
-// hitBound sends an object where a clock's hit takes it, and leaves the cause
-// in lastCause.
-func (w *Workspace) hitBound(k int, i uint32, date float64) {
-	c, clock := &w.c, &w.m.Clocks[k]
+// hitBound tells where a hit takes an object, and why, and feeds the hole at
+// the centre.
+func (w *Workspace) hitBound(k int, i uint32, date float64) (place, cause uint8) {
+	clock := &w.m.Clocks[k]
 	fate := clock.Fate
-	w.lastCause = clock.cause
-	if c.turned != nil && c.turned[i]&(2<<(2*k)) != 0 {
-		fate, w.lastCause = law.FateCentral, w.diverted(k)
+	cause = clock.cause
+	if w.c.turned != nil && w.c.turned[i]&(2<<(2*k)) != 0 {
+		fate, cause = law.FateCentral, w.diverted(k)
 	}
 	switch fate {
 	case law.FateAdrift:
-		c.place[i] = law.Adrift
+		return law.Adrift, cause
 	case law.FateCentral:
-		c.place[i] = law.Central
-		mass := w.m.Weight * c.mass1[i]
+		mass := w.m.Weight * w.c.mass1[i]
 		w.env.add(slotCentral, mass)
 		w.central.swallow(w, date, mass)
-	default:
-		c.place[i] = placeGone
+		return law.Central, cause
 	}
+	return placeGone, cause
 }
 
 // countsDown tells whether countdown may take over: only hits can happen, in

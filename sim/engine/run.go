@@ -47,7 +47,6 @@ type Workspace struct {
 	rho           [maxClocks][maxClocks]float64
 	broken        [maxClocks][maxClocks]bool
 	checked       int
-	lastCause     uint8
 	endAt         float64 // date before which no prospect ends a stage
 	endsScheduled bool
 	adriftPending bool
