@@ -4,6 +4,7 @@ import (
 	"context"
 	"fmt"
 	"math"
+	"strings"
 	"testing"
 
 	"pgregory.net/rapid"
@@ -146,6 +147,9 @@ func set(t failer, laws ...*enginetest.Law) *law.Set {
 func TestRandomScenarios(t *testing.T) {
 	rapid.Check(t, func(t *rapid.T) {
 		s := scenario(t)
+		if _, err := engine.Compile(s); err != nil && strings.Contains(err.Error(), "at most 16") {
+			t.Skip(err) // more declared values than an engine holds
+		}
 		compare(t, s, rapid.Uint64Range(0, 3).Draw(t, "realisation"))
 	})
 }
@@ -171,14 +175,14 @@ func scenario(t *rapid.T) engine.Setup {
 	}
 	laws = append(laws, dynamics(t)...)
 	laws = append(laws, endings(t)...)
-	n := rapid.OneOf(rapid.IntRange(0, 3), rapid.IntRange(4, 40), rapid.IntRange(90, 110), rapid.IntRange(111, 500)).Draw(t, "objects")
+	n := rapid.OneOf(rapid.IntRange(0, 3), rapid.IntRange(4, 30), rapid.IntRange(4, 30), rapid.IntRange(96, 106), rapid.IntRange(107, 250)).Draw(t, "objects")
 	s := engine.Setup{Set: set(t, laws...), Objects: n, Real: float64(n), Radius: 1, Until: math.Inf(1),
 		Seed: rapid.Uint64().Draw(t, "seed"), Populations: populations()}
 	if chance(0.3, "sample") {
 		s.Real = float64(n) * between(1.5, 1e6, "weight")
 	}
 	if chance(0.5, "hole") {
-		s.CentralMass = between(0, 100, "central mass")
+		s.CentralMass = between(0.1, 100, "central mass")
 	}
 	if chance(0.2, "until") {
 		s.Until = between(1, 8, "until date")

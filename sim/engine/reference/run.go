@@ -25,6 +25,7 @@ type run struct {
 	encounter, frame, warmth      *law.Use
 	matters                       bool // a change of kind or mass may move a declared value
 
+	slots   map[string]int // by name of galaxy value
 	objects []*object
 	hole    hole
 	fired   map[string]int64
@@ -95,7 +96,7 @@ func newRun(setup engine.Setup, realisation uint64) (*run, error) {
 		return nil, err
 	}
 	g := &run{setup: setup, model: model, env: model.NewEnvironment(), realisation: realisation, weight: 1,
-		fired: map[string]int64{}, stoppedAt: math.NaN(), horizon: setup.Until, adriftAt: never, windowAt: never}
+		fired: map[string]int64{}, slots: map[string]int{}, stoppedAt: math.NaN(), horizon: setup.Until, adriftAt: never, windowAt: never}
 	if setup.Objects > 0 {
 		g.weight = setup.Real / float64(setup.Objects)
 	}
@@ -191,7 +192,15 @@ func (g *run) exponential(k int, o *object) float64 {
 }
 
 func (g *run) add(name string, x float64) {
-	if slot, ok := g.model.Slot(strings.ReplaceAll(name, "-", "_")); ok {
+	slot, known := g.slots[name]
+	if !known {
+		var ok bool
+		if slot, ok = g.model.Slot(strings.ReplaceAll(name, "-", "_")); !ok {
+			slot = -1
+		}
+		g.slots[name] = slot
+	}
+	if slot >= 0 {
 		g.env.Add(slot, x)
 	}
 }
