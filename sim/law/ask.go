@@ -2,6 +2,8 @@ package law
 
 import (
 	"fmt"
+
+	"wane/sim/num"
 )
 
 // Fault is one thing wrong with an answer. Row is -1 when it concerns the
@@ -131,9 +133,10 @@ func (u *Use) checkInput(question string, in Batch) *Fault {
 	return nil
 }
 
-// firstBad returns the first row that breaks the rule, or -1.
+// firstBad returns the first row that breaks the rule, or -1. Answers are
+// checked on every run, nearly always to find nothing.
 func firstBad(r rule, values []float64) int {
-	if r.allHold(values) {
+	if low, high := r.bounds(); r != yesNo && num.AllWithin(values, low, high) {
 		return -1
 	}
 	for i, v := range values {

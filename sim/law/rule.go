@@ -27,71 +27,28 @@ const (
 	yesNo         // 0 or 1
 )
 
-func (r rule) holds(v float64) bool {
+// bounds returns the least and the greatest number of a rule.
+func (r rule) bounds() (low, high float64) {
 	switch r {
 	case wait:
-		return v == v && v > math.Inf(-1)
+		return -math.MaxFloat64, math.Inf(1)
 	case logZero:
-		return v < math.Inf(1)
+		return math.Inf(-1), math.MaxFloat64
 	case hazard:
-		return v == v
+		return math.Inf(-1), math.Inf(1)
 	case positive:
-		return v > 0 && v < math.Inf(1)
+		return math.SmallestNonzeroFloat64, math.MaxFloat64
 	case atLeast0:
-		return v >= 0 && v < math.Inf(1)
-	case yesNo:
-		return v == 0 || v == 1
-	case chance, share:
-		return v >= 0 && v <= 1
+		return 0, math.MaxFloat64
+	case chance, share, yesNo:
+		return 0, 1
 	}
-	return v-v == 0
+	return -math.MaxFloat64, math.MaxFloat64
 }
 
-// allHold is holds for a whole column. Answers are checked on every run, so it
-// has a loop of its own for each rule.
-func (r rule) allHold(values []float64) bool {
-	good := 0
-	switch r {
-	case wait:
-		for _, v := range values {
-			if v >= -math.MaxFloat64 {
-				good++
-			}
-		}
-	case logZero:
-		for _, v := range values {
-			if v <= math.MaxFloat64 {
-				good++
-			}
-		}
-	case positive:
-		for _, v := range values {
-			if v > 0 && v <= math.MaxFloat64 {
-				good++
-			}
-		}
-	case atLeast0:
-		for _, v := range values {
-			if v >= 0 && v <= math.MaxFloat64 {
-				good++
-			}
-		}
-	case chance, share:
-		for _, v := range values {
-			if v >= 0 && v <= 1 {
-				good++
-			}
-		}
-	case finite:
-		for _, v := range values {
-			if v-v == 0 {
-				good++
-			}
-		}
-	default:
-		return false
-	}
-	return good == len(values)
+func (r rule) holds(v float64) bool {
+	low, high := r.bounds()
+	return v >= low && v <= high && (r != yesNo || v == low || v == high)
 }
 
 func (r rule) String() string {

@@ -39,3 +39,12 @@ func BenchmarkExpInto(b *testing.B)   { benchmarkInto(b, num.ExpInto, -50, 50) }
 func BenchmarkExp10Into(b *testing.B) { benchmarkInto(b, num.Exp10Into, -20, 20) }
 func BenchmarkLogInto(b *testing.B)   { benchmarkInto(b, num.LogInto, 1e-3, 1e3) }
 func BenchmarkLog10Into(b *testing.B) { benchmarkInto(b, num.Log10Into, 1e-3, 1e3) }
+
+func BenchmarkAllWithin(b *testing.B) {
+	xs := make([]float64, 1024)
+	for i := 0; i < b.N; i += len(xs) {
+		if !num.AllWithin(xs[:min(len(xs), b.N-i)], 0, 1) {
+			b.Fatal("0 is not within 0 .. 1")
+		}
+	}
+}

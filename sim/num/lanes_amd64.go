@@ -63,6 +63,11 @@ func expLanes(dst, src []float64, table *[128]expEntry, c *expNumbers) (done int
 //go:noescape
 func logLanes(dst, src []float64, table *[128]logEntry, c *logNumbers) (done int)
 
+// withinLanes returns how many elements, in whole blocks, are all from low to high.
+//
+//go:noescape
+func withinLanes(values []float64, low, high float64) (done int)
+
 // haveLanes reports whether this processor has the instructions of the kernels.
 func haveLanes() bool { return cpu.X86.HasAVX512F && cpu.X86.HasAVX512DQ }
 
@@ -99,4 +104,12 @@ func log10Column(dst, src []float64) (done, next int) {
 	}
 	done = logLanes(dst, src, &log10Table, &log10Base)
 	return done, min(done+lanes, len(src))
+}
+
+// withinBlocks returns how many elements at the front are known to be within.
+func withinBlocks(values []float64, low, high float64) (done int) {
+	if !haveLanes() {
+		return 0
+	}
+	return withinLanes(values, low, high)
 }
