@@ -182,8 +182,11 @@ func (w *Workspace) linear(l float64) float64 {
 func (w *Workspace) loop(ctx context.Context, legEnd float64) error {
 	for {
 		s, ok := w.schedule.head()
-		if w.env.Stop && w.bound > 0 && !(ok && s.key <= w.t) { // what is due goes first
-			return w.stop()
+		if w.env.Stop && w.bound > 0 {
+			w.t = max(w.t, w.central.since*num.Exp10(-w.env.unit)) // no earlier than the galaxy
+			if !(ok && s.key <= w.t) {                             // what is due goes first
+				return w.stop()
+			}
 		}
 		if w.bound == 0 {
 			return w.close()
@@ -318,7 +321,6 @@ func (w *Workspace) reached(what int) (done bool, err error) {
 
 // stop ends the dynamics because the ejection law says so.
 func (w *Workspace) stop() error {
-	w.t = max(w.t, w.central.since*num.Exp10(-w.env.unit)) // no earlier than the galaxy
 	w.stoppedAt = w.logNow()
 	return w.castOff(w.m.stopFate, w.m.stopCause)
 }

@@ -27,8 +27,10 @@ func (g *run) dynamics() error {
 	for {
 		g.coarsen()
 		due := g.nextDue()
-		if g.env.Stop && g.bound > 0 && !(due <= g.t) {
+		if g.env.Stop && g.bound > 0 {
 			g.t = max(g.t, g.linear(g.first))
+		}
+		if g.env.Stop && g.bound > 0 && !(due <= g.t) {
 			g.stoppedAt = g.log(g.t)
 			return g.castOff(g.frame.Card.StopFate, Cause{g.frame.Card.Process, g.frame.Card.StopOutcome})
 		}
