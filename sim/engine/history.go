@@ -23,13 +23,6 @@ func (w *Workspace) logDate(coded float64) float64 {
 	return num.Log10(coded)
 }
 
-// segment is the present life of an object: what its columns hold.
-type segment struct {
-	w     *Workspace
-	i     uint32
-	dates [3]float64 // log10: birth, death, leave
-}
-
 // each hands the changes of object i's present life to f in order of date, up
 // to limit (log10, inclusive). dates are the log10 of its birth, death and
 // leaving. It returns the state it is in then.
