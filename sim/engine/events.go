@@ -62,7 +62,7 @@ func (w *Workspace) born(i uint32, t float64) {
 	if c.died[i] == 0 {
 		w.stage[i] = 2
 		w.scheduleEnd(i)
-		w.wear.enter(w, i, t)
+		w.wear.enter(w, i)
 	}
 	for k := range w.m.Clocks {
 		e := c.reading[k][i]
@@ -97,7 +97,7 @@ func (w *Workspace) enterStage(i uint32, stage int, t float64) error {
 			w.respend(k, i, t)
 		}
 		w.scheduleEnd(i)
-		w.wear.enter(w, i, t)
+		w.wear.enter(w, i)
 	}
 	if matters {
 		return w.changed(t)

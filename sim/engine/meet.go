@@ -310,7 +310,7 @@ func (w *Workspace) rejoin(ids []uint32, t float64) error {
 		} else {
 			w.scheduleEnd(i)
 		}
-		w.wear.enter(w, i, t)
+		w.wear.enter(w, i)
 		if !w.endsScheduled {
 			w.endAt = min(w.endAt, w.linear(c.end[i]))
 		}

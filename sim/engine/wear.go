@@ -44,11 +44,13 @@ func (x *wearing) scale(f float64) {
 	}
 }
 
-// enter takes in that object i has entered a stage at date t.
-func (x *wearing) enter(w *Workspace, i uint32, t float64) {
+// enter takes in that object i has entered a stage.
+func (x *wearing) enter(w *Workspace, i uint32) {
 	if len(x.known) > 0 {
 		x.known[i] = 0
-		x.at = min(x.at, t+w.linear(w.c.wearStep))
+		if w.stageOf(i) >= 2 {
+			x.at = min(x.at, w.entered(i)+w.linear(w.c.wearStep))
+		}
 	}
 }
 
