@@ -42,6 +42,7 @@ func (w *Workspace) conclude() (*Outcome, error) {
 	for i, marks := range w.marks(o.End) {
 		o.Populations = append(o.Populations, w.fadeOf(i, marks))
 	}
+	w.realLasts(o)
 	o.Events = w.events
 	return o, nil
 }

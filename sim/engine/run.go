@@ -58,6 +58,7 @@ type Workspace struct {
 	meets         meetings
 	books         books
 	counts        counts
+	reach         *reach // how far the ends of the real number reach; nil: not asked yet
 }
 
 const waiting = 0x80
