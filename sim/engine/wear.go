@@ -127,6 +127,9 @@ func (w *Workspace) wearDown() error {
 	if err := w.wearStep(); err != nil {
 		return err
 	}
+	if err := w.learnRates(); err != nil { // of what a refresh in that step brought in
+		return err
+	}
 	x.at = max(w.nextWearStep(), math.Nextafter(t, never))
 	return nil
 }
