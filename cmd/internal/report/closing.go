@@ -86,7 +86,8 @@ func evaporation(starts float64) string {
 }
 
 // untold names the populations of a sample for which the last of the real
-// number cannot be told.
+// number cannot be told. Where there is but one, as the central hole, it is its
+// own last.
 func untold(s *ensemble.Summary) string {
 	if s.Whole {
 		return ""
@@ -94,7 +95,7 @@ func untold(s *ensemble.Summary) string {
 	var names []string
 	told := false
 	for _, population := range s.Populations {
-		if !everMember(population) || math.IsNaN(population.Last.Date) {
+		if !everMember(population) || math.IsNaN(population.Last.Date) || population.PeakCount <= 1 {
 			continue
 		}
 		if math.IsNaN(population.RealLast) {
