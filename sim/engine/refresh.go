@@ -26,7 +26,7 @@ func (e *Environment) refresh(date float64, readings []float64) (float64, error)
 	if err := e.askRates(); err != nil {
 		return 0, err
 	}
-	window := e.window(date)
+	window := max(e.window(date), leastWindow*date)
 	if math.IsInf(window, 1) || e.value[slotDate] > followed {
 		window = math.Inf(1)
 		return window, nil
@@ -37,6 +37,9 @@ func (e *Environment) refresh(date float64, readings []float64) (float64, error)
 	e.value[slotDate] = num.Log10(date+0.5*window) + e.unit
 	return window, e.askRates()
 }
+
+// leastWindow keeps a wild rate from windows that no date can tell apart.
+const leastWindow = 1e-12
 
 // followed is the log10 date up to which values that move with time alone are
 // followed. Rates stand still from there on: a clock that slows down for ever
