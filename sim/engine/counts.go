@@ -23,11 +23,11 @@ type counts struct {
 	mask    [256]uint64 // populations without a condition on warmth, by state
 	plain   bool        // dates of change are in years
 	inLog   uint64      // populations counted in log10 years
+	aliased uint64      // populations whose exits are a flow's
 	direct  uint64      // populations whose entries and exits are given, in log10 years
 	wanted  uint64      // populations whose entries are being gathered
 	entries [][]float64
 	exits   [][]float64
-	own     [][]float64 // the populations' own memory for exits
 	spare   [][]float64 // memory lent by the dynamics, which has done with it
 	entered []int
 	lastIn  []float64 // of entries by change
@@ -41,7 +41,8 @@ type counts struct {
 
 func (n *counts) reset(m *Model, plain bool, spare [][]float64) {
 	p := len(m.populations)
-	n.own, n.spare = grown(n.own, p), append(n.spare[:0], spare...)
+	n.spare = append(n.spare[:0], spare...)
+	defer func() { n.aliased = 0 }()
 	n.entries, n.exits, n.entered = grown(n.entries, p), grown(n.exits, p), grown(n.entered, p)
 	n.lastIn, n.lastOut = grown(n.lastIn, p), grown(n.lastOut, p)
 	n.left, n.lastWhy = grown(n.left, p), grown(n.lastWhy, p)
@@ -49,7 +50,10 @@ func (n *counts) reset(m *Model, plain bool, spare [][]float64) {
 	clear(n.left)
 	for i := range m.populations {
 		pop := &m.populations[i]
-		n.entries[i], n.exits[i] = n.entries[i][:0], n.own[i][:0]
+		n.entries[i], n.exits[i] = n.entries[i][:0], n.exits[i][:0]
+		if n.aliased>>i&1 != 0 {
+			n.exits[i] = nil
+		}
 		n.entered[i], n.lastIn[i], n.lastOut[i] = 0, -never, -never
 		if pop.Warmth != nil {
 			n.direct |= 1 << i
@@ -93,33 +97,11 @@ func (n *counts) ends(date float64, from state, cause uint8) {
 }
 
 func (n *counts) exit(p int, date float64, cause uint8) {
-	n.keepExit(p, date)
+	n.exits[p] = append(n.exits[p], date)
 	n.left[p][cause]++
 	if date >= n.lastOut[p] {
 		n.lastOut[p], n.lastWhy[p] = date, cause
 	}
-}
-
-// keepExit keeps the date of one exit.
-func (n *counts) keepExit(p int, date float64) {
-	x := n.exits[p]
-	if len(x) == cap(x) {
-		x = n.moreRoom(p)
-	}
-	n.exits[p] = append(x, date)
-}
-
-// moreRoom moves a population's exits to where there is room for more: memory
-// that is lent if it is twice as large, else its own.
-func (n *counts) moreRoom(p int) []float64 {
-	x := n.exits[p]
-	if last := len(n.spare) - 1; last >= 0 && len(x) >= 4096 && cap(n.spare[last]) >= 2*len(x) {
-		to := append(n.spare[last][:0], x...)
-		n.spare = n.spare[:last]
-		return to
-	}
-	n.own[p] = append(make([]float64, 0, max(64, len(x)+len(x)/2)), x...)
-	return n.own[p]
 }
 
 // enter gathers an entry for the populations that want it.

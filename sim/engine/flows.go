@@ -13,9 +13,10 @@ import (
 type flow struct {
 	count         int64
 	last          float64
-	exits, enters uint64 // populations
-	logs          uint64 // of the exits: those counted in log10 years while the date is in years
-	known         bool
+	exits, enters uint64    // populations
+	logs          uint64    // of the exits: those counted in log10 years while the date is in years
+	known, lent   bool      // lent: its dates are the population's
+	dates, own    []float64 // own: memory of a small list, kept for the next run
 }
 
 // flows is the table of flows of one realisation. A birth is the flow of its
@@ -28,7 +29,11 @@ type flows struct {
 func (f *flows) reset(m *Model) {
 	f.causes = len(m.Causes)
 	f.table = grown(f.table, len(m.Set.Kinds)*statesAKind*f.causes)
-	clear(f.table)
+	for i := range f.table {
+		if x := &f.table[i]; x.known {
+			*x = flow{dates: x.own[:0], own: x.own[:0]}
+		}
+	}
 }
 
 func (f *flows) of(from state, cause uint8) *flow { return &f.table[int(from)*f.causes+int(cause)] }
@@ -49,18 +54,35 @@ func (n *counts) move(x *flow, date float64) {
 	if date > x.last {
 		x.last = date
 	}
-	for e := x.exits; e != 0; e &= e - 1 {
-		p := bits.TrailingZeros64(e)
-		v := date
-		if x.logs>>p&1 != 0 {
-			v = num.Log10(date)
-		}
-		n.keepExit(p, v)
+	if x.exits == 0 {
+		return
 	}
+	if len(x.dates) == cap(x.dates) {
+		n.moreRoom(x)
+	}
+	x.dates = append(x.dates, date)
 }
 
-// settleFlows enters the flows into the populations' counts.
+// moreRoom moves a flow's dates to where there is room for more: memory that is
+// lent if it is twice as large, else its own.
+func (n *counts) moreRoom(x *flow) {
+	k := len(x.dates)
+	if last := len(n.spare) - 1; last >= 0 && k >= 4096 && cap(n.spare[last]) >= 2*k {
+		x.dates = append(n.spare[last][:0], x.dates...)
+		n.spare = n.spare[:last]
+		return
+	}
+	x.own = append(make([]float64, 0, max(64, k+k/2)), x.dates...)
+	x.dates = x.own
+}
+
+// settleFlows enters the flows into the populations' counts. Of the flows that
+// leave a population, the largest that leaves no other lends its memory; the
+// dates of the rest are copied to it.
 func (n *counts) settleFlows(b *books) {
+	for p := range n.exits {
+		n.lendLargest(p)
+	}
 	for i := range n.flows.table {
 		x := &n.flows.table[i]
 		if x.count == 0 {
@@ -72,20 +94,48 @@ func (n *counts) settleFlows(b *books) {
 		}
 		for e := x.exits; e != 0; e &= e - 1 {
 			p := bits.TrailingZeros64(e)
-			last := x.last
-			if x.logs>>p&1 != 0 {
-				last = num.Log10(last)
-			}
 			n.left[p][cause] += x.count
-			if last >= n.lastOut[p] {
-				n.lastOut[p], n.lastWhy[p] = last, cause
-			}
+			n.takeExits(p, x, cause)
 		}
 		for e := x.enters; e != 0; e &= e - 1 {
 			p := bits.TrailingZeros64(e)
 			n.entered[p] += int(x.count)
 			n.lastIn[p] = max(n.lastIn[p], x.last)
 		}
+	}
+}
+
+// lendLargest hands population p the dates of its largest flow.
+func (n *counts) lendLargest(p int) {
+	var largest *flow
+	for i := range n.flows.table {
+		x := &n.flows.table[i]
+		if x.exits == 1<<p && x.logs == 0 && len(x.dates) > 0 && (largest == nil || x.count > largest.count) {
+			largest = x
+		}
+	}
+	if largest != nil {
+		n.exits[p], n.aliased = largest.dates, n.aliased|1<<p
+		largest.lent = true
+	}
+}
+
+// takeExits enters a flow's dates into a population it leaves.
+func (n *counts) takeExits(p int, x *flow, cause uint8) {
+	last, logs := x.last, x.logs>>p&1 != 0
+	if logs {
+		last = num.Log10(last)
+	}
+	if last >= n.lastOut[p] {
+		n.lastOut[p], n.lastWhy[p] = last, cause
+	}
+	if x.lent {
+		return
+	}
+	at := len(n.exits[p])
+	n.exits[p] = append(n.exits[p], x.dates...)
+	if logs {
+		num.Log10Into(n.exits[p][at:], x.dates)
 	}
 }
 
