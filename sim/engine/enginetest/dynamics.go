@@ -49,7 +49,7 @@ func (r Rates) at(in law.Batch, clock string, i int) float64 {
 	x := r.Log10
 	power := func(p float64, name string, of, plus float64) {
 		if p != 0 && of > 0 {
-			x += p * num.Log10(max(plus+in.Values(name)[i]/of, 1e-12))
+			x += p * num.Log10(max(plus+in.Values(name)[i]/of, 1e-2))
 		}
 	}
 	power(r.Number, "number", n0, 0)
