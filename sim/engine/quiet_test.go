@@ -68,12 +68,12 @@ func slow(t *rapid.T) engine.Setup {
 			Log10: between(-14, -8, "decay rate"), Power: 1, Closed: true,
 			New: []law.Kind{{Name: "relic", Doc: "what is left", Composition: law.Iron}},
 			Thresholds: []law.Threshold{
-				{Kind: "white-dwarf", Mass: 0.02, Becomes: law.Gone, Outcome: "dissolved"},
-				{Kind: "neutron-star", Mass: 0.02, Becomes: "relic", Outcome: "expanded"},
-				{Kind: "relic", Mass: 0.01, Becomes: law.Gone, Outcome: "dissolved"},
+				{Kind: "white-dwarf", Mass: 0.1, Becomes: law.Gone, Outcome: "dissolved"},
+				{Kind: "neutron-star", Mass: 0.2, Becomes: "relic", Outcome: "expanded"},
+				{Kind: "relic", Mass: 0.1, Becomes: law.Gone, Outcome: "dissolved"},
 			}}.Law())
 	}
-	n := rapid.IntRange(200, 1500).Draw(t, "objects")
+	n := rapid.IntRange(120, 500).Draw(t, "objects")
 	s := engine.Setup{Set: set(t, laws...), Objects: n, Real: float64(n), Radius: 1, Until: math.Inf(1),
 		Seed: rapid.Uint64().Draw(t, "seed"), Populations: populations()[:9]}
 	if chance(0.3, "sample") {

@@ -175,7 +175,7 @@ func scenario(t *rapid.T) engine.Setup {
 	}
 	laws = append(laws, dynamics(t)...)
 	laws = append(laws, endings(t)...)
-	n := rapid.OneOf(rapid.IntRange(0, 3), rapid.IntRange(4, 30), rapid.IntRange(4, 30), rapid.IntRange(96, 106), rapid.IntRange(107, 250)).Draw(t, "objects")
+	n := rapid.OneOf(rapid.IntRange(0, 3), rapid.IntRange(4, 30), rapid.IntRange(4, 30), rapid.IntRange(96, 104), rapid.IntRange(105, 160)).Draw(t, "objects")
 	s := engine.Setup{Set: set(t, laws...), Objects: n, Real: float64(n), Radius: 1, Until: math.Inf(1),
 		Seed: rapid.Uint64().Draw(t, "seed"), Populations: populations()}
 	if chance(0.3, "sample") {

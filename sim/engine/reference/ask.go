@@ -30,7 +30,12 @@ type row struct {
 }
 
 func (g *run) stream(process string) draw.Stream {
-	return draw.New(g.setup.Seed, g.realisation, process)
+	s, ok := g.streams[process]
+	if !ok {
+		s = draw.New(g.setup.Seed, g.realisation, process)
+		g.streams[process] = s
+	}
+	return s
 }
 
 // ask asks one question about one object. number is the draw of a u column.

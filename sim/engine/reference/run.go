@@ -5,6 +5,7 @@ import (
 	"math"
 	"strings"
 
+	"wane/sim/draw"
 	"wane/sim/engine"
 	"wane/sim/law"
 	"wane/sim/num"
@@ -26,6 +27,7 @@ type run struct {
 	matters                       bool // a change of kind or mass may move a declared value
 
 	slots   map[string]int // by name of galaxy value
+	streams map[string]draw.Stream
 	objects []*object
 	hole    hole
 	fired   map[string]int64
@@ -96,7 +98,7 @@ func newRun(setup engine.Setup, realisation uint64) (*run, error) {
 		return nil, err
 	}
 	g := &run{setup: setup, model: model, env: model.NewEnvironment(), realisation: realisation, weight: 1,
-		fired: map[string]int64{}, slots: map[string]int{}, stoppedAt: math.NaN(), horizon: setup.Until, adriftAt: never, windowAt: never}
+		fired: map[string]int64{}, slots: map[string]int{}, streams: map[string]draw.Stream{}, stoppedAt: math.NaN(), horizon: setup.Until, adriftAt: never, windowAt: never}
 	if setup.Objects > 0 {
 		g.weight = setup.Real / float64(setup.Objects)
 	}

@@ -75,7 +75,7 @@ func (g *run) member(x *galaxy.Warmth, o *object, s span, leave, end float64) (f
 			return 0, 0, cause, err
 		}
 		if !still {
-			for range 200 {
+			for high-low > 1e-12 {
 				mid := (low + high) / 2
 				if still, err = warmAt(mid); err != nil {
 					return 0, 0, cause, err
