@@ -21,7 +21,8 @@ func (w *Workspace) crossings(x *galaxy.Warmth, stays []stay, end float64) ([]fl
 	f.glow, f.ghigh = make([]float64, n), make([]float64, n)
 	fill(f.cross, never)
 	// What has fallen below in one stay is still below in the next, unless
-	// something keeps it warmer there.
+	// something keeps it warmer there, or the threshold is a floor, which may
+	// have fallen too.
 	var first, next []int32
 	for j, s := range stays {
 		if s.follows {
@@ -35,7 +36,7 @@ func (w *Workspace) crossings(x *galaxy.Warmth, stays []stay, end float64) ([]fl
 	}
 	open := next[:0]
 	for _, j := range next {
-		if f.warm[j-1] && f.cross[j-1] >= stays[j-1].leave || f.steady[j] > f.steady[j-1] {
+		if x.Unit == "floor" || f.steady[j] > f.steady[j-1] || f.warm[j-1] && f.cross[j-1] >= stays[j-1].leave {
 			open = append(open, j)
 		}
 	}
