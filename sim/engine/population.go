@@ -11,10 +11,11 @@ import (
 // a condition on warmth are sets of states.
 type state uint8
 
+const stateGone state = 255 // or not yet born
+
 const (
-	stateGone   state = 255 // or not yet born
-	statesAKind       = 6   // places x origins
-	maxKinds          = 40
+	statesAKind = 6 // places x origins
+	maxKinds    = 40
 )
 
 func stateOf(kind, place, origin uint8) state { return state(kind*statesAKind + place*2 + origin) }

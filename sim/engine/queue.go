@@ -176,13 +176,3 @@ func insertion(keys []float64, ids []uint32) {
 		keys[j], ids[j] = k, id
 	}
 }
-
-// scale multiplies all keys.
-func (q *queue) scale(f float64) {
-	for i := range q.keys {
-		q.keys[i] *= f
-	}
-	for i := range q.late {
-		q.late[i].key *= f
-	}
-}
