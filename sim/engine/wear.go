@@ -11,7 +11,8 @@ import (
 // brought up to date in steps: when the first bound object has lost 1 % since
 // its mass was last set, every bound object that has lost half a per cent or
 // more is set to what it then weighs (midpoint rule), its susceptibilities are
-// asked again, and its unspent thresholds rescaled.
+// asked again, and its unspent thresholds rescaled. That ends where a step would
+// take an object to its threshold, or below a thousandth of what it began with.
 const (
 	wearToStep = 0.01
 	wearToJoin = 0.005
@@ -260,7 +261,7 @@ func (w *Workspace) wearStep() error {
 	x, t := &w.wear, w.t
 	ids := x.ids[:0]
 	for _, i := range x.ids {
-		if mass := w.massOf(i); mass-x.rate[i]*(t-x.since[i]) > w.thresholdOf(w.kindOf(i))*(1+1e-9) {
+		if mass := w.massOf(i); mass-x.rate[i]*(t-x.since[i]) > w.leastWorn(i) {
 			ids = append(ids, i)
 		} else {
 			x.rate[i], x.since[i] = 0, t // its prospect is about to end it
@@ -280,7 +281,7 @@ func (w *Workspace) wearStep() error {
 	}
 	for j, i := range x.ids {
 		r.mass[j] = before[j] - mid[j]*(t-x.since[i])
-		if !(r.mass[j] > w.thresholdOf(r.kind[j])*(1+1e-9)) {
+		if !(r.mass[j] > w.leastWorn(i)) {
 			r.mass[j], x.rate[i] = before[j], 0 // its prospect is about to end it
 		}
 	}
@@ -312,6 +313,16 @@ func (w *Workspace) wearStep() error {
 		}
 	}
 	return w.changed(t)
+}
+
+// wornAway is the part of its mass at entry below which an object is not
+// brought up to date any more: it hardly counts, and its last steps would have
+// no end.
+const wornAway = 1e-3
+
+// leastWorn is the mass down to which steps of wearing take object i.
+func (w *Workspace) leastWorn(i uint32) float64 {
+	return max(w.thresholdOf(w.kindOf(i))*(1+1e-9), wornAway*w.wear.born[i])
 }
 
 // thresholdOf is the largest threshold of a kind.

@@ -14,6 +14,7 @@ const (
 	waitingMax = 0.01
 	wearToStep = 0.01
 	wearToJoin = 0.005
+	wornAway   = 1e-3
 )
 
 // dynamics takes events one at a time.
@@ -390,14 +391,15 @@ func (g *run) wearStep() error {
 				least = max(least, m)
 			}
 		}
+		least = max(least*(1+1e-9), wornAway*s.entry)
 		mass := s.mass - o.wearRate*dt
-		if mass > least*(1+1e-9) {
+		if mass > least {
 			r := o.row()
 			r.mass = s.mass - 0.5*o.wearRate*dt
 			mass = s.mass - g.wearOf(r)*dt
 			stepped = true
 		}
-		if !(mass > least*(1+1e-9)) {
+		if !(mass > least) {
 			o.wearRate = 0 // its prospect is about to end it
 			continue
 		}
