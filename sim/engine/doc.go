@@ -22,15 +22,18 @@
 // that is born at date b is hit when the reading has advanced from there by
 // E/s, E a unit exponential, s its susceptibility; on a change of kind the
 // part not yet spent is rescaled by the old over the new s. Nothing is drawn
-// anew but on a merger.
+// anew but on a merger. What is due at a date (a birth, the end of a stage)
+// happens before a hit, a stop or an end of the run at that date.
 //
 // Rates. See [Environment]: between refreshes a rate is a power law of the
 // galaxy values its laws declare; a refresh comes when one of them has moved
-// by 1 %, and at every removal while fewer than 100 objects are bound.
+// by 1 %, and at every removal while fewer than 100 objects are bound. A change
+// of kind counts as such a move where rates hang on masses, kinds or sums, or
+// where objects meet. Values that move with time alone are followed to 10^300 yr.
 //
 // Encounters. The object whose clock fires seeks a partner, picked in
 // proportion to what is sought among those bound at the last refresh (a pick
-// that has left since is drawn again). Both wait, bound and out of reach, for
+// that has left since, or is not born yet, is drawn again). Both wait, bound and out of reach, for
 // the next refresh, where all pairs are asked meet in one batch. A refresh
 // comes too when waiting objects make up 1 % of those bound. A product keeps
 // the id of the seeker and counts from the date of the meeting.
