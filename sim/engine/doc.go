@@ -33,10 +33,10 @@
 //
 // Encounters. The object whose clock fires seeks a partner, picked in
 // proportion to what is sought among those bound at the last refresh (a pick
-// that has left since, or is not born yet, is drawn again). Both wait, bound and out of reach, for
-// the next refresh, where all pairs are asked meet in one batch. A refresh
-// comes too when waiting objects make up 1 % of those bound. A product keeps
-// the id of the seeker and counts from the date of the meeting.
+// that has left since, or is not born yet, is drawn again). Both wait, bound
+// and out of reach, for the next refresh, where all pairs are asked meet in one
+// batch. A refresh comes too when waiting objects make up 1 % of those bound. A
+// product keeps the id of the seeker and counts from the date of the meeting.
 //
 // Wearing while bound. From the date at which a bound object has lost 1 % of
 // its mass, masses and susceptibilities of bound objects are brought up to
