@@ -329,6 +329,7 @@ func (w *Workspace) settle(t float64) error {
 		return nil
 	}
 	w.quiet = false
+	w.isActive = nil // as large as the galaxy, and done with
 	w.indexSteps()
 	steady := w.compact && len(w.steps) == 1 && t >= c.lastDeath && !c.immortal
 	if steady && len(w.active) == 0 {
