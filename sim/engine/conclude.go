@@ -157,7 +157,7 @@ func (w *Workspace) fadeOf(p int, marks fade.Marks) PopulationOutcome {
 			o.Left[w.m.causeWord(uint8(code))] += count
 		}
 	}
-	if marks.LastIndex >= 0 && marks.Last < never {
+	if len(n.exits[p]) > 0 && marks.Last < never {
 		o.Hangs = w.m.lawOf(n.lastWhy[p])
 	}
 	return o

@@ -79,15 +79,10 @@ func (w *Workspace) heads(heads *[maxClocks]head) []head {
 
 // countWindow takes hits until the rates must be asked again (more), or until
 // no hit comes before a limit.
-//
-// One clock leads: the one whose head comes first. Of the others it is enough
-// to know a date before which none can hit, from the fastest they can run in
-// this window; they are brought up to date when that comes, or at the end.
 func (w *Workspace) countWindow() (more bool, err error) {
 	c, e := &w.c, w.env
 	var memory [maxClocks]head
 	heads := w.heads(&memory)
-	lag := lagging{heads: heads, steps: w.lag.steps[:0], logs: w.lag.logs[:0], lead: -1}
 	place, leave, left := c.place[:c.n], c.leave[:c.n], c.left[:c.n]
 	declared := len(w.m.declared) > 0
 	date, weight, bound := w.base, w.m.Weight, w.bound
@@ -96,40 +91,31 @@ func (w *Workspace) countWindow() (more bool, err error) {
 	if declared {
 		number0 = e.base[0]
 	}
-	log := 0.0
-	if declared {
-		log = lnNear((weight*float64(bound) - number0) / number0)
-	}
-	var lead *head
 	for bound > 0 {
-		if lead == nil {
-			if lead = lag.choose(date, declared); lead == nil {
-				break
+		first, step := -1, never
+		for k := range heads {
+			if d := heads[k].left / heads[k].rate; d < step {
+				first, step = k, d
 			}
 		}
-		step := lead.left / lead.rate
-		if next := date + step; next > limit {
+		if first < 0 || date+step > limit {
 			break
-		} else if next >= lag.safe {
-			if lag.catchUp(log); !lag.leads() {
-				lead = nil
-				continue
-			}
-			lag.look(date, declared)
-			if next >= lag.safe { // close behind, yet later
-				lag.safe = next
-			}
 		}
 		date += step
-		lead.reading += lead.rate * step
-		lag.steps, lag.logs = append(lag.steps, step), append(lag.logs, log)
-		i := lead.id
+		for k := range heads {
+			h := &heads[k]
+			by := h.rate * step
+			h.left -= by
+			h.reading += by
+		}
+		hit := &heads[first]
+		i := hit.id
 		bound--
 		leave[i] = date
-		if lead.special {
-			place[i], left[i] = w.hitBound(lag.lead, i, date)
+		if hit.special {
+			place[i], left[i] = w.hitBound(first, i, date)
 		} else {
-			place[i], left[i] = lead.place, lead.cause
+			place[i], left[i] = hit.place, hit.cause
 		}
 		for k := range heads {
 			if h := &heads[k]; h.id == i {
@@ -143,16 +129,12 @@ func (w *Workspace) countWindow() (more bool, err error) {
 			break
 		}
 		if declared {
-			log = lnNear((number - number0) / number0)
-			lead.rate = lead.rate0 * expNear(lead.slope*log)
-		}
-		if lead.left >= never {
-			lag.catchUp(log)
-			lead = nil
+			x := lnNear((number - number0) / number0)
+			for k := range heads {
+				heads[k].rate = heads[k].rate0 * expNear(heads[k].slope*x)
+			}
 		}
 	}
-	lag.catchUp(log)
-	w.lag = lag
 	w.events += int64(w.bound - bound)
 	w.bound, w.t, w.base = bound, max(w.t, date), date
 	e.value[slotNumber], e.lost[slotNumber] = weight*float64(bound), 0
@@ -160,82 +142,6 @@ func (w *Workspace) countWindow() (more bool, err error) {
 		w.reading[k], e.Rates[k], w.clocks[k].pos = heads[k].reading, heads[k].rate, heads[k].pos
 	}
 	return more, nil
-}
-
-// lagging is the clocks of a window: one leads, the rest are some steps behind.
-type lagging struct {
-	heads []head
-	lead  int
-	safe  float64   // date before which no other clock hits
-	steps []float64 // that the lead has taken since, and
-	logs  []float64 // ln of the number bound, over that at the refresh, in each
-}
-
-// choose makes the clock that hits first the lead; all are up to date.
-func (l *lagging) choose(date float64, declared bool) *head {
-	l.lead = l.first()
-	if l.lead < 0 {
-		return nil
-	}
-	l.look(date, declared)
-	return &l.heads[l.lead]
-}
-
-func (l *lagging) first() int {
-	first, soonest := -1, never
-	for k := range l.heads {
-		if d := l.heads[k].left / l.heads[k].rate; d < soonest {
-			first, soonest = k, d
-		}
-	}
-	return first
-}
-
-// leads tells whether the lead still hits first; all are up to date.
-func (l *lagging) leads() bool { return l.first() == l.lead }
-
-// look sets the date before which no other clock hits.
-func (l *lagging) look(date float64, declared bool) {
-	l.safe = never
-	for k := range l.heads {
-		h := &l.heads[k]
-		if k == l.lead {
-			continue
-		}
-		fastest := h.rate
-		if declared && h.slope < 0 {
-			// It runs faster as the number falls, by 1 % at most.
-			fastest = h.rate0 * expNear(h.slope*lnNear(-1.01*moveToRefresh)) * (1 + 1e-9)
-		}
-		if d := date + h.left/fastest; d < l.safe {
-			l.safe = d
-		}
-	}
-}
-
-// catchUp brings all clocks to the last step, and their rates to the number
-// bound now.
-func (l *lagging) catchUp(log float64) {
-	for k := range l.heads {
-		h := &l.heads[k]
-		if k == l.lead || l.lead < 0 {
-			continue
-		}
-		reading, left, rate := h.reading, h.left, h.rate
-		for e, step := range l.steps {
-			if h.slope != 0 {
-				rate = h.rate0 * expNear(h.slope*l.logs[e])
-			}
-			by := rate * step
-			left -= by
-			reading += by
-		}
-		if h.slope != 0 {
-			rate = h.rate0 * expNear(h.slope*log)
-		}
-		h.reading, h.left, h.rate = reading, left, rate
-	}
-	l.steps, l.logs = l.steps[:0], l.logs[:0]
 }
 
 // hitBound tells where a hit takes an object, and why, and feeds the hole at

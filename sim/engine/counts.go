@@ -20,23 +20,24 @@ import (
 // ends that way is counted in years, and only its marks are turned into
 // logarithms.
 type counts struct {
-	mask    [256]uint64 // populations without a condition on warmth, by state
-	plain   bool        // dates of change are in years
-	inLog   uint64      // populations counted in log10 years
-	aliased uint64      // populations whose exits are a flow's
-	direct  uint64      // populations whose entries and exits are given, in log10 years
-	wanted  uint64      // populations whose entries are being gathered
-	entries [][]float64
-	exits   [][]float64
-	spare   [][]float64 // memory lent by the dynamics, which has done with it
-	entered []int
-	lastIn  []float64 // of entries by change
-	flows   flows
-	left    [][256]int64
-	lastOut []float64
-	lastWhy []uint8
-	scratch fade.Scratch
-	logs    [3][]float64
+	mask     [256]uint64 // populations without a condition on warmth, by state
+	plain    bool        // dates of change are in years
+	inLog    uint64      // populations counted in log10 years
+	aliased  uint64      // populations whose exits are a flow's
+	direct   uint64      // populations whose entries and exits are given, in log10 years
+	wanted   uint64      // populations whose entries are being gathered
+	entries  [][]float64
+	exits    [][]float64
+	spare    [][]float64 // memory lent by the dynamics, which has done with it
+	entered  []int
+	lastIn   []float64 // of entries by change
+	flows    flows
+	left     [][256]int64
+	firstOut []float64
+	lastOut  []float64
+	lastWhy  []uint8
+	scratch  fade.Scratch
+	logs     [3][]float64
 }
 
 func (n *counts) reset(m *Model, plain bool, spare [][]float64) {
@@ -44,7 +45,7 @@ func (n *counts) reset(m *Model, plain bool, spare [][]float64) {
 	n.spare = append(n.spare[:0], spare...)
 	defer func() { n.aliased = 0 }()
 	n.entries, n.exits, n.entered = grown(n.entries, p), grown(n.exits, p), grown(n.entered, p)
-	n.lastIn, n.lastOut = grown(n.lastIn, p), grown(n.lastOut, p)
+	n.lastIn, n.firstOut, n.lastOut = grown(n.lastIn, p), grown(n.firstOut, p), grown(n.lastOut, p)
 	n.left, n.lastWhy = grown(n.left, p), grown(n.lastWhy, p)
 	n.mask, n.plain, n.inLog, n.direct, n.wanted = [256]uint64{}, plain, 0, 0, 0
 	clear(n.left)
@@ -54,7 +55,7 @@ func (n *counts) reset(m *Model, plain bool, spare [][]float64) {
 		if n.aliased>>i&1 != 0 {
 			n.exits[i] = nil
 		}
-		n.entered[i], n.lastIn[i], n.lastOut[i] = 0, -never, -never
+		n.entered[i], n.lastIn[i], n.firstOut[i], n.lastOut[i] = 0, -never, never, -never
 		if pop.Warmth != nil {
 			n.direct |= 1 << i
 			n.inLog |= 1 << i
@@ -99,6 +100,7 @@ func (n *counts) ends(date float64, from state, cause uint8) {
 func (n *counts) exit(p int, date float64, cause uint8) {
 	n.exits[p] = append(n.exits[p], date)
 	n.left[p][cause]++
+	n.firstOut[p] = min(n.firstOut[p], date)
 	if date >= n.lastOut[p] {
 		n.lastOut[p], n.lastWhy[p] = date, cause
 	}
@@ -133,7 +135,7 @@ func (w *Workspace) marks(end float64) []fade.Marks {
 			last = num.Log10(last)
 		}
 		var ok bool
-		if out[p], ok = n.scratch.FindAfter(n.entered[p], last, n.exits[p]); !ok {
+		if out[p], ok = n.scratch.FindAfter(n.entered[p], last, n.exits[p], n.firstOut[p], n.lastOut[p]); !ok {
 			n.wanted |= 1 << p
 		}
 	}

@@ -35,6 +35,14 @@ func (w *Workspace) fillClocks() error {
 	for k := range n {
 		lists[k].keys, lists[k].ids = w.clocks[k].keys, w.clocks[k].ids
 	}
+	var columns [maxClocks][]float64
+	lead := 0
+	for k := range n {
+		columns[k] = c.reading[k][:c.n]
+		if slow[k] < slow[lead] {
+			lead = k
+		}
+	}
 	place, stage := c.place[:c.n], w.stage[:c.n]
 	for i, at := range place {
 		if i == chunk {
@@ -50,16 +58,21 @@ func (w *Workspace) fillClocks() error {
 			continue
 		}
 		var left [maxClocks]float64
+		if soon := columns[lead][i] - now[lead]; w.alone(i, lead, soon, &columns, &now) {
+			l := &lists[lead]
+			l.keys, l.ids = append(l.keys, columns[lead][i]), append(l.ids, uint32(i))
+			continue
+		}
 		first, soonest := 0, never
 		for k := range n {
-			left[k] = c.reading[k][i] - now[k]
+			left[k] = columns[k][i] - now[k]
 			if d := left[k] * slow[k]; d < soonest {
 				first, soonest = k, d
 			}
 		}
 		rho := &w.rho
 		for k := range n {
-			if x := c.reading[k][i]; x < never && (k == first || !(left[k] > rho[k][first]*left[first])) {
+			if x := columns[k][i]; x < never && (k == first || !(left[k] > rho[k][first]*left[first])) {
 				l := &lists[k]
 				l.keys, l.ids = append(l.keys, x), append(l.ids, uint32(i))
 			}
@@ -72,6 +85,17 @@ func (w *Workspace) fillClocks() error {
 		w.clocks[k].sort(&w.sorter)
 	}
 	return nil
+}
+
+// alone tells whether the lead clock provably takes object i before any other,
+// when it has soon left to go.
+func (w *Workspace) alone(i, lead int, soon float64, columns *[maxClocks][]float64, now *[maxClocks]float64) bool {
+	for k := range w.m.Clocks {
+		if k != lead && !(columns[k][i]-now[k] > w.rho[k][lead]*soon) {
+			return false
+		}
+	}
+	return soon < never
 }
 
 // boundSlack is what a bound on a ratio of rates allows beyond the present.

@@ -12,7 +12,7 @@ import (
 // counted; what must be kept one by one are the dates of exits.
 type flow struct {
 	count         int64
-	last          float64
+	first, last   float64
 	exits, enters uint64    // populations
 	logs          uint64    // of the exits: those counted in log10 years while the date is in years
 	known, lent   bool      // lent: its dates are the population's
@@ -42,7 +42,8 @@ func (f *flows) of(from state, cause uint8) *flow { return &f.table[int(from)*f.
 // dates are in years.
 func (n *counts) learn(x *flow, from, to state, years bool) {
 	before, after := n.mask[from], n.mask[to]
-	x.exits, x.enters, x.known, x.last = before&^after, after&^before, true, -never
+	x.exits, x.enters, x.known = before&^after, after&^before, true
+	x.first, x.last = never, -never
 	if years {
 		x.logs = x.exits & n.inLog
 	}
@@ -53,6 +54,9 @@ func (n *counts) move(x *flow, date float64) {
 	x.count++
 	if date > x.last {
 		x.last = date
+	}
+	if date < x.first {
+		x.first = date
 	}
 	if x.exits == 0 {
 		return
@@ -122,10 +126,11 @@ func (n *counts) lendLargest(p int) {
 
 // takeExits enters a flow's dates into a population it leaves.
 func (n *counts) takeExits(p int, x *flow, cause uint8) {
-	last, logs := x.last, x.logs>>p&1 != 0
+	first, last, logs := x.first, x.last, x.logs>>p&1 != 0
 	if logs {
-		last = num.Log10(last)
+		first, last = num.Log10(first), num.Log10(last)
 	}
+	n.firstOut[p] = min(n.firstOut[p], first)
 	if last >= n.lastOut[p] {
 		n.lastOut[p], n.lastWhy[p] = last, cause
 	}

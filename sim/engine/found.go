@@ -3,7 +3,6 @@ package engine
 import (
 	"fmt"
 	"math"
-	"slices"
 
 	"wane/sim/law"
 	"wane/sim/num"
@@ -283,7 +282,11 @@ func (a *asker) foundProspects(c *columns, first, n int, starEnd []prospect) err
 		sum += x
 	}
 	c.founded.add(sum)
-	c.earliest = min(c.earliest, slices.Min(c.birth[first:first+n]))
+	for _, b := range c.birth[first : first+n] {
+		if b < c.earliest {
+			c.earliest = b
+		}
+	}
 	r := a.secondStage(c, first, n)
 	since := func(i int) float64 { return num.Log10(c.death[first+i]) }
 	a.latest = num.Log10(latest)

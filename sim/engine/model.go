@@ -59,6 +59,9 @@ type Model struct {
 	timedSlots                      []int
 	sums                            []bool // per clock: its sum is declared
 	simple                          bool
+	wornBy                          [256]int8 // by kind: the wearing law, -1: none; good in a simple run
+	wornInPart                      bool      // a law speaks for part of a kind only
+	stagesDraw                      bool      // a law of what objects become reads a draw
 	coolsByMetals                   bool
 	voices                          map[*law.Use]*voice
 	deathsMatter                    bool // a declared value changes when a star dies

@@ -2,6 +2,7 @@ package engine
 
 import (
 	"bytes"
+	"slices"
 
 	"wane/sim/draw"
 	"wane/sim/law"
@@ -165,6 +166,7 @@ type asker struct {
 	constants          constantColumns
 	offers             []prospect
 	linked             []int32
+	parts              [][]int32
 	links              []prospect
 	kept, start        []float64
 	gens               []uint32
@@ -210,6 +212,9 @@ func (a *asker) secondStage(c *columns, first, n int) *rows {
 	r := a.firstStage(c, first, n)
 	r.kind, r.comp = c.kind1[first:first+n], c.comp1[first:first+n]
 	r.mass, r.birthMass = c.mass1[first:first+n], c.mass1[first:first+n]
+	if !a.m.stagesDraw {
+		return r // nobody asks for the generation
+	}
 	r.gen = grown(a.gens, n)
 	a.gens = r.gen
 	for i := range n {
@@ -355,12 +360,24 @@ func oneKind(kinds []uint8) (kind uint8, one bool) {
 type voice struct {
 	some, all [256]bool
 	reads     columnSet
+	draws     bool // it reads a draw of the object
 }
 
 func (m *Model) compileVoices() {
 	m.voices = map[*law.Use]*voice{}
 	for _, u := range m.Set.All() {
 		v := &voice{reads: reads(u)}
+		for _, q := range u.Card.Questions {
+			if slices.Contains(q.Inputs, "u") || slices.Contains(q.Inputs, "e") {
+				v.draws = true
+			}
+		}
+		switch p, _ := law.ProcessNamed(u.Card.Process); p.Role {
+		case law.Turning:
+			m.stagesDraw = true
+		case law.Wearing, law.Dynamics, law.Encounter:
+			m.stagesDraw = m.stagesDraw || v.draws
+		}
 		for k := range m.Set.Kinds {
 			v.some[k], v.all[k] = u.SpeaksForKind(uint8(k))
 		}

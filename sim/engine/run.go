@@ -31,7 +31,6 @@ type Workspace struct {
 	clocks        []queue
 	schedule      queue
 	sorter        sorter
-	lag           lagging
 	caps          []float64      // clock readings at which a quiet leg ends
 	quiet         bool           // only the objects in active are on the clocks
 	compact       bool           // susceptibilities are not held

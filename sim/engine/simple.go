@@ -8,15 +8,42 @@ func (m *Model) simpleEnds() bool { return m.simple }
 
 func (m *Model) compileSimple() {
 	m.simple = len(m.turning) == 0
-	by := make([]int, len(m.Set.Kinds))
-	for _, u := range m.wearing {
+	for k := range m.wornBy {
+		m.wornBy[k] = -1
+	}
+	for w, u := range m.wearing {
 		for k := range m.Set.Kinds {
-			if any, _ := u.SpeaksForKind(uint8(k)); any {
-				by[k]++
-				m.simple = m.simple && by[k] == 1 && u.Card.Answers("foretell")
+			if any, all := u.SpeaksForKind(uint8(k)); any {
+				m.simple = m.simple && m.wornBy[k] < 0 && u.Card.Answers("foretell")
+				m.wornBy[k] = int8(w)
+				m.wornInPart = m.wornInPart || !all
 			}
 		}
 	}
+}
+
+// partition sorts the rows by the wearing law that speaks for them.
+func (a *asker) partition(r *rows) {
+	a.parts = grown(a.parts, len(a.m.wearing))
+	for w := range a.parts {
+		a.parts[w] = a.parts[w][:0]
+	}
+	for i, k := range r.kind[:r.n] {
+		w := a.m.wornBy[k]
+		if w < 0 || a.m.wornInPart && !a.m.wearing[w].Speaks(k, r.mass[i], r.metals[i]) {
+			continue
+		}
+		a.parts[w] = append(a.parts[w], int32(i))
+	}
+}
+
+// part is the rows of the wearing law w, after partition.
+func (a *asker) part(w int, r *rows) (*rows, []int32) {
+	if len(a.parts[w]) == r.n {
+		return r, nil
+	}
+	a.sub.gather(r, a.parts[w], a.m.voices[a.m.wearing[w]].reads)
+	return a.sub, a.parts[w]
 }
 
 // simpleProspects is prospects for a run of simple ends, straight into the
@@ -27,8 +54,9 @@ func (a *asker) simpleProspects(c *columns, r *rows, since func(int) float64) er
 	fill(end, never)
 	clear(ended)
 	a.linked = a.linked[:0]
+	a.partition(r)
 	for w, u := range a.m.wearing {
-		s, pick := a.spoken(u, r)
+		s, pick := a.part(w, r)
 		if s.n == 0 {
 			continue
 		}

@@ -55,10 +55,12 @@ func (s *Scratch) Find(entries, exits []float64) Marks {
 }
 
 // FindAfter is Find for a population that is known to have had so many
-// entries, all finite, the last at lastEntry; ok is false, and nothing is
-// found, when somebody leaves before that: then the entries matter one by one.
-func (s *Scratch) FindAfter(entered int, lastEntry float64, exits []float64) (m Marks, ok bool) {
-	return s.apart(entered, lastEntry, exits, scan(exits))
+// entries, all finite, the last at lastEntry, and whose exits, all finite too,
+// lie between first and last. ok is false, and nothing is found, when somebody
+// leaves before the last entry: then the entries matter one by one. LastIndex
+// is not looked for.
+func (s *Scratch) FindAfter(entered int, lastEntry float64, exits []float64, first, last float64) (m Marks, ok bool) {
+	return s.apart(entered, lastEntry, exits, extent{n: len(exits), first: first, last: last, lastIndex: -1})
 }
 
 // apart finds the marks when everybody is in before the first leaves: they are
