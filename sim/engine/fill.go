@@ -20,6 +20,9 @@ import (
 func (w *Workspace) fillClocks() error {
 	m, c := w.m, &w.c
 	n := len(m.Clocks)
+	if n == 0 {
+		return nil
+	}
 	for k := range w.clocks {
 		w.clocks[k].reset()
 	}
