@@ -36,11 +36,12 @@ func (w *Workspace) dynamics(ctx context.Context) error {
 	if err := w.exposeAll(); err != nil {
 		return err
 	}
-	w.quiet, w.steps, w.stepIndex.from = false, w.steps[:0], w.stepIndex.from[:0]
+	w.quiet = false
+	w.past.begin(len(m.Clocks))
 	if err := w.refresh(0); err != nil {
 		return err
 	}
-	w.note()
+	w.past.note(w.base, w.reading, w.env.Rates)
 	quiet, err := w.enterQuiet()
 	if err != nil {
 		return err

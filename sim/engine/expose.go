@@ -1,10 +1,6 @@
 package engine
 
-import (
-	"math"
-	"math/bits"
-	"slices"
-)
+import "slices"
 
 // exposeAll asks the susceptibilities of both stages of every object and
 // fills the sums. In a compact run nothing is held: see enterQuiet.
@@ -116,88 +112,18 @@ func (w *Workspace) exponential(k int, i uint32, gen uint32) float64 {
 	return w.ask.streams[clock.Process].Exp(uint64(i), gen, drawClock+uint32(clock.index))
 }
 
-// step is one piece of the history of the readings: from date t on they grow
-// by rate.
-type step struct {
-	t             float64
-	reading, rate [maxClocks]float64
-}
-
-// note adds the present rates to the history of a quiet leg.
-func (w *Workspace) note() {
-	if n := len(w.steps); n > 0 && w.steps[n-1].t == w.base {
-		w.steps = w.steps[:n-1]
-	}
-	s := step{t: w.base}
-	copy(s.reading[:], w.reading)
-	copy(s.rate[:], w.env.Rates)
-	w.steps = append(w.steps, s)
-}
-
-// indexSteps prepares stepAt for many look-ups: where the pieces begin that
-// start in each of some thousand intervals of date.
-func (w *Workspace) indexSteps() {
-	x := &w.stepIndex
-	x.from = x.from[:0]
-	if len(w.steps) < 64 {
-		return
-	}
-	x.low = math.Float64bits(w.steps[0].t)
-	span := math.Float64bits(w.steps[len(w.steps)-1].t) - x.low
-	x.shift = uint(max(0, bits.Len64(span)-12))
-	at := 0
-	for i := range span>>x.shift + 1 {
-		for at+1 < len(w.steps) && (math.Float64bits(w.steps[at+1].t)-x.low)>>x.shift < i {
-			at++
-		}
-		x.from = append(x.from, int32(at))
-	}
-}
-
-// stepIndex holds, per interval of date, a piece that begins no later.
-type stepIndex struct {
-	from  []int32
-	low   uint64
-	shift uint
-}
-
-// stepAt finds the piece of the history that holds date t.
-func (w *Workspace) stepAt(t float64) *step {
-	low, high := 0, len(w.steps)
-	if x := &w.stepIndex; len(x.from) > 0 && t > 0 {
-		if b := math.Float64bits(t); b > x.low {
-			i := int((b - x.low) >> x.shift)
-			last := len(x.from) - 1
-			low = int(x.from[min(i, last)])
-			if i+1 <= last {
-				high = min(high, int(x.from[i+1])+2)
-			}
-		}
-	}
-	for high-low > 1 {
-		if mid := (low + high) / 2; w.steps[mid].t <= t {
-			low = mid
-		} else {
-			high = mid
-		}
-	}
-	return &w.steps[low]
-}
-
-func (s *step) at(k int, t float64) float64 { return s.reading[k] + s.rate[k]*(t-s.t) }
-
 // readingOf is where clock k takes an object that brought e, under the history
 // of the leg, given that it has come to date t unhurt.
 func (w *Workspace) readingOf(k int, j int, e, s0, s1, t float64) float64 {
 	c := &w.c
-	b := w.stepAt(c.birth[j]).at(k, c.birth[j])
+	b := w.past.at(k, c.birth[j])
 	if c.died[j] == 0 {
 		return over(b, e, s1)
 	}
 	if c.death[j] > t {
 		return over(b, e, s0)
 	}
-	d := w.stepAt(c.death[j]).at(k, c.death[j])
+	d := w.past.at(k, c.death[j])
 	return over(d, e-s0*(d-b), s1)
 }
 
@@ -207,7 +133,7 @@ func (w *Workspace) spareOf(k int, j int, e, s0, s1, t float64) {
 	if s1 != 0 || w.stage[j] != 2 || c.died[j] == 0 || s0 == 0 {
 		return
 	}
-	b, d := w.stepAt(c.birth[j]).at(k, c.birth[j]), w.stepAt(c.death[j]).at(k, c.death[j])
+	b, d := w.past.at(k, c.birth[j]), w.past.at(k, c.death[j])
 	w.spare(k, uint32(j), e-s0*(d-b))
 }
 
@@ -292,8 +218,8 @@ func (w *Workspace) listActive(from, first int, s0, s1 [][]float64) {
 // history and to the end of the leg. What is born and stays in its second
 // stage has its death at its birth.
 func (w *Workspace) steadyReadings(k, first, n int, s0, s1 []float64) {
-	c, step := &w.c, &w.steps[0]
-	r, r0, t0 := step.rate[k], step.reading[k], step.t
+	c := &w.c
+	t0, r0, r := w.past.piece(0, k)
 	x, birth, death := c.reading[k][first:first+n], c.birth[first:first+n], c.death[first:first+n]
 	s0, s1 = s0[:n], s1[:n]
 	for i, e := range x {
@@ -330,8 +256,8 @@ func (w *Workspace) settle(t float64) error {
 	}
 	w.quiet = false
 	w.isActive = nil // as large as the galaxy, and done with
-	w.indexSteps()
-	steady := w.compact && len(w.steps) == 1 && t >= c.lastDeath && !c.immortal
+	w.past.index()
+	steady := w.compact && len(w.past.t) == 1 && t >= c.lastDeath && !c.immortal
 	if steady && len(w.active) == 0 {
 		for i := range w.stage {
 			w.stage[i] = 2

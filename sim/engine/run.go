@@ -39,7 +39,6 @@ type Workspace struct {
 	view          [2][][]float64
 	active        []uint32
 	isActive      []bool
-	stepIndex     stepIndex
 	unspent       [maxClocks]float64
 	spared        [maxClocks]map[uint32]float64 // of those that nothing can hit at present
 	stayed        []stay
@@ -51,7 +50,7 @@ type Workspace struct {
 	endsScheduled bool
 	adriftPending bool
 	stoppedAt     float64 // log10
-	steps         []step  // the history of rates through a quiet leg
+	past          past    // the readings through a quiet leg
 	events        int64
 	central       centralHole
 	wear          wearing
@@ -160,7 +159,7 @@ func (w *Workspace) changed(t float64) error {
 	}
 	w.env.update()
 	if w.quiet {
-		w.note()
+		w.past.note(w.base, w.reading, w.env.Rates)
 	}
 	return nil
 }
@@ -185,7 +184,7 @@ func (w *Workspace) refresh(t float64) error {
 		w.meets.recount(w)
 	}
 	if w.quiet {
-		w.note()
+		w.past.note(w.base, w.reading, w.env.Rates)
 	}
 	return w.central.look(w, t)
 }
