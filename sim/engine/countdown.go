@@ -34,55 +34,70 @@ func (w *Workspace) countdown(ctx context.Context) error {
 	return nil
 }
 
-// head is the first entry of a clock that still counts: how far the reading
-// has to go to take it, and the clock's reading and rate.
+// fewClocks is how many clocks countdown can merge: it has them in registers.
+const fewClocks = 3
+
+// head is the first entry of a clock that still counts.
 type head struct {
-	left, rate   float64
-	reading      float64
-	slope, rate0 float64
 	id           uint32
 	place, cause uint8 // what a plain hit does
 	special      bool  // a hit may do something else
 	keys         []float64
 	ids          []uint32
 	pos          int // of the head
+	rate, rate0  float64
+	slope        float64
+	reading      float64
+	left         float64 // how far the clock has to go to the head
 }
 
-// advance drops entries of objects no longer bound.
-func (h *head) advance(place []uint8) {
-	for ; h.pos < len(h.ids); h.pos++ {
+// advance goes on to the next entry of an object still bound and returns how
+// far the clock has to go to it.
+func (h *head) advance(place []uint8, reading float64) (left float64) {
+	for h.pos++; h.pos < len(h.ids); h.pos++ {
 		if id := h.ids[h.pos]; place[id] == law.Bound {
-			h.left, h.id = h.keys[h.pos]-h.reading, id
-			return
+			h.id = id
+			return h.keys[h.pos] - reading
 		}
 	}
-	h.left, h.id = never, maxObjects
+	h.id = maxObjects
+	return never
 }
 
-// heads takes the clocks as they stand.
-func (w *Workspace) heads(heads *[maxClocks]head) []head {
+// heads takes the clocks as they stand; those the run lacks never hit.
+func (w *Workspace) heads() (heads [fewClocks]head) {
 	m, e := w.m, w.env
-	for k := range m.Clocks {
-		q, clock, h := &w.clocks[k], &m.Clocks[k], &heads[k]
-		*h = head{reading: w.reading[k], rate: e.Rates[k], rate0: e.rate0[k], keys: q.keys, ids: q.ids, pos: q.pos,
-			place: placeGone, cause: clock.cause, special: clock.Fate == law.FateCentral || w.c.turned != nil}
+	for k := range heads {
+		h := &heads[k]
+		*h = head{left: never, rate: 1, id: maxObjects}
+		if k >= len(m.Clocks) {
+			continue
+		}
+		q, clock := &w.clocks[k], &m.Clocks[k]
+		h.keys, h.ids, h.pos = q.keys, q.ids, q.pos-1
+		h.rate, h.rate0 = e.Rates[k], e.rate0[k]
+		h.place, h.cause, h.special = placeGone, clock.cause, clock.Fate == law.FateCentral || w.c.turned != nil
 		if clock.Fate == law.FateAdrift {
 			h.place = law.Adrift
 		}
 		if len(m.declared) > 0 {
 			h.slope = e.slope[k][0]
 		}
-		h.advance(w.c.place)
+		h.reading = w.reading[k]
+		h.left = h.advance(w.c.place, h.reading)
 	}
-	return heads[:len(m.Clocks)]
+	return heads
 }
 
 // countWindow takes hits until the rates must be asked again (more), or until
 // no hit comes before a limit.
 func (w *Workspace) countWindow() (more bool, err error) {
 	c, e := &w.c, w.env
-	var memory [maxClocks]head
-	heads := w.heads(&memory)
+	heads := w.heads()
+	h0, h1, h2 := &heads[0], &heads[1], &heads[2]
+	left0, left1, left2 := h0.left, h1.left, h2.left
+	rate0, rate1, rate2 := h0.rate, h1.rate, h2.rate
+	reading0, reading1, reading2 := h0.reading, h1.reading, h2.reading
 	place, leave, left := c.place[:c.n], c.leave[:c.n], c.left[:c.n]
 	declared := len(w.m.declared) > 0
 	date, weight, bound := w.base, w.m.Weight, w.bound
@@ -92,23 +107,21 @@ func (w *Workspace) countWindow() (more bool, err error) {
 		number0 = e.base[0]
 	}
 	for bound > 0 {
-		first, step := -1, never
-		for k := range heads {
-			if d := heads[k].left / heads[k].rate; d < step {
-				first, step = k, d
-			}
+		hit, first, step := h0, 0, left0/rate0
+		if d := left1 / rate1; d < step {
+			hit, first, step = h1, 1, d
 		}
-		if first < 0 || date+step > limit {
+		if d := left2 / rate2; d < step {
+			hit, first, step = h2, 2, d
+		}
+		if !(date+step <= limit) || step == never {
 			break
 		}
 		date += step
-		for k := range heads {
-			h := &heads[k]
-			by := h.rate * step
-			h.left -= by
-			h.reading += by
-		}
-		hit := &heads[first]
+		by0, by1, by2 := rate0*step, rate1*step, rate2*step
+		left0, reading0 = left0-by0, reading0+by0
+		left1, reading1 = left1-by1, reading1+by1
+		left2, reading2 = left2-by2, reading2+by2
 		i := hit.id
 		bound--
 		leave[i] = date
@@ -117,11 +130,14 @@ func (w *Workspace) countWindow() (more bool, err error) {
 		} else {
 			place[i], left[i] = hit.place, hit.cause
 		}
-		for k := range heads {
-			if h := &heads[k]; h.id == i {
-				h.pos++
-				h.advance(place)
-			}
+		if h0.id == i {
+			left0 = h0.advance(place, reading0)
+		}
+		if h1.id == i {
+			left1 = h1.advance(place, reading1)
+		}
+		if h2.id == i {
+			left2 = h2.advance(place, reading2)
 		}
 		number := weight * float64(bound)
 		if bound < fewObjects || declared && number0-number > moveToRefresh*number0 {
@@ -130,16 +146,18 @@ func (w *Workspace) countWindow() (more bool, err error) {
 		}
 		if declared {
 			x := lnNear((number - number0) / number0)
-			for k := range heads {
-				heads[k].rate = heads[k].rate0 * expNear(heads[k].slope*x)
-			}
+			rate0 = h0.rate0 * expNear(h0.slope*x)
+			rate1 = h1.rate0 * expNear(h1.slope*x)
+			rate2 = h2.rate0 * expNear(h2.slope*x)
 		}
 	}
 	w.events += int64(w.bound - bound)
 	w.bound, w.t, w.base = bound, max(w.t, date), date
 	e.value[slotNumber], e.lost[slotNumber] = weight*float64(bound), 0
-	for k := range heads {
-		w.reading[k], e.Rates[k], w.clocks[k].pos = heads[k].reading, heads[k].rate, heads[k].pos
+	for k, now := range [fewClocks]struct{ reading, rate float64 }{{reading0, rate0}, {reading1, rate1}, {reading2, rate2}} {
+		if k < len(w.m.Clocks) {
+			w.reading[k], e.Rates[k], w.clocks[k].pos = now.reading, now.rate, heads[k].pos
+		}
 	}
 	return more, nil
 }
@@ -169,7 +187,7 @@ func (w *Workspace) hitBound(k int, i uint32, date float64) (place, cause uint8)
 // years, to objects in their second stage, and only the number bound matters.
 func (w *Workspace) countsDown() bool {
 	m := w.m
-	if m.encounter != nil || m.deathsMatter || len(m.declared) > 1 || w.env.unit != 0 || w.awaiting > 0 || !w.compact {
+	if len(m.Clocks) > fewClocks || m.encounter != nil || m.deathsMatter || len(m.declared) > 1 || w.env.unit != 0 || w.awaiting > 0 || !w.compact {
 		return false
 	}
 	if len(m.declared) == 1 && m.declared[0] != slotNumber {
