@@ -135,9 +135,14 @@ func (w *Workspace) marks(end float64) []fade.Marks {
 			last = num.Log10(last)
 		}
 		var ok bool
-		if out[p], ok = n.scratch.FindAfter(n.entered[p], last, n.exits[p], n.firstOut[p], n.lastOut[p]); !ok {
-			n.wanted |= 1 << p
+		if out[p], ok = n.scratch.FindAfter(n.entered[p], last, n.exits[p], n.firstOut[p], n.lastOut[p]); ok {
+			continue
 		}
+		if early, until := before(n.exits[p], last); n.plain && 1000*early < n.entered[p] && w.enterAfter(p, until, early+1) {
+			out[p] = n.scratch.FindLate(n.entered[p], last, n.exits[p], n.firstOut[p], n.lastOut[p], early)
+			continue
+		}
+		n.wanted |= 1 << p
 	}
 	if n.wanted != 0 {
 		w.replay(end)
@@ -158,6 +163,40 @@ func (w *Workspace) marks(end float64) []fade.Marks {
 		}
 	}
 	return out
+}
+
+// before counts the exits up to a date, and finds the last of them.
+func before(exits []float64, date float64) (n int, last float64) {
+	last = -never
+	for _, v := range exits {
+		if v <= date {
+			n++
+			last = max(last, v)
+		}
+	}
+	return n, last
+}
+
+// enterAfter tells whether population p has at least so many entries later than
+// a date, both in the population's unit. It is a plain run.
+func (w *Workspace) enterAfter(p int, date float64, least int) bool {
+	n := &w.counts
+	wanted := n.wanted
+	defer func() { n.wanted, n.entries[p] = wanted, n.entries[p][:0] }()
+	n.wanted = 1 << p
+	for i, seen := uint32(0), 0; i < uint32(w.c.n); i++ {
+		w.plainEntries(i)
+		for _, v := range n.entries[p] {
+			if v > date {
+				seen++
+			}
+		}
+		n.entries[p] = n.entries[p][:0]
+		if seen >= least {
+			return true
+		}
+	}
+	return false
 }
 
 // replay runs through the histories again for the entries that are wanted.

@@ -109,7 +109,7 @@ func (a *asker) divert(r *rows, f func(row, clock int)) error {
 // exponential is the unit exponential that object i brings to clock k.
 func (w *Workspace) exponential(k int, i uint32, gen uint32) float64 {
 	clock := &w.m.Clocks[k]
-	return w.ask.streams[clock.Process].Exp(uint64(i), gen, drawClock+uint32(clock.index))
+	return w.ask.clocks[k].Exp(uint64(i), gen, drawClock+uint32(clock.index))
 }
 
 // readingOf is where clock k takes an object that brought e, under the history
@@ -244,7 +244,7 @@ func (w *Workspace) susceptibilities(first, n int) (s0, s1 [][]float64, err erro
 
 func (w *Workspace) drawExponentials(k, first, n int) {
 	clock := &w.m.Clocks[k]
-	w.ask.streams[clock.Process].Exps(w.c.reading[k][first:first+n], uint64(first), 0, drawClock+uint32(clock.index))
+	w.ask.clocks[k].Exps(w.c.reading[k][first:first+n], uint64(first), 0, drawClock+uint32(clock.index))
 }
 
 // settle ends a quiet leg at date t: every object left out gets the readings
@@ -258,11 +258,8 @@ func (w *Workspace) settle(t float64) error {
 	w.isActive = nil // as large as the galaxy, and done with
 	w.past.index()
 	steady := w.compact && len(w.past.t) == 1 && t >= c.lastDeath && !c.immortal
-	if steady && len(w.active) == 0 {
-		for i := range w.stage {
-			w.stage[i] = 2
-		}
-		return nil
+	if w.compact && t >= c.lastDeath && !c.immortal {
+		return w.settleCompact(steady)
 	}
 	isActive := 0
 	for first := 0; first < c.n; first += chunk {
@@ -300,6 +297,69 @@ func (w *Workspace) settle(t float64) error {
 		}
 	}
 	return nil
+}
+
+// settleCompact settles a compact leg that has seen the last star die. Where
+// the rates changed on the way, the readings are made anew, from the same
+// draws and susceptibilities.
+func (w *Workspace) settleCompact(steady bool) error {
+	c := &w.c
+	active := w.active
+	for first := 0; first < c.n; first += chunk {
+		n := min(chunk, c.n-first)
+		here := 0
+		for here < len(active) && int(active[here]) < first+n {
+			here++
+		}
+		stage := w.stage[first : first+n]
+		w.kept = w.kept[:0]
+		for _, j := range active[:here] {
+			w.kept = append(w.kept, float64(w.stage[j]))
+			for k := range w.m.Clocks {
+				w.kept = append(w.kept, c.reading[k][j])
+			}
+		}
+		for i := range stage {
+			stage[i] = 2
+		}
+		if !steady {
+			s0, s1, err := w.exposeChunk(first, n)
+			if err != nil {
+				return err
+			}
+			for k := range w.m.Clocks {
+				w.drawExponentials(k, first, n)
+				w.laterReadings(k, first, n, s0[k], s1[k])
+			}
+		}
+		kept := w.kept
+		for _, j := range active[:here] {
+			w.stage[j] = uint8(kept[0])
+			for k := range w.m.Clocks {
+				c.reading[k][j] = kept[1+k]
+			}
+			kept = kept[1+len(w.m.Clocks):]
+		}
+		active = active[here:]
+	}
+	return nil
+}
+
+// laterReadings is steadyReadings under the whole history of the leg.
+func (w *Workspace) laterReadings(k, first, n int, s0, s1 []float64) {
+	c := &w.c
+	t0, r0, r := w.past.piece(0, k)
+	t1, _, _ := w.past.piece(1, k)
+	x, birth, death := c.reading[k][first:first+n], c.birth[first:first+n], c.death[first:first+n]
+	s0, s1 = s0[:n], s1[:n]
+	for i, e := range x {
+		b := r0 + r*(birth[i]-t0)
+		d := r0 + r*(death[i]-t0)
+		if death[i] > t1 {
+			b, d = w.past.at(k, birth[i]), w.past.at(k, death[i])
+		}
+		x[i] = d + (e-s0[i]*(d-b))/s1[i]
+	}
 }
 
 // stageAt is the stage of an object that nothing has hit by date t.

@@ -152,6 +152,7 @@ func gatherColumn[T any](dst, src []T, pick []int32) {
 type asker struct {
 	m       *Model
 	streams map[string]draw.Stream
+	clocks  []draw.Stream // of each clock's process
 	sky     Sky
 	arena   *law.Arena
 	arenas  [3]law.Arena // the first is for all but exposures, which outlive the next question
@@ -195,6 +196,10 @@ func newAsker(m *Model) *asker {
 func (a *asker) begin(realisation uint64) {
 	for _, p := range law.Processes {
 		a.streams[p.Name] = a.m.stream(realisation, p.Name)
+	}
+	a.clocks = grown(a.clocks, len(a.m.Clocks))
+	for k := range a.m.Clocks {
+		a.clocks[k] = a.streams[a.m.Clocks[k].Process]
 	}
 }
 

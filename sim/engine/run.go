@@ -37,6 +37,7 @@ type Workspace struct {
 	s             [2][][]float64 // by stage, clock, object
 	few           map[uint32]few // of the objects on the clocks in a compact run
 	view          [2][][]float64
+	kept          []float64 // of the active objects, while their chunk is settled
 	active        []uint32
 	isActive      []bool
 	unspent       [maxClocks]float64

@@ -63,6 +63,18 @@ func (s *Scratch) FindAfter(entered int, lastEntry float64, exits []float64, fir
 	return s.apart(entered, lastEntry, exits, extent{n: len(exits), first: first, last: last, lastIndex: -1})
 }
 
+// FindLate is FindAfter for a population that early members have left before the
+// last entry, while more than early entries came after the last of those exits:
+// so the count is largest at the last entry, and only then.
+func (s *Scratch) FindLate(entered int, lastEntry float64, exits []float64, first, last float64, early int) Marks {
+	out := extent{n: len(exits), first: first, last: last, lastIndex: -1}
+	m := newMarks(entered, out)
+	m.Peak, m.PeakAt = entered-early, lastEntry
+	m.Half, m.Hundredth = s.orderStatistics(exits, out, entered-m.Peak/2, entered-m.Peak/100)
+	m.close(out)
+	return m
+}
+
 // apart finds the marks when everybody is in before the first leaves: they are
 // order statistics of the exits. (With negative dates it leaves the work to
 // search.)
