@@ -16,6 +16,7 @@ type flow struct {
 	exits, enters uint64    // populations
 	logs          uint64    // of the exits: those counted in log10 years while the date is in years
 	known, lent   bool      // lent: its dates are the population's
+	kept          int       // dates kept: dates[:kept]
 	dates, own    []float64 // own: memory of a small list, kept for the next run
 }
 
@@ -31,7 +32,7 @@ func (f *flows) reset(m *Model) {
 	f.table = grown(f.table, len(m.Set.Kinds)*statesAKind*f.causes)
 	for i := range f.table {
 		if x := &f.table[i]; x.known {
-			*x = flow{dates: x.own[:0], own: x.own[:0]}
+			*x = flow{dates: x.own, own: x.own}
 		}
 	}
 }
@@ -61,22 +62,25 @@ func (n *counts) move(x *flow, date float64) {
 	if x.exits == 0 {
 		return
 	}
-	if len(x.dates) == cap(x.dates) {
+	if x.kept == len(x.dates) {
 		n.moreRoom(x)
 	}
-	x.dates = append(x.dates, date)
+	x.dates[x.kept] = date
+	x.kept++
 }
 
 // moreRoom moves a flow's dates to where there is room for more: memory that is
 // lent if it is twice as large, else its own.
 func (n *counts) moreRoom(x *flow) {
-	k := len(x.dates)
+	k := x.kept
 	if last := len(n.spare) - 1; last >= 0 && k >= 4096 && cap(n.spare[last]) >= 2*k {
-		x.dates = append(n.spare[last][:0], x.dates...)
-		n.spare = n.spare[:last]
+		to := n.spare[last][:cap(n.spare[last])]
+		copy(to, x.dates)
+		x.dates, n.spare = to, n.spare[:last]
 		return
 	}
 	x.own = append(make([]float64, 0, max(64, k+k/2)), x.dates...)
+	x.own = x.own[:cap(x.own)]
 	x.dates = x.own
 }
 
@@ -114,12 +118,12 @@ func (n *counts) lendLargest(p int) {
 	var largest *flow
 	for i := range n.flows.table {
 		x := &n.flows.table[i]
-		if x.exits == 1<<p && x.logs == 0 && len(x.dates) > 0 && (largest == nil || x.count > largest.count) {
+		if x.exits == 1<<p && x.logs == 0 && x.kept > 0 && (largest == nil || x.count > largest.count) {
 			largest = x
 		}
 	}
 	if largest != nil {
-		n.exits[p], n.aliased = largest.dates, n.aliased|1<<p
+		n.exits[p], n.aliased = largest.dates[:largest.kept], n.aliased|1<<p
 		largest.lent = true
 	}
 }
@@ -138,9 +142,9 @@ func (n *counts) takeExits(p int, x *flow, cause uint8) {
 		return
 	}
 	at := len(n.exits[p])
-	n.exits[p] = append(n.exits[p], x.dates...)
+	n.exits[p] = append(n.exits[p], x.dates[:x.kept]...)
 	if logs {
-		num.Log10Into(n.exits[p][at:], x.dates)
+		num.Log10Into(n.exits[p][at:], x.dates[:x.kept])
 	}
 }
 
