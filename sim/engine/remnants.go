@@ -1,0 +1,111 @@
+package engine
+
+import (
+	"wane/sim/law"
+)
+
+// remnantsOf fills the second stage of the stars of r that u speaks for. id
+// gives the object of a row; nil: rows are contiguous.
+func (a *asker) remnantsOf(c *columns, r *rows, u *law.Use, id func(int) int) error {
+	stars, pick := a.spoken(u, r)
+	if stars.n == 0 {
+		return nil
+	}
+	words := wordsOf(u, "die")
+	var kinds, causes [256]uint8
+	for w, word := range words {
+		kinds[w], causes[w] = a.m.Set.Kind(word), a.m.cause(u.Card.Process, becameWord+word)
+	}
+	out, err := a.ask(u, "die", stars, drawU)
+	if err != nil {
+		return err
+	}
+	s := a.streams[u.Card.Process]
+	a.words, a.kinds = grown(a.words, stars.n), grown(a.kinds, stars.n)
+	if unsure := markSure(a.words, out, len(words)); unsure {
+		for i, w := range a.words {
+			if w == law.NoWord {
+				a.words[i] = uint8(pickWord(out, 0, len(words), i, s.Uniform(uint64(stars.idOf(i)), stars.genOf(i), drawPick)))
+			}
+		}
+	}
+	for i, w := range a.words {
+		a.kinds[i] = kinds[w]
+	}
+	// The kind asked about in remain is that of the remnant, while the table
+	// still says star for the other laws.
+	asStars := stars.kind
+	stars.kind = a.kinds
+	out, err = a.ask(u, "remain", stars, drawSize)
+	stars.kind = asStars
+	if err != nil {
+		return err
+	}
+	return a.keepRemnants(c, r, u, stars.n, pick, id, out, &causes)
+}
+
+// keepRemnants puts kinds, masses and causes of death into the columns.
+func (a *asker) keepRemnants(c *columns, r *rows, u *law.Use, n int, pick []int32, id func(int) int, out law.Batch, causes *[256]uint8) error {
+	mass, comp := out.Columns[0].Values, out.Columns[1].Words
+	if pick == nil && id == nil {
+		j := int(r.first)
+		copy(c.kind1[j:j+n], a.kinds)
+		copy(c.mass1[j:j+n], mass)
+		copy(c.comp1[j:j+n], comp)
+		died := c.died[j : j+n]
+		for i, w := range a.words {
+			died[i] = causes[w]
+		}
+		return nil
+	}
+	for i, k := range a.kinds {
+		j := at(pick, i)
+		if id != nil {
+			j = id(j)
+		} else {
+			j += int(r.first)
+		}
+		c.kind1[j], c.mass1[j], c.comp1[j] = k, mass[i], comp[i]
+		c.died[j] = causes[a.words[i]]
+	}
+	return nil
+}
+
+// markSure sets each row's word where one word has all the chance, and tells
+// whether there are rows, left at NoWord, that have none.
+func markSure(dst []uint8, out law.Batch, words int) (unsure bool) {
+	n := 0
+	for i, chance := range out.Columns[0].Values {
+		dst[i] = law.NoWord
+		if chance == 1 {
+			dst[i] = 0
+			n++
+		}
+	}
+	for w := 1; w < words && n < len(dst); w++ {
+		for i, chance := range out.Columns[w].Values {
+			if chance == 1 {
+				dst[i] = uint8(w)
+				n++
+			}
+		}
+	}
+	return n < len(dst)
+}
+
+// pickWord picks a word by its chances: the columns from first on, in order.
+func pickWord(out law.Batch, first, words, row int, u float64) int {
+	sum := 0.0
+	for w := range words {
+		sum += out.Columns[first+w].Values[row]
+		if u < sum {
+			return w
+		}
+	}
+	for w := words - 1; w > 0; w-- { // rounding: the last word with a chance
+		if out.Columns[first+w].Values[row] > 0 {
+			return w
+		}
+	}
+	return 0
+}
