@@ -61,7 +61,30 @@ func (m *Model) compileClocks() error {
 		}
 		first += len(u.Card.Clocks)
 	}
+	m.compileFates()
 	return m.compileRates(dynamics)
+}
+
+// compileFates finds out whether each cause of leaving sends objects one way
+// only, so that the cause alone tells where they are.
+func (m *Model) compileFates() {
+	m.oneFate = true
+	fates := map[uint8]law.Fate{m.allAdrift: law.FateAdrift}
+	claim := func(cause uint8, fate law.Fate) {
+		if before, ok := fates[cause]; ok && before != fate {
+			m.oneFate = false
+		}
+		fates[cause] = fate
+	}
+	for _, c := range m.Clocks {
+		claim(c.cause, c.Fate)
+	}
+	for _, d := range m.diverts {
+		claim(d.cause, law.FateCentral)
+	}
+	if m.frame != nil {
+		claim(m.stopCause, m.stopFate)
+	}
 }
 
 func (m *Model) compileDiverts(u *law.Use) error {

@@ -67,7 +67,7 @@ func (w *Workspace) endCentral(end float64) error {
 // dynamics in years, and no end of the run.
 func (w *Workspace) plainRun(end float64) bool {
 	c := &w.c
-	return c.chain == nil && c.origin == nil && c.gas == nil && end == never && !w.endsScheduled && w.env.unit == 0
+	return w.m.oneFate && c.chain == nil && c.origin == nil && c.gas == nil && end == never && !w.endsScheduled && w.env.unit == 0
 }
 
 // tally runs through all histories: books and populations, up to the end.

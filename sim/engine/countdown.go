@@ -10,7 +10,11 @@ import (
 // bound alone, where nothing but hits can happen. It must do what loop does; it
 // knows what loop has to find out: that the only value to change is a count,
 // and that a head of a clock stays its head until its object leaves.
+//
+// While it runs, an object has left when left says why; place follows at the
+// end. So a hit touches one list of bytes, not two.
 func (w *Workspace) countdown(ctx context.Context) error {
+	defer w.placeLeft()
 	for w.bound > 0 {
 		more, err := w.countWindow()
 		if err != nil || !more {
@@ -39,23 +43,23 @@ const fewClocks = 3
 
 // head is the first entry of a clock that still counts.
 type head struct {
-	id           uint32
-	place, cause uint8 // what a plain hit does
-	special      bool  // a hit may do something else
-	keys         []float64
-	ids          []uint32
-	pos          int // of the head
-	rate, rate0  float64
-	slope        float64
-	reading      float64
-	left         float64 // how far the clock has to go to the head
+	id          uint32
+	cause       uint8
+	special     bool // a hit may do more than take its object
+	keys        []float64
+	ids         []uint32
+	pos         int // of the head
+	rate, rate0 float64
+	slope       float64
+	reading     float64
+	left        float64 // how far the clock has to go to the head
 }
 
 // advance goes on to the next entry of an object still bound and returns how
 // far the clock has to go to it.
-func (h *head) advance(place []uint8, reading float64) (left float64) {
+func (h *head) advance(left []uint8, reading float64) (toGo float64) {
 	for h.pos++; h.pos < len(h.ids); h.pos++ {
-		if id := h.ids[h.pos]; place[id] == law.Bound {
+		if id := h.ids[h.pos]; left[id] == 0 {
 			h.id = id
 			return h.keys[h.pos] - reading
 		}
@@ -76,15 +80,12 @@ func (w *Workspace) heads() (heads [fewClocks]head) {
 		q, clock := &w.clocks[k], &m.Clocks[k]
 		h.keys, h.ids, h.pos = q.keys, q.ids, q.pos-1
 		h.rate, h.rate0 = e.Rates[k], e.rate0[k]
-		h.place, h.cause, h.special = placeGone, clock.cause, clock.Fate == law.FateCentral || w.c.turned != nil
-		if clock.Fate == law.FateAdrift {
-			h.place = law.Adrift
-		}
+		h.cause, h.special = clock.cause, clock.Fate == law.FateCentral || w.c.turned != nil
 		if len(m.declared) > 0 {
 			h.slope = e.slope[k][0]
 		}
 		h.reading = w.reading[k]
-		h.left = h.advance(w.c.place, h.reading)
+		h.left = h.advance(w.c.left, h.reading)
 	}
 	return heads
 }
@@ -98,7 +99,7 @@ func (w *Workspace) countWindow() (more bool, err error) {
 	left0, left1, left2 := h0.left, h1.left, h2.left
 	rate0, rate1, rate2 := h0.rate, h1.rate, h2.rate
 	reading0, reading1, reading2 := h0.reading, h1.reading, h2.reading
-	place, leave, left := c.place[:c.n], c.leave[:c.n], c.left[:c.n]
+	leave, left := c.leave[:c.n], c.left[:c.n]
 	declared := len(w.m.declared) > 0
 	date, weight, bound := w.base, w.m.Weight, w.bound
 	limit, _ := w.limits(never)
@@ -126,18 +127,18 @@ func (w *Workspace) countWindow() (more bool, err error) {
 		bound--
 		leave[i] = date
 		if hit.special {
-			place[i], left[i] = w.hitBound(first, i, date)
+			left[i] = w.hitBound(first, i, date)
 		} else {
-			place[i], left[i] = hit.place, hit.cause
+			left[i] = hit.cause
 		}
 		if h0.id == i {
-			left0 = h0.advance(place, reading0)
+			left0 = h0.advance(left, reading0)
 		}
 		if h1.id == i {
-			left1 = h1.advance(place, reading1)
+			left1 = h1.advance(left, reading1)
 		}
 		if h2.id == i {
-			left2 = h2.advance(place, reading2)
+			left2 = h2.advance(left, reading2)
 		}
 		number := weight * float64(bound)
 		if bound < fewObjects || declared && number0-number > moveToRefresh*number0 {
@@ -162,32 +163,48 @@ func (w *Workspace) countWindow() (more bool, err error) {
 	return more, nil
 }
 
-// hitBound tells where a hit takes an object, and why, and feeds the hole at
-// the centre.
-func (w *Workspace) hitBound(k int, i uint32, date float64) (place, cause uint8) {
-	clock := &w.m.Clocks[k]
-	fate := clock.Fate
-	cause = clock.cause
+// hitBound tells why a hit takes an object, and feeds the hole at the centre.
+func (w *Workspace) hitBound(k int, i uint32, date float64) (cause uint8) {
+	fate, cause := w.m.Clocks[k].Fate, w.m.Clocks[k].cause
 	if w.c.turned != nil && w.c.turned[i]&(2<<(2*k)) != 0 {
 		fate, cause = law.FateCentral, w.diverted(k)
 	}
-	switch fate {
-	case law.FateAdrift:
-		return law.Adrift, cause
-	case law.FateCentral:
+	if fate == law.FateCentral {
 		mass := w.m.Weight * w.c.mass1[i]
 		w.env.add(slotCentral, mass)
 		w.central.swallow(w, date, mass)
-		return law.Central, cause
 	}
-	return placeGone, cause
+	return cause
+}
+
+// placeLeft puts those that the countdown took where their cause sends them.
+func (w *Workspace) placeLeft() {
+	var to [256]uint8
+	for _, clock := range w.m.Clocks {
+		switch clock.Fate {
+		case law.FateAdrift:
+			to[clock.cause] = law.Adrift
+		case law.FateCentral:
+			to[clock.cause] = law.Central
+		default:
+			to[clock.cause] = placeGone
+		}
+	}
+	for _, d := range w.m.diverts {
+		to[d.cause] = law.Central
+	}
+	for i, cause := range w.c.left[:w.c.n] {
+		if cause != 0 && w.c.place[i] == law.Bound {
+			w.c.place[i] = to[cause]
+		}
+	}
 }
 
 // countsDown tells whether countdown may take over: only hits can happen, in
 // years, to objects in their second stage, and only the number bound matters.
 func (w *Workspace) countsDown() bool {
 	m := w.m
-	if len(m.Clocks) > fewClocks || m.encounter != nil || m.deathsMatter || len(m.declared) > 1 || w.env.unit != 0 || w.awaiting > 0 || !w.compact {
+	if len(m.Clocks) > fewClocks || !m.oneFate || m.encounter != nil || m.deathsMatter || len(m.declared) > 1 || w.env.unit != 0 || w.awaiting > 0 || !w.compact {
 		return false
 	}
 	if len(m.declared) == 1 && m.declared[0] != slotNumber {

@@ -57,7 +57,7 @@ func (w *Workspace) fillClocks() error {
 				l.ids = slices.Grow(l.ids, max(0, room-len(l.ids)))
 			}
 		}
-		if at != law.Bound || stage[i] == 0 || stage[i]&waiting != 0 {
+		if at != law.Bound || c.left[i] != 0 || stage[i] == 0 || stage[i]&waiting != 0 {
 			continue
 		}
 		var left [maxClocks]float64

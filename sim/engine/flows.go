@@ -39,6 +39,22 @@ func (f *flows) reset(m *Model) {
 
 func (f *flows) of(from state, cause uint8) *flow { return &f.table[int(from)*f.causes+int(cause)] }
 
+// recent is the flow that was looked up last in one place: it is nearly always
+// the next one too.
+type recent struct {
+	flow *flow
+	key  int
+}
+
+func (r *recent) is(from state, cause uint8) bool {
+	return r.flow != nil && r.key == int(from)<<8|int(cause)
+}
+
+func (r *recent) look(f *flows, from state, cause uint8) *flow {
+	r.flow, r.key = f.of(from, cause), int(from)<<8|int(cause)
+	return r.flow
+}
+
 // learn works out what a flow means. to is where it leads; years, that its
 // dates are in years.
 func (n *counts) learn(x *flow, from, to state, years bool) {
@@ -168,6 +184,7 @@ func (w *Workspace) tallyPlainChunk(first, size int) {
 	kind0, kind1 := c.kind0[first:first+size], c.kind1[first:first+size]
 	mass0, mass1 := c.mass0[first:first+size], c.mass1[first:first+size]
 	end, ended := c.end[first:first+size], c.ended[first:first+size]
+	var atDeath, atLeave, atEnd recent
 	for i, birth := range births {
 		leave := leaves[i]
 		if leave < birth {
@@ -197,10 +214,12 @@ func (w *Workspace) tallyPlainChunk(first, size int) {
 				w.rests(now, mass0[i])
 				continue
 			}
-			x := n.flows.of(now, why)
 			to := stateOf(kind1[i], 0, law.Founded) + now%statesAKind
-			if !x.known {
-				n.learn(x, now, to, true)
+			x := atDeath.flow
+			if !atDeath.is(now, why) {
+				if x = atDeath.look(&n.flows, now, why); !x.known {
+					n.learn(x, now, to, true)
+				}
 			}
 			n.move(x, death)
 			now = to
@@ -215,10 +234,12 @@ func (w *Workspace) tallyPlainChunk(first, size int) {
 				w.plainLeave(first+i, now, leave, mass)
 				continue
 			}
-			x := n.flows.of(now, left[i])
 			to := now + 2*law.Adrift
-			if !x.known {
-				n.learn(x, now, to, true)
+			x := atLeave.flow
+			if !atLeave.is(now, left[i]) {
+				if x = atLeave.look(&n.flows, now, left[i]); !x.known {
+					n.learn(x, now, to, true)
+				}
 			}
 			n.move(x, leave)
 			now = to
@@ -227,9 +248,11 @@ func (w *Workspace) tallyPlainChunk(first, size int) {
 			w.rests(now, mass)
 			continue
 		}
-		x = n.flows.of(now, ended[i])
-		if !x.known {
-			n.learn(x, now, stateGone, false)
+		x = atEnd.flow
+		if !atEnd.is(now, ended[i]) {
+			if x = atEnd.look(&n.flows, now, ended[i]); !x.known {
+				n.learn(x, now, stateGone, false)
+			}
 		}
 		n.move(x, end[i])
 		b.part.radiated += mass

@@ -67,6 +67,7 @@ type Model struct {
 	deathsMatter                    bool // a declared value changes when a star dies
 	stopFate                        law.Fate
 	stopCause, allAdrift            uint8
+	oneFate                         bool // a cause of leaving sends objects one way only
 	populations                     []population
 	anyState                        population    // every object
 	anyWarm                         bool          // some population has a condition on warmth

@@ -171,13 +171,26 @@ func (u *Use) checkWords(question, column string, in Batch, words []uint8) *Faul
 const chanceSlack = 1e-9
 
 func (u *Use) checkChances(question string, first int, want []output, in, out Batch) *Fault {
-	for row := range in.Rows {
-		sum := 0.0
-		for i := first; i < len(want) && want[i].rule == chance; i++ {
-			sum += out.Columns[i].Values[row]
+	last := first
+	for last < len(want) && want[last].rule == chance {
+		last++
+	}
+	var sums [256]float64
+	for from := 0; from < in.Rows; from += len(sums) {
+		part := sums[:min(len(sums), in.Rows-from)]
+		copy(part, out.Columns[first].Values[from:])
+		for _, c := range out.Columns[first+1 : last] {
+			for i, v := range c.Values[from : from+len(part)] {
+				part[i] += v
+			}
 		}
-		if !(sum > 1-chanceSlack && sum < 1+chanceSlack) {
-			return u.rowFault(question, "chances", row, in, fmt.Sprintf("a sum of %v", sum), "1")
+		if num.AllWithin(part, 1-chanceSlack, 1+chanceSlack) {
+			continue
+		}
+		for i, sum := range part {
+			if !(sum >= 1-chanceSlack && sum <= 1+chanceSlack) {
+				return u.rowFault(question, "chances", from+i, in, fmt.Sprintf("a sum of %v", sum), "1")
+			}
 		}
 	}
 	return nil
