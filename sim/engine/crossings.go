@@ -11,15 +11,10 @@ import (
 // below the threshold (+Inf: not within the stay), and whether it is above at
 // the start.
 func (w *Workspace) crossings(x *galaxy.Warmth, stays []stay, end float64) ([]float64, []bool, error) {
-	n := len(stays)
 	f, err := w.newFeeler(x, stays)
 	if err != nil {
 		return nil, nil, err
 	}
-	f.cross, f.warm = make([]float64, n), make([]bool, n)
-	f.low, f.high = make([]float64, n), make([]float64, n)
-	f.glow, f.ghigh = make([]float64, n), make([]float64, n)
-	fill(f.cross, never)
 	// What has fallen below in one stay is still below in the next, unless
 	// something keeps it warmer there, or the threshold is a floor, which may
 	// have fallen too.
@@ -48,7 +43,8 @@ func (f *feeler) solve(which []int32, end float64) error {
 	if len(which) == 0 {
 		return nil
 	}
-	ages := make([]float64, len(which))
+	f.ages = grown(f.ages, len(which))
+	ages := f.ages
 	for k, j := range which {
 		s := &f.stays[j]
 		f.low[j] = youngest
@@ -99,7 +95,8 @@ func (f *feeler) bracket(open []int32, end float64) ([]int32, error) {
 	if err != nil {
 		return nil, err
 	}
-	tops := make([]float64, len(open))
+	f.tops = grown(f.tops, len(open))
+	tops := f.tops
 	for k, j := range open {
 		tops[k] = max(last(&f.stays[j]), f.low[j])
 		if guess != nil && guess[k]+nodeMargin < tops[k] {
@@ -190,8 +187,10 @@ const (
 func (f *feeler) roots(open []int32) error {
 	open = append([]int32(nil), open...)
 	low, high, glow, ghigh := f.low, f.high, f.glow, f.ghigh
-	side := make([]int8, len(low))
-	ages := make([]float64, len(open))
+	side := f.side[:len(low)]
+	clear(side)
+	f.ages = grown(f.ages, len(open))
+	ages := f.ages
 	for try := 0; len(open) > 0 && try < 200; try++ {
 		for k, j := range open {
 			x := (low[j]*ghigh[j] - high[j]*glow[j]) / (ghigh[j] - glow[j])

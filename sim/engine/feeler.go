@@ -28,13 +28,15 @@ type feeler struct {
 	warm        []bool
 	low, high   []float64 // log10 ages of the bracket
 	glow, ghigh []float64
+	side        []int8
+	ages, tops  []float64
 }
 
 func (w *Workspace) newFeeler(x *galaxy.Warmth, stays []stay) (*feeler, error) {
-	f := &feeler{w: w, x: x, stays: stays, all: newRows(len(stays)), part: newRows(len(stays))}
+	f := &w.feel
+	f.w, f.x, f.stays, f.bare = w, x, stays, false
 	n := len(stays)
-	f.all.resize(n)
-	f.steady, f.goal = make([]float64, n), make([]float64, n)
+	f.resize(n)
 	for j, s := range stays {
 		i := s.i
 		f.all.id[j], f.all.gen[j] = i, 0
@@ -50,7 +52,6 @@ func (w *Workspace) newFeeler(x *galaxy.Warmth, stays []stay) (*feeler, error) {
 		f.goal[j] = f.goalOf(f.all.kind[j], f.all.mass[j])
 		least = min(least, f.goal[j])
 	}
-	f.dark = make([]bool, n)
 	from := -never
 	if w.sky != nil && x.Unit != "floor" {
 		from = w.sky.LogColderSince(least - skyUnfelt)
@@ -59,6 +60,21 @@ func (w *Workspace) newFeeler(x *galaxy.Warmth, stays []stay) (*feeler, error) {
 		f.dark[j] = x.Unit != "floor" && s.enter >= from
 	}
 	return f, nil
+}
+
+// resize readies the feeler's memory, which it keeps, for n stays.
+func (f *feeler) resize(n int) {
+	if f.all == nil {
+		f.all, f.part = newRows(n), newRows(n)
+	}
+	f.all.resize(n)
+	for _, x := range []*[]float64{&f.steady, &f.goal, &f.cross, &f.low, &f.high, &f.glow, &f.ghigh} {
+		*x = grown(*x, n)
+	}
+	f.dark, f.warm, f.side = grown(f.dark, n), grown(f.warm, n), grown(f.side, n)
+	clear(f.steady)
+	clear(f.warm)
+	fill(f.cross, never)
 }
 
 // goalOf is log10 of the temperature an object must be above, in K; for a

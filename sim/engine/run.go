@@ -42,6 +42,7 @@ type Workspace struct {
 	unspent       [maxClocks]float64
 	spared        [maxClocks]map[uint32]float64 // of those that nothing can hit at present
 	stayed        []stay
+	feel          feeler
 	warmNodes     map[galaxy.Warmth]map[nodeKey]float64
 	rho           [maxClocks][maxClocks]float64
 	broken        [maxClocks][maxClocks]bool

@@ -76,12 +76,8 @@ func (f *feeler) fillNodes(table map[nodeKey]float64, missing []nodeKey) error {
 	if n == 0 {
 		return nil
 	}
-	bare := &feeler{w: f.w, x: f.x, bare: true, all: newRows(n), part: newRows(n), stays: make([]stay, n)}
-	bare.all.resize(n)
-	bare.steady, bare.goal, bare.dark = make([]float64, n), make([]float64, n), make([]bool, n)
-	bare.cross, bare.warm = make([]float64, n), make([]bool, n)
-	bare.low, bare.high = make([]float64, n), make([]float64, n)
-	bare.glow, bare.ghigh = make([]float64, n), make([]float64, n)
+	bare := &feeler{w: f.w, x: f.x, bare: true, stays: make([]stay, n)}
+	bare.resize(n)
 	which := make([]int32, n)
 	for i, key := range missing {
 		r := bare.all
@@ -91,7 +87,7 @@ func (f *feeler) fillNodes(table map[nodeKey]float64, missing []nodeKey) error {
 		r.birthMass[i] = r.mass[i]
 		bare.goal[i], bare.dark[i] = f.goalOf(key.kind, r.mass[i]), true
 		bare.stays[i] = stay{entered: math.Inf(-1), enter: math.Inf(-1), leave: never}
-		bare.cross[i], which[i] = never, int32(i)
+		which[i] = int32(i)
 	}
 	if err := bare.solve(which, never); err != nil {
 		return err
