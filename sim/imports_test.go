@@ -51,7 +51,7 @@ sim/law/...              : testdata/... os os/exec math/rand/v2
 plugins                  : plugins/... sim/... testdata/... os os/exec math/rand/v2
 plugins/...              : sim/law/lawtest sim/draw sim/sky testdata/... os os/exec math/rand/v2
 scenarios                : sim/... plugins os
-sim/...                  : sim/law/lawtest plugins plugins/... scenarios testdata/... sim/engine/reference os os/exec math/rand/v2
+sim/...                  : sim/law/lawtest plugins plugins/... scenarios testdata/... sim/engine/reference os os/exec flag math/rand/v2
 testdata/...             : os
 cmd/...                  : scenarios plugins plugins/... testdata/... sim/... os os/exec math/rand/v2
 `
