@@ -36,3 +36,32 @@ func TestMemoryPerObject(t *testing.T) {
 		t.Logf("%.0f bytes an object", per)
 	}
 }
+
+// TestNoAllocationPerEvent: a realisation allocates by the chunk and by the
+// refresh, never by the object or the event.
+func TestNoAllocationPerEvent(t *testing.T) {
+	const n = 200_000
+	setup, err := toySetup(n, 1)
+	if err != nil {
+		t.Fatal(err)
+	}
+	m, err := Compile(setup)
+	if err != nil {
+		t.Fatal(err)
+	}
+	w := m.NewWorkspace()
+	realisation, events := uint64(0), int64(0)
+	run := func() {
+		o, err := w.Run(context.Background(), realisation)
+		if err != nil {
+			t.Fatal(err)
+		}
+		realisation++
+		events = o.Events
+	}
+	run() // takes the memory that every later run uses
+	run()
+	if allocations := testing.AllocsPerRun(3, run); allocations > 0.05*float64(events) {
+		t.Errorf("%.0f allocations in %d events", allocations, events)
+	}
+}
