@@ -2,21 +2,12 @@
 // away without a horizon.
 package curvature
 
-import (
-	"math"
-
-	"wane/sim/law"
-)
-
-type none struct{}
+import "wane/sim/law"
 
 // None is matter that does not evaporate.
-func None() law.Law { return none{} }
-
-func (none) Describe() law.Card {
-	return law.Card{
+func None() law.Law {
+	return law.NewIdle(law.Card{
 		Process: "curvature", Name: "none", Version: "1",
-		Idle:    true,
 		Summary: "only black holes evaporate",
 		Formula: "dM/dt = 0",
 		Domain:  "every body; the effect without a horizon is contested",
@@ -27,20 +18,5 @@ func (none) Describe() law.Card {
 			{Name: "foretell", Inputs: []string{"mass"}},
 		},
 		Wears: "loss",
-	}
-}
-
-func (none) Answer(question string, in law.Batch) (law.Batch, error) {
-	out := in.NewValues()
-	if question == "foretell" {
-		for i := range out {
-			out[i] = math.Inf(1)
-		}
-		return in.Answer(law.Numbers("wait", out)), nil
-	}
-	heat := in.NewValues()
-	for i := range out {
-		out[i], heat[i] = math.Inf(-1), 0
-	}
-	return in.Answer(law.Numbers("log10_rate", out), law.Numbers("heat", heat)), nil
+	})
 }

@@ -1,34 +1,17 @@
 // Package vacuumdecay holds the laws of whether and when the vacuum itself decays.
 package vacuumdecay
 
-import (
-	"math"
-
-	"wane/sim/law"
-)
-
-type none struct{}
+import "wane/sim/law"
 
 // None is an ending that never comes: the vacuum never decays.
-func None() law.Law { return none{} }
-
-func (none) Describe() law.Card {
-	return law.Card{
+func None() law.Law {
+	return law.NewIdle(law.Card{
 		Process: "vacuum-decay", Name: "none", Version: "1",
-		Idle:      true,
 		Summary:   "the vacuum never decays",
 		Formula:   "cumulative hazard 0",
 		Domain:    "exact if the vacuum is stable, which today's masses of the Higgs boson and the top quark allow at 1-2 sigma",
 		Sources:   []string{"Andreassen, A., Frost, W. & Schwartz, M. D. 2018, Phys. Rev. D 97, 056006 (what is left out)"},
 		Accepts:   law.Accepts{},
 		Questions: []law.Question{{Name: "end", Inputs: []string{"log10_date"}}},
-	}
-}
-
-func (none) Answer(_ string, in law.Batch) (law.Batch, error) {
-	hazard := in.NewValues()
-	for i := range hazard {
-		hazard[i] = math.Inf(-1)
-	}
-	return in.Answer(law.Numbers("log10_hazard", hazard)), nil
+	})
 }
