@@ -27,7 +27,8 @@ type document struct {
 }
 
 // parse reads a whole document. The second result is false when the file is
-// no text or holds nothing, so that nothing else is worth saying about it.
+// no text, holds nothing or has syntax errors: then it may give more than what
+// was read, and nothing should be called missing.
 func parse(r *report, file string, data []byte) (*node, bool) {
 	d := &document{report: r, file: file, data: bytes.TrimPrefix(data, []byte("\xef\xbb\xbf"))}
 	d.root = newTable(d.place(0))
@@ -36,12 +37,12 @@ func parse(r *report, file string, data []byte) (*node, bool) {
 	}
 	d.open = d.root
 	before := len(r.faults)
-	d.read()
+	sound := d.read()
 	if len(d.root.names) == 0 && len(r.faults) == before {
 		d.fault(d.place(0), `the file is empty: want a scenario, at the least base = "lantern-reach"`)
 		return d.root, false
 	}
-	return d.root, true
+	return d.root, sound
 }
 
 // isText reports the first byte that no text holds.
@@ -80,9 +81,11 @@ func (d *document) place(offset int) place {
 	return place{d.file, d.line, d.column}
 }
 
-func (d *document) read() {
+// read tells whether the file has no syntax errors.
+func (d *document) read() bool {
 	var p unstable.Parser
-	for start, faults := 0, 0; start < len(d.data); {
+	faults := 0
+	for start := 0; start < len(d.data); {
 		// The full slice expression keeps offsets: the parser tells them
 		// apart by capacity.
 		part := d.data[start:len(d.data):len(d.data)]
@@ -92,7 +95,7 @@ func (d *document) read() {
 		}
 		err := p.Error()
 		if err == nil {
-			return
+			break
 		}
 		at := start
 		var pe *unstable.ParserError
@@ -102,7 +105,7 @@ func (d *document) read() {
 		d.fault(d.place(at), "%s", strings.TrimSpace(err.Error()))
 		if faults++; faults == maxSyntaxFaults {
 			d.fault(d.place(at), "too many syntax errors: the rest of the file is not read")
-			return
+			break
 		}
 		line := bytes.LastIndexByte(d.data[:at], '\n') + 1
 		if bytes.HasPrefix(bytes.TrimSpace(d.data[line:at]), []byte("[")) || at < len(d.data) && d.data[at] == '[' {
@@ -110,10 +113,11 @@ func (d *document) read() {
 		}
 		next := bytes.IndexByte(d.data[at:], '\n')
 		if next < 0 {
-			return
+			break
 		}
 		start = at + next + 1
 	}
+	return faults == 0
 }
 
 func (d *document) expression(start int, e *unstable.Node) {

@@ -107,6 +107,11 @@ x.toml:12:9: galaxy.radius: got a table, want a number with its unit, such as "1
 			`x.toml:1:1: galaxy.objects is not given: want objects = 2e11 in [galaxy], or a base that has it
 x.toml:1:1: galaxy.radius is not given: want radius = "10 kpc" in [galaxy], or a base that has it`,
 		},
+		"syntax errors, which may hide what is missing": {
+			"base = \n[galaxy\n",
+			`x.toml:1:8: unexpected character U+000A at start of value
+x.toml:2:8: expected ']' to close table name`,
+		},
 		"too large a sample": {
 			"base = \"reach\"\n[galaxy]\nobjects = 100",
 			`x.toml:3:11: galaxy.sample: 100000 objects: want at most the 100 that the galaxy has (galaxy.objects)`,

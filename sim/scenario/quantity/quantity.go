@@ -1,6 +1,7 @@
 package quantity
 
 import (
+	"errors"
 	"fmt"
 	"math"
 	"strings"
@@ -98,6 +99,15 @@ func (q Quantity) to(unit string) (factor float64, exponent int, err error) {
 	return factor, exponent, nil
 }
 
+// wanted says what is allowed in place of an unknown unit.
+func wanted(unit string) string {
+	u, err := ParseUnit(unit)
+	if err != nil || u.dim == pure {
+		return "a pure number, without unit"
+	}
+	return fmt.Sprintf("%s, such as %q", u.dim, "1 "+Shown(unit))
+}
+
 // example is the text with the unit it lacks.
 func example(text, unit string) string { return strings.TrimSpace(text) + " " + Shown(unit) }
 
@@ -124,6 +134,9 @@ func shift(v float64, n int) float64 {
 // unit is empty, which means a pure number.
 func ParseFor(text, unit string, log10 bool) (float64, error) {
 	q, err := Parse(text)
+	if stray := (unknownUnit{}); errors.As(err, &stray) && stray.meant == "" {
+		return 0, fmt.Errorf("%w: want %s", err, wanted(unit))
+	}
 	if err != nil {
 		return 0, err
 	}

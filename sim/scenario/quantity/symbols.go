@@ -82,6 +82,16 @@ func find(name string) (Unit, bool) {
 	return Unit{}, false
 }
 
+// unknownUnit is a unit that is not known, and the one that may be meant.
+type unknownUnit struct{ name, meant string }
+
+func (u unknownUnit) Error() string {
+	if u.meant == "" {
+		return fmt.Sprintf("unknown unit %q", u.name)
+	}
+	return fmt.Sprintf("unknown unit %q (did you mean %q?)", u.name, u.meant)
+}
+
 // unknown names the unit it doesn't know and the one that may be meant.
 func unknown(name, rest string) error {
 	if name == "" {
@@ -93,14 +103,14 @@ func unknown(name, rest string) error {
 		"gram": "g", "kilogram": "kg", "sun": "Msun", "suns": "Msun", "lightyear": "ly", "watt": "W", "tonne": "t", "percent": "%",
 	}
 	if s, ok := plain[strings.ToLower(name)]; ok {
-		return fmt.Errorf("unknown unit %q (did you mean %q?)", name, s)
+		return unknownUnit{name, s}
 	}
 	for _, s := range symbols() {
 		for _, p := range prefixes {
 			if (p.name == "" || s.prefixes) && strings.EqualFold(p.name+s.name, name) {
-				return fmt.Errorf("unknown unit %q (did you mean %q?)", name, p.name+s.name)
+				return unknownUnit{name, p.name + s.name}
 			}
 		}
 	}
-	return fmt.Errorf("unknown unit %q", name)
+	return unknownUnit{name: name}
 }
