@@ -73,7 +73,7 @@ func (w *Workspace) heads() (heads [fewClocks]head) {
 	m, e := w.m, w.env
 	for k := range heads {
 		h := &heads[k]
-		*h = head{left: never, rate: 1, id: maxObjects}
+		*h = head{left: never, rate: 1, rate0: 1, id: maxObjects}
 		if k >= len(m.Clocks) {
 			continue
 		}
@@ -88,6 +88,19 @@ func (w *Workspace) heads() (heads [fewClocks]head) {
 		h.left = h.advance(w.c.left, h.reading)
 	}
 	return heads
+}
+
+// rates prepares the rates of the coming window.
+func (w *Workspace) rates(heads *[fewClocks]head, number float64) *countRates {
+	if w.ahead == nil {
+		w.ahead = &countRates{series: nearNumbers}
+	}
+	c := w.ahead
+	c.weight, c.number = w.m.Weight, number
+	for k := range heads {
+		c.rate0[k], c.slope[k] = heads[k].rate0, heads[k].slope
+	}
+	return c
 }
 
 // countWindow takes hits until the rates must be asked again (more), or until
@@ -107,12 +120,15 @@ func (w *Workspace) countWindow() (more bool, err error) {
 	if declared {
 		number0 = e.base[0]
 	}
+	rates := w.rates(&heads, number0)
+	slow0, slow1, slow2 := 1/rate0, 1/rate1, 1/rate2
+	ahead, filled := 0, 0 // how far into the block of rates
 	for bound > 0 {
-		hit, first, step := h0, 0, left0/rate0
-		if d := left1 / rate1; d < step {
+		hit, first, step := h0, 0, left0*slow0
+		if d := left1 * slow1; d < step {
 			hit, first, step = h1, 1, d
 		}
-		if d := left2 / rate2; d < step {
+		if d := left2 * slow2; d < step {
 			hit, first, step = h2, 2, d
 		}
 		if !(date+step <= limit) || step == never {
@@ -140,16 +156,19 @@ func (w *Workspace) countWindow() (more bool, err error) {
 		if h2.id == i {
 			left2 = h2.advance(left, reading2)
 		}
-		number := weight * float64(bound)
-		if bound < fewObjects || declared && number0-number > moveToRefresh*number0 {
+		if bound < fewObjects || declared && number0-weight*float64(bound) > moveToRefresh*number0 {
 			more = true
 			break
 		}
 		if declared {
-			x := lnNear((number - number0) / number0)
-			rate0 = h0.rate0 * expNear(h0.slope*x)
-			rate1 = h1.rate0 * expNear(h1.slope*x)
-			rate2 = h2.rate0 * expNear(h2.slope*x)
+			if ahead == filled {
+				ahead, filled = 0, rates.fill(bound, int(moveToRefresh*float64(bound))+2)
+			}
+			a := ahead % rateBlock // no bounds to check
+			rate0, slow0 = rates.rate[0][a], rates.slow[0][a]
+			rate1, slow1 = rates.rate[1][a], rates.slow[1][a]
+			rate2, slow2 = rates.rate[2][a], rates.slow[2][a]
+			ahead++
 		}
 	}
 	w.events += int64(w.bound - bound)

@@ -6,7 +6,6 @@ import (
 	"strings"
 
 	"wane/sim/law"
-	"wane/sim/num"
 )
 
 // Refresh rules of the model.
@@ -259,21 +258,4 @@ func (e *Environment) update() {
 		}
 		e.Rates[k] = e.rate0[k] * expNear(x)
 	}
-}
-
-// lnNear is ln(1+x) to the fifth order: for the |x| <= 0.01 of a window the
-// error is below 2e-13.
-func lnNear(x float64) float64 {
-	x2 := x * x
-	return x - x2*(1./2-x*(1./3)+x2*(1./4-x*(1./5)))
-}
-
-// expNear is e^x: to the fifth order for the small x of a window (|x| <= 0.05,
-// error below 3e-11), the full function beyond.
-func expNear(x float64) float64 {
-	if x > 0.05 || x < -0.05 {
-		return num.Exp(x)
-	}
-	x2 := x * x
-	return 1 + x + x2*(1./2+x*(1./6)+x2*(1./24+x*(1./120)))
 }

@@ -1,6 +1,7 @@
 package engine
 
 import (
+	"bytes"
 	"fmt"
 	"math"
 
@@ -101,9 +102,13 @@ func (a *asker) foundLives(c *columns, r *rows) error {
 		a.kept = grown(a.kept, stars.n)
 		num.Exp10Into(a.kept, out.Columns[0].Values)
 		death, birth := c.death[first:first+n], c.birth[first:first+n]
-		for i, wait := range a.kept {
-			j := at(pick, i)
-			death[j] = birth[j] + wait
+		if pick == nil {
+			for i, wait := range a.kept {
+				death[i] = birth[i] + wait
+			}
+		}
+		for i, j := range pick {
+			death[j] = birth[j] + a.kept[i]
 		}
 	}
 	a.latest = never
@@ -116,9 +121,11 @@ func (a *asker) foundLives(c *columns, r *rows) error {
 			return err
 		}
 	}
-	for i, k := range c.kind0[first : first+n] {
-		if j := first + i; k == law.Star && c.died[j] == 0 && c.death[j] < never {
-			return fmt.Errorf("engine: no law says what a star of %v Msun leaves", c.mass0[j])
+	if bytes.IndexByte(c.died[first:first+n], 0) >= 0 { // not all are stars with an end
+		for i, k := range c.kind0[first : first+n] {
+			if j := first + i; k == law.Star && c.died[j] == 0 && c.death[j] < never {
+				return fmt.Errorf("engine: no law says what a star of %v Msun leaves", c.mass0[j])
+			}
 		}
 	}
 	return a.foundProspects(c, first, n, starEnd)
@@ -149,38 +156,23 @@ func (m *Model) starsEnd() bool {
 
 // foundProspects completes the second stage and asks what ends it.
 func (a *asker) foundProspects(c *columns, first, n int, starEnd []prospect) error {
-	latest := c.lastDeath
-	kind1, mass1, comp1 := c.kind1[first:first+n], c.mass1[first:first+n], c.comp1[first:first+n]
-	for i, died := range c.died[first : first+n] {
-		j := first + i
-		if died == 0 {
-			kind1[i], mass1[i], comp1[i] = c.kind0[j], c.mass0[j], law.Hydrogen
+	kind0, died := c.kind0[first:first+n], c.died[first:first+n]
+	if bytes.IndexByte(died, 0) >= 0 {
+		kind1, mass1, comp1 := c.kind1[first:first+n], c.mass1[first:first+n], c.comp1[first:first+n]
+		for i, why := range died {
+			if why == 0 {
+				kind1[i], mass1[i], comp1[i] = kind0[i], c.mass0[first+i], law.Hydrogen
+			}
 		}
-		if starEnd != nil && c.kind0[j] == law.Star {
-			if err := a.cutShort(c, j, starEnd[j-first]); err != nil {
+	}
+	for i, p := range starEnd {
+		if kind0[i] == law.Star {
+			if err := a.cutShort(c, first+i, p); err != nil {
 				return err
 			}
 		}
-		if d := c.death[j]; d > latest {
-			if d <= math.MaxFloat64 {
-				latest = d
-			} else {
-				c.immortal = true
-				latest = max(latest, c.birth[j])
-			}
-		}
 	}
-	c.lastDeath = latest
-	sum := 0.0
-	for _, x := range c.mass0[first : first+n] {
-		sum += x
-	}
-	c.founded.add(sum)
-	for _, b := range c.birth[first : first+n] {
-		if b < c.earliest {
-			c.earliest = b
-		}
-	}
+	latest := c.founding(first, n)
 	r := a.secondStage(c, first, n)
 	since := func(i int) float64 { return num.Log10(c.death[first+i]) }
 	a.latest = num.Log10(latest)
@@ -199,6 +191,43 @@ func (a *asker) foundProspects(c *columns, first, n int, starEnd []prospect) err
 		c.noteGas(uint32(first+i), 0, p)
 	}
 	return a.foundChains(c, r, first, ps)
+}
+
+// founding takes the mass of objects first .. first+n-1 and the earliest of
+// their births into account, and returns the latest date so far at which one
+// entered its second stage.
+func (c *columns) founding(first, n int) (latest float64) {
+	latest = c.lastDeath
+	for i, d := range c.death[first : first+n] {
+		if d > latest {
+			if d <= math.MaxFloat64 {
+				latest = d
+			} else {
+				c.immortal = true
+				latest = max(latest, c.birth[first+i])
+			}
+		}
+	}
+	c.lastDeath = latest
+	for _, b := range c.birth[first : first+n] {
+		if b < c.earliest {
+			c.earliest = b
+		}
+	}
+	// Four sums side by side, since each has to wait for its last addition.
+	var part [4]float64
+	mass := c.mass0[first : first+n]
+	for ; len(mass) >= 4; mass = mass[4:] {
+		part[0] += mass[0]
+		part[1] += mass[1]
+		part[2] += mass[2]
+		part[3] += mass[3]
+	}
+	for _, x := range mass {
+		part[0] += x
+	}
+	c.founded.add((part[0] + part[1]) + (part[2] + part[3]))
+	return latest
 }
 
 // cutShort ends a star's life by a prospect that comes before its death.

@@ -1,6 +1,8 @@
 package engine
 
 import (
+	"bytes"
+
 	"wane/sim/law"
 )
 
@@ -74,23 +76,20 @@ func (a *asker) keepRemnants(c *columns, r *rows, u *law.Use, n int, pick []int3
 // markSure sets each row's word where one word has all the chance, and tells
 // whether there are rows, left at NoWord, that have none.
 func markSure(dst []uint8, out law.Batch, words int) (unsure bool) {
-	n := 0
-	for i, chance := range out.Columns[0].Values {
+	for i := range dst {
 		dst[i] = law.NoWord
-		if chance == 1 {
-			dst[i] = 0
-			n++
-		}
 	}
-	for w := 1; w < words && n < len(dst); w++ {
-		for i, chance := range out.Columns[w].Values {
-			if chance == 1 {
-				dst[i] = uint8(w)
-				n++
+	for w := range words {
+		word := uint8(w)
+		chances := out.Columns[w].Values[:len(dst)]
+		for i, now := range dst {
+			if chances[i] == 1 {
+				now = word
 			}
+			dst[i] = now
 		}
 	}
-	return n < len(dst)
+	return bytes.IndexByte(dst, law.NoWord) >= 0
 }
 
 // pickWord picks a word by its chances: the columns from first on, in order.

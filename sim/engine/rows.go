@@ -79,16 +79,21 @@ const (
 	hasMass
 	hasBirthMass
 	hasMetals
-	hasAll = 1<<iota - 1
+	hasDraws // number and generation, which key the object's draws
+	hasAll   = 1<<iota - 1
 )
 
 var columnBits = map[string]columnSet{"kind": hasKind, "composition": hasComposition, "place": hasPlace, "origin": hasOrigin,
-	"mass": hasMass, "birth_mass": hasBirthMass, "metals": hasMetals, "radius": hasKind | hasMass}
+	"mass": hasMass, "birth_mass": hasBirthMass, "metals": hasMetals, "radius": hasKind | hasMass, "u": hasDraws, "e": hasDraws}
 
 // reads is the set of object columns that any question of a law reads; kind
-// and mass are always among them, for the engine's own use.
+// and mass are always among them, for the engine's own use, and for all but
+// wearing laws what keys the draws, for what the engine decides by a draw.
 func reads(u *law.Use) columnSet {
 	set := hasKind | hasMass
+	if p, _ := law.ProcessNamed(u.Card.Process); p.Role != law.Wearing {
+		set |= hasDraws
+	}
 	for _, q := range u.Card.Questions {
 		for _, in := range q.Inputs {
 			set |= columnBits[in]
@@ -100,15 +105,10 @@ func reads(u *law.Use) columnSet {
 // gather fills r with the picked rows of from: the wanted columns only.
 func (r *rows) gather(from *rows, pick []int32, want columnSet) {
 	r.resize(len(pick))
-	for i, j := range pick {
-		r.id[i] = from.idOf(int(j))
-	}
-	if from.gen == nil {
-		for i := range r.gen {
-			r.gen[i] = from.gen0
-		}
+	if want&hasDraws != 0 {
+		r.gatherKeys(from, pick)
 	} else {
-		gatherColumn(r.gen, from.gen, pick)
+		r.id, r.gen = r.id[:0], r.gen[:0]
 	}
 	if want&hasKind != 0 {
 		gatherColumn(r.kind, from.kind, pick)
@@ -135,6 +135,20 @@ func (r *rows) gather(from *rows, pick []int32, want columnSet) {
 		c := law.Column{Name: o.Name, Values: make([]float64, len(pick))}
 		gatherColumn(c.Values, o.Values, pick)
 		r.other = append(r.other, c)
+	}
+}
+
+// gatherKeys gathers what keys the draws.
+func (r *rows) gatherKeys(from *rows, pick []int32) {
+	for i, j := range pick {
+		r.id[i] = from.idOf(int(j))
+	}
+	if from.gen == nil {
+		for i := range r.gen {
+			r.gen[i] = from.gen0
+		}
+	} else {
+		gatherColumn(r.gen, from.gen, pick)
 	}
 }
 

@@ -57,6 +57,7 @@ type Workspace struct {
 	wear          wearing
 	meets         meetings
 	books         books
+	ahead         *countRates // of the countdown
 	counts        counts
 	reach         *reach // how far the ends of the real number reach; nil: not asked yet
 }

@@ -25,15 +25,20 @@ func (m *Model) compileSimple() {
 // partition sorts the rows by the wearing law that speaks for them.
 func (a *asker) partition(r *rows) {
 	a.parts = grown(a.parts, len(a.m.wearing))
+	var n [256]int
 	for w := range a.parts {
-		a.parts[w] = a.parts[w][:0]
+		a.parts[w] = grown(a.parts[w], r.n)
 	}
 	for i, k := range r.kind[:r.n] {
 		w := a.m.wornBy[k]
 		if w < 0 || a.m.wornInPart && !a.m.wearing[w].Speaks(k, r.mass[i], r.metals[i]) {
 			continue
 		}
-		a.parts[w] = append(a.parts[w], int32(i))
+		a.parts[w][n[uint8(w)]] = int32(i)
+		n[uint8(w)]++
+	}
+	for w := range a.parts {
+		a.parts[w] = a.parts[w][:n[w]]
 	}
 }
 

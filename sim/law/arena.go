@@ -4,10 +4,12 @@ package law
 // Reset, so that asking allocates nothing once it has run for a while. It is
 // for one goroutine. The zero value is ready.
 type Arena struct {
-	values     []float64
-	words      []uint8
-	usedValues int
-	usedWords  int
+	values      []float64
+	words       []uint8
+	columns     []Column
+	usedValues  int
+	usedWords   int
+	usedColumns int
 }
 
 // With returns b with its answer columns lent by a.
@@ -35,5 +37,18 @@ func (a *Arena) Words(n int) []uint8 {
 	return w
 }
 
+// keep lends a list of columns with the given ones in it.
+func (a *Arena) keep(columns []Column) []Column {
+	n := len(columns)
+	if a.usedColumns+n > len(a.columns) {
+		a.columns = make([]Column, max(2*len(a.columns), 8*n))
+		a.usedColumns = 0
+	}
+	c := a.columns[a.usedColumns : a.usedColumns+n : a.usedColumns+n]
+	a.usedColumns += n
+	copy(c, columns)
+	return c
+}
+
 // Reset takes back everything lent so far.
-func (a *Arena) Reset() { a.usedValues, a.usedWords = 0, 0 }
+func (a *Arena) Reset() { a.usedValues, a.usedWords, a.usedColumns = 0, 0, 0 }

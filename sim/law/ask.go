@@ -175,15 +175,13 @@ func (u *Use) checkChances(question string, first int, want []output, in, out Ba
 	for last < len(want) && want[last].rule == chance {
 		last++
 	}
-	var sums [256]float64
-	for from := 0; from < in.Rows; from += len(sums) {
-		part := sums[:min(len(sums), in.Rows-from)]
-		copy(part, out.Columns[first].Values[from:])
-		for _, c := range out.Columns[first+1 : last] {
-			for i, v := range c.Values[from : from+len(part)] {
-				part[i] += v
-			}
-		}
+	var columns [][]float64
+	for _, c := range out.Columns[first:last] {
+		columns = append(columns, c.Values)
+	}
+	var s sums
+	for from := 0; from < in.Rows; from += len(s) {
+		part := s.of(columns, from, min(from+len(s), in.Rows))
 		if num.AllWithin(part, 1-chanceSlack, 1+chanceSlack) {
 			continue
 		}

@@ -27,11 +27,15 @@ func (u *Use) checkMass(question string, in, out Batch) *Fault {
 	if had == nil {
 		return nil // the law does not read the mass
 	}
-	for row := range in.Rows {
-		limit, mass := rowSum(had, row), rowSum(has, row)
-		if !(mass <= limit*(1+massSlack)) {
-			return u.rowFault(question, strings.Join(after, " + "), row, in,
-				fmt.Sprintf("%v solMass", mass), fmt.Sprintf("no more than the %v solMass there was", limit))
+	var limits, masses sums
+	for from := 0; from < in.Rows; from += len(limits) {
+		to := min(from+len(limits), in.Rows)
+		limit := limits.of(had, from, to)
+		for i, mass := range masses.of(has, from, to) {
+			if !(mass <= limit[i]*(1+massSlack)) {
+				return u.rowFault(question, strings.Join(after, " + "), from+i, in,
+					fmt.Sprintf("%v solMass", mass), fmt.Sprintf("no more than the %v solMass there was", limit[i]))
+			}
 		}
 	}
 	return nil
@@ -48,10 +52,20 @@ func columnsNamed(b Batch, names []string) [][]float64 {
 	return out
 }
 
-func rowSum(columns [][]float64, row int) float64 {
-	sum := 0.0
-	for _, c := range columns {
-		sum += c[row]
+// sums are the sums of some columns, for a few rows at a time.
+type sums [256]float64
+
+// of returns the sums of rows from .. to-1. They are to be read only.
+func (s *sums) of(columns [][]float64, from, to int) []float64 {
+	if len(columns) == 1 {
+		return columns[0][from:to]
 	}
-	return sum
+	part := s[:to-from]
+	copy(part, columns[0][from:to])
+	for _, c := range columns[1:] {
+		for i, v := range c[from:to] {
+			part[i] += v
+		}
+	}
+	return part
 }

@@ -91,7 +91,10 @@ func (b Batch) NewWords() []uint8 {
 
 // Answer builds the answer to b from columns made by NewValues or NewWords.
 func (b Batch) Answer(columns ...Column) Batch {
-	return Batch{Rows: b.Rows, Columns: columns}
+	if b.arena != nil {
+		return Batch{Rows: b.Rows, Columns: b.arena.keep(columns)}
+	}
+	return Batch{Rows: b.Rows, Columns: append([]Column(nil), columns...)}
 }
 
 // Numbers names a column of numbers.
