@@ -130,7 +130,7 @@ func (b *builder) run(root *node) {
 		b.until(n)
 	}
 	if n := root.field("realisations"); n != nil {
-		if v, ok := b.whole("realisations", n, 1, maxRealisations); ok {
+		if v, ok := b.whole("realisations", n, 1, MaxRealisations); ok {
 			b.s.Realisations = int(v)
 			b.set("realisations", n.at)
 		}

@@ -6,11 +6,13 @@ import (
 	"wane/sim/scenario/quantity"
 )
 
+// MaxHeld is how many objects can be held one by one, about 11 GB of them.
+const MaxHeld = 100_000_000
+
 // Ranges of the galaxy's values. They are wide: from a handful of objects in
 // a fraction of a parsec to more than any galaxy known.
 const (
 	maxObjects     = 1e15
-	maxHeld        = 100_000_000 // about 11 GB; beyond it objects cannot be held one by one
 	manyHeld       = 10_000_000
 	minRadius      = 1e-3 // pc
 	maxRadius      = 1e7  // pc
@@ -30,7 +32,7 @@ func (b *builder) galaxyValue(name string, n *node) {
 		}
 	case "sample":
 		var v uint64
-		if v, ok = b.whole(key, n, 1, maxHeld); ok {
+		if v, ok = b.whole(key, n, 1, MaxHeld); ok {
 			b.s.Sample = int64(v)
 		}
 	case "radius":
@@ -78,7 +80,7 @@ func (b *builder) galaxyWhole(top place) {
 	if s.Sample == 0 {
 		at = b.at["galaxy.objects"]
 		switch {
-		case s.Objects > maxHeld:
+		case s.Objects > MaxHeld:
 			b.fault(at, "galaxy.objects: %s objects cannot be held one by one (at most 1e8): want a sample, such as sample = 100_000", quantity.Format(s.Objects, ""))
 			return
 		case s.Objects != math.Trunc(s.Objects):

@@ -60,7 +60,7 @@ func (b *builder) overrideRun(o Overrides) {
 		return &node{form: aLoose, at: at, key: at, text: text}
 	}
 	if o.Realisations != 0 {
-		if v, ok := b.whole("realisations", loose("--realisations", fmt.Sprint(o.Realisations)), 1, maxRealisations); ok {
+		if v, ok := b.whole("realisations", loose("--realisations", fmt.Sprint(o.Realisations)), 1, MaxRealisations); ok {
 			b.s.Realisations = int(v)
 			b.set("realisations", place{file: "--realisations"})
 		}

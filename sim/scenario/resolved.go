@@ -74,11 +74,11 @@ func (s *Scenario) Resolve(reg *law.Registry) Resolved {
 		r.Settings = append(r.Settings, Setting{Name: name, Value: value, Unit: unit, Doc: doc, Range: span, From: s.origin(name)})
 	}
 	add("galaxy.objects", quantity.Format(s.Objects, ""), "", "objects of the real galaxy", spanOf("", false, 1, maxObjects))
-	add("galaxy.sample", held, "", "objects held one by one", fmt.Sprintf("1 .. %d, at most galaxy.objects", maxHeld))
+	add("galaxy.sample", held, "", "objects held one by one", fmt.Sprintf("1 .. %d, at most galaxy.objects", MaxHeld))
 	add("galaxy.radius", quantity.Format(s.Radius, "pc"), "pc", "holds half the mass at the start", spanOf("pc", false, minRadius, maxRadius))
 	add("galaxy.central-mass", quantity.Format(s.CentralMass, "solMass"), "solMass", "of the central hole at the start; 0: none", spanOf("solMass", false, 0, maxCentralMass))
 	add("until", quantity.FormatLog10(s.Until, "yr"), "yr", "the run ends, since the Big Bang", `>= 1 yr, or "never"`)
-	add("realisations", strconv.Itoa(s.Realisations), "", "random histories", fmt.Sprintf("1 .. %d", maxRealisations))
+	add("realisations", strconv.Itoa(s.Realisations), "", "random histories", fmt.Sprintf("1 .. %d", MaxRealisations))
 	add("seed", strconv.FormatUint(s.Seed, 10), "", "of the random numbers", "0 .. 2^64 - 1")
 	for _, p := range law.Processes {
 		if name, ok := s.Laws[p.Name]; ok {

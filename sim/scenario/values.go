@@ -9,7 +9,8 @@ import (
 	"wane/sim/scenario/quantity"
 )
 
-const maxRealisations = 1_000_000
+// MaxRealisations is how many realisations a run may have at most.
+const MaxRealisations = 1_000_000
 
 // quantity reads a value with a unit, as its log10 if asked, and checks that
 // low <= value <= high (both log10 if asked).

@@ -62,7 +62,7 @@ process/name', without the log10_ of their names.`,
 			return nil
 		},
 	}
-	c.Flags().StringVar(&question, "question", "", "ask this question of the card only (default: every one the inputs suffice for)")
+	c.Flags().StringVar(&question, "question", "", "ask this `question` of the card only (default: all that can be answered)")
 	return c
 }
 

@@ -42,7 +42,7 @@ func (p *Program) check(s *settings) *cobra.Command {
 			return resolved.Print(p.Out)
 		},
 	}
-	c.Flags().StringArrayVar(&laws, "law", nil, "use this law, as process=name (may be repeated)")
-	c.Flags().StringArrayVar(&sets, "set", nil, "set a parameter, as process.parameter=value or galaxy.radius=8kpc (may be repeated)")
+	c.Flags().StringArrayVar(&laws, "law", nil, "use this law: `process=name` (repeatable)")
+	c.Flags().StringArrayVar(&sets, "set", nil, "set `name=value`: process.parameter or galaxy.radius=8kpc (repeatable)")
 	return c
 }

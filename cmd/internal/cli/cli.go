@@ -19,6 +19,7 @@ import (
 	"github.com/spf13/cobra"
 
 	"wane/cmd/internal/inquiry"
+	"wane/cmd/internal/report"
 	"wane/sim/law"
 )
 
@@ -41,11 +42,17 @@ func (p *Program) Main(args []string) int {
 		<-ctx.Done()
 		stop()
 	}()
-	root := p.root()
+	out := &output{Writer: p.Out}
+	checked := *p
+	checked.Out = out
+	root := checked.root()
 	root.SetArgs(args)
-	root.SetOut(p.Out)
+	root.SetOut(out)
 	root.SetErr(p.Err)
 	cmd, err := root.ExecuteContextC(ctx)
+	if out.err != nil {
+		err = failed(out.err) // what could not be written was not answered
+	}
 	if err == nil {
 		return ExitOK
 	}
@@ -89,7 +96,19 @@ func (p *Program) root() *cobra.Command {
 	root.PersistentFlags().BoolVarP(&s.quiet, "quiet", "q", false, "print the answer only: no progress, no warnings, no remarks")
 	root.SetHelpTemplate(root.HelpTemplate() + exitCodes)
 	root.AddCommand(p.run(s), p.check(s), p.scenarios(s), p.laws(s), p.ask(s), p.schema(s), p.version(s))
+	for _, c := range append(root.Commands(), root) {
+		c.Long = wrapped(c.Long)
+	}
 	return root
+}
+
+// wrapped fits paragraphs to the width of answers.
+func wrapped(text string) string {
+	paragraphs := strings.Split(text, "\n\n")
+	for i, p := range paragraphs {
+		paragraphs[i] = strings.Join(report.Wrap(p, report.Width), "\n")
+	}
+	return strings.Join(paragraphs, "\n\n")
 }
 
 // unknownCommand is the fault of a first word that is no command.

@@ -75,3 +75,19 @@ func TestSummaryFits(t *testing.T) {
 		}
 	}
 }
+
+// Where most realisations have no member, the median count is none: the real
+// number is not called by it.
+func TestLastOfAFewIsNotTheLastOfNone(t *testing.T) {
+	s := sampled()
+	for i := range s.Populations {
+		s.Populations[i].PeakCount = 0
+	}
+	var text strings.Builder
+	if err := report.Text(&text, s, report.Style{}); err != nil {
+		t.Fatal(err)
+	}
+	if got := text.String(); strings.Contains(got, "all 0") || !strings.Contains(got, "the last of the real number goes at about 10^38.361, 0.003 dex beyond") {
+		t.Errorf("got\n%s", got)
+	}
+}

@@ -21,8 +21,26 @@ func printJSON(w io.Writer, v any) error {
 	return e.Encode(v)
 }
 
+// output remembers the first answer that could not be written, so that no
+// command has to look after each line it prints.
+type output struct {
+	io.Writer
+	err error
+}
+
+func (o *output) Write(p []byte) (int, error) {
+	n, err := o.Writer.Write(p)
+	if err != nil && o.err == nil {
+		o.err = err
+	}
+	return n, err
+}
+
 // isTerminal tells whether a stream is a terminal.
 func isTerminal(w io.Writer) bool {
+	if o, ok := w.(*output); ok {
+		w = o.Writer
+	}
 	f, ok := w.(*os.File)
 	return ok && term.IsTerminal(int(f.Fd()))
 }

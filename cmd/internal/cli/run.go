@@ -5,6 +5,7 @@ import (
 	"context"
 	"errors"
 	"fmt"
+	"math"
 
 	"github.com/spf13/cobra"
 
@@ -21,14 +22,11 @@ type RunFunc func(ctx context.Context, sc *scenario.Scenario, reg *law.Registry,
 
 // runFlags are the flags of run as they are given.
 type runFlags struct {
-	laws, sets   []string
-	realisations int
-	objects      int64
-	seed         uint64
-	workers      int
-	until        string
-	out          string
-	force        bool
+	laws, sets                           []string
+	realisations, objects, seed, workers wholeNumber
+	until                                string
+	out                                  string
+	force                                bool
 }
 
 func (p *Program) run(s *settings) *cobra.Command {
@@ -61,40 +59,54 @@ or not at all.`,
 		},
 		ValidArgsFunction: p.completeScenario,
 		RunE: func(c *cobra.Command, args []string) error {
-			o, err := f.overrides(c)
+			o, workers, err := f.overrides(c)
 			if err != nil {
 				return err
 			}
-			return p.runScenario(c.Context(), s, args[0], o, &f)
+			return p.runScenario(c.Context(), s, args[0], o, workers, &f)
 		},
 	}
 	flags := c.Flags()
-	flags.StringArrayVar(&f.laws, "law", nil, "use this law, as process=name (may be repeated)")
-	flags.StringArrayVar(&f.sets, "set", nil, "set a parameter, as process.parameter=value or galaxy.radius=8kpc (may be repeated)")
-	flags.IntVar(&f.realisations, "realisations", 0, "random histories (default: the scenario's)")
-	flags.Int64Var(&f.objects, "objects", 0, "objects to simulate (default: the scenario's)")
-	flags.Uint64Var(&f.seed, "seed", 0, "seed of all draws (default: the scenario's)")
-	flags.IntVar(&f.workers, "workers", 0, "realisations computed at a time (default: one a core)")
-	flags.StringVar(&f.until, "until", "", "end at this date, such as 1e20yr, or never (default: the scenario's)")
-	flags.StringVar(&f.out, "out", "", "write the answer to this new folder")
+	flags.StringArrayVar(&f.laws, "law", nil, "use this law: `process=name` (repeatable)")
+	flags.StringArrayVar(&f.sets, "set", nil, "set `name=value`: process.parameter or galaxy.radius=8kpc (repeatable)")
+	flags.Var(&f.realisations, "realisations", "random histories (default: the scenario's)")
+	flags.Var(&f.objects, "objects", "objects to simulate, such as 1e5 (default: the scenario's)")
+	flags.Var(&f.seed, "seed", "seed of all draws (default: the scenario's)")
+	flags.Var(&f.workers, "workers", "realisations computed at a time (default: one a core)")
+	flags.StringVar(&f.until, "until", "", "end at this `date`: 1e20yr, never (default: the scenario's)")
+	flags.StringVar(&f.out, "out", "", "write the answer to this new folder, `DIR`")
 	flags.BoolVar(&f.force, "force", false, "let --out replace an earlier run's folder")
 	return c
 }
 
-// overrides turns the flags into settings, and reports all faults together.
-func (f *runFlags) overrides(c *cobra.Command) (scenario.Overrides, error) {
+// maxWorkers is more than any machine has cores for; each holds a realisation.
+const maxWorkers = 4096
+
+// overrides turns the flags into settings and the number of workers (0: one a
+// core), and reports all faults together.
+func (f *runFlags) overrides(c *cobra.Command) (o scenario.Overrides, workers int, err error) {
 	var faults []error
 	bad := func(format string, a ...any) { faults = append(faults, fmt.Errorf(format, a...)) }
 	given := c.Flags().Changed
-	if given("realisations") && f.realisations < 1 {
-		bad("--realisations %d: want at least 1", f.realisations)
+	number := func(flag string, w *wholeNumber, low, high uint64) uint64 {
+		if !given(flag) {
+			return 0
+		}
+		v, err := w.within(low, high)
+		if err != nil {
+			bad("--%s %w", flag, err)
+		}
+		return v
 	}
-	if given("objects") && f.objects < 1 {
-		bad("--objects %d: want at least 1", f.objects)
+	o = scenario.Overrides{
+		Laws: f.laws, Sets: f.sets, Until: f.until,
+		Realisations: int(number("realisations", &f.realisations, 1, scenario.MaxRealisations)),
+		Objects:      int64(number("objects", &f.objects, 1, scenario.MaxHeld)),
 	}
-	if given("workers") && f.workers < 1 {
-		bad("--workers %d: want at least 1", f.workers)
+	if seed := number("seed", &f.seed, 0, math.MaxUint64); given("seed") {
+		o.Seed = &seed
 	}
+	workers = int(number("workers", &f.workers, 1, maxWorkers))
 	if given("out") && f.out == "" {
 		bad("--out: want a folder")
 	}
@@ -104,14 +116,10 @@ func (f *runFlags) overrides(c *cobra.Command) (scenario.Overrides, error) {
 	if given("until") && f.until == "" {
 		bad("--until: want a date such as 1e20yr, or never")
 	}
-	o := scenario.Overrides{Laws: f.laws, Sets: f.sets, Realisations: f.realisations, Objects: f.objects, Until: f.until}
-	if given("seed") {
-		o.Seed = &f.seed
-	}
-	return o, errors.Join(faults...)
+	return o, workers, errors.Join(faults...)
 }
 
-func (p *Program) runScenario(ctx context.Context, s *settings, which string, o scenario.Overrides, f *runFlags) error {
+func (p *Program) runScenario(ctx context.Context, s *settings, which string, o scenario.Overrides, workers int, f *runFlags) error {
 	sc, registry, err := p.load(s, which, o)
 	if err != nil {
 		return err
@@ -122,7 +130,7 @@ func (p *Program) runScenario(ctx context.Context, s *settings, which string, o 
 		}
 	}
 	bar := newBar(p.Err, s.quiet)
-	summary, err := p.Run(ctx, sc, registry, f.workers, bar.set)
+	summary, err := p.Run(ctx, sc, registry, workers, bar.set)
 	bar.close()
 	if err != nil {
 		if ctx.Err() != nil && errors.Is(err, ctx.Err()) {

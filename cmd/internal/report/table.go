@@ -208,7 +208,10 @@ func realLast(s *ensemble.Summary, population ensemble.Population) string {
 		return ""
 	}
 	how := show(population.RealLast, population.Last.Error)
-	of := fmt.Sprintf("the last of all %s", Count(population.PeakCount, peakDigits(s, population.PeakCount)))
+	of := "the last of the real number"
+	if n := population.PeakCount; n > 0 { // else most realisations had no member
+		of = "the last of all " + Count(n, peakDigits(s, n))
+	}
 	beyond := population.RealLast - population.Last.Date
 	if math.Abs(beyond) < math.Pow10(-how.places)/2 {
 		return of + " goes at the same date, within its error"
