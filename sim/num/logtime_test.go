@@ -5,7 +5,28 @@ import (
 	"testing"
 
 	"wane/sim/num"
+	"wane/testdata/published"
 )
+
+func TestPublishedDates(t *testing.T) {
+	for _, row := range published.Rows(t, "logtime.csv") {
+		a := row.Number(t, "a")
+		switch q := row.Inputs["quantity"]; q {
+		case "sum":
+			row.Check(t, num.Add10(a, row.Number(t, "b")))
+		case "difference":
+			row.Check(t, num.Sub10(a, row.Number(t, "b")))
+		case "100-terms":
+			terms := make([]float64, 100)
+			for i := range terms {
+				terms[i] = a
+			}
+			row.Check(t, num.Sum10(terms...))
+		default:
+			t.Errorf("%s: unknown quantity %q", row.Where(), q)
+		}
+	}
+}
 
 // Values recomputed by hand: 2e10, 0.3e10, and sums and differences whose
 // answer is a round number.

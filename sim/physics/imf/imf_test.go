@@ -27,6 +27,10 @@ func TestPublished(t *testing.T) {
 			row.Check(t, b.Median())
 		case "number-between":
 			row.Check(t, b.NumberBelow(row.Number(t, "m2_Msun"))-b.NumberBelow(row.Number(t, "m1_Msun")))
+		case "density":
+			const step = 1e-7 // solMass, a part in 1e6 of where it is taken
+			m := row.Number(t, "m1_Msun")
+			row.Check(t, (b.NumberBelow(m+step)-b.NumberBelow(m))/step)
 		case "mass-between":
 			row.Check(t, b.MassBelow(row.Number(t, "m2_Msun"))-b.MassBelow(row.Number(t, "m1_Msun")))
 		default:

@@ -17,6 +17,8 @@ func TestPublished(t *testing.T) {
 		switch q := row.Inputs["quantity"]; q {
 		case "mean-last":
 			row.Check(t, MeanLast(number("n")))
+		case "mean-first":
+			row.Check(t, MeanFirst(number("n")))
 		case "quantile-last":
 			row.Check(t, QuantileLast(number("n"), number("p")))
 		case "sample-deficit-dex":

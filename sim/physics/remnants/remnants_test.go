@@ -37,6 +37,9 @@ func TestPublished(t *testing.T) {
 			row.Check(t, weigh(kroupa, func(m float64) float64 { return 1 - NeutronStarChance(m) }))
 		case "share-white-dwarf-above":
 			row.Check(t, between(CummingsInitial(in("mass_Msun")), Collapse))
+		case "share-of-stars-white-dwarf-above":
+			stars := 1 - kroupa.NumberBelow(0.08)
+			row.Check(t, between(CummingsInitial(in("mass_Msun")), Collapse)/stars)
 		case "gain-by-scatter":
 			m := in("mass_Msun")
 			row.Check(t, scattered(kroupa, m)/between(CummingsInitial(m), Collapse))
