@@ -106,11 +106,21 @@ func questionsOf(p Process) asked {
 // ChanceColumn is the name of the column of chances for a word.
 func ChanceColumn(word string) string { return "chance_" + underscored(word) }
 
-// Column names that carry a clock's name.
-func RateColumn(clock string) string   { return "log10_rate_" + underscored(clock) }
-func ToColumn(clock string) string     { return "to_" + underscored(clock) }
-func ShareColumn(clock string) string  { return "share_" + underscored(clock) }
-func SeeksColumn(clock string) string  { return "seeks_" + underscored(clock) }
+// RateColumn is the name of the column of a clock's rate, log10 per year.
+func RateColumn(clock string) string { return "log10_rate_" + underscored(clock) }
+
+// ToColumn is the name of the column of susceptibilities to a clock.
+func ToColumn(clock string) string { return "to_" + underscored(clock) }
+
+// ShareColumn is the name of the column of shares that are taken of a clock.
+func ShareColumn(clock string) string { return "share_" + underscored(clock) }
+
+// SeeksColumn is the name of the column of how eagerly objects seek others on
+// a clock of encounters.
+func SeeksColumn(clock string) string { return "seeks_" + underscored(clock) }
+
+// SoughtColumn is the name of the column of how readily objects are found on a
+// clock of encounters.
 func SoughtColumn(clock string) string { return "sought_" + underscored(clock) }
 
 func underscored(word string) string { return strings.ReplaceAll(word, "-", "_") }

@@ -11,11 +11,16 @@ import (
 // Ions are what a white dwarf is made of.
 type Ions struct{ Z, A float64 }
 
-// Mixtures. Carbon-oxygen and oxygen-neon are taken as one kind of ion each,
-// and elements heavier than neon are left out: assumptions.
-func HeliumIons() Ions       { return Ions{2, 4} }
+// HeliumIons are those of a helium dwarf.
+func HeliumIons() Ions { return Ions{2, 4} }
+
+// CarbonOxygenIons stand for the mixture, taken as one kind of ion; elements
+// heavier than neon are left out: assumptions.
 func CarbonOxygenIons() Ions { return Ions{7, 14} }
-func OxygenNeonIons() Ions   { return Ions{9, 18} }
+
+// OxygenNeonIons stand for the mixture, taken as one kind of ion: an
+// assumption.
+func OxygenNeonIons() Ions { return Ions{9, 18} }
 
 // Envelope holds what a cooling white dwarf's surface and freezing are
 // described by; see the package for the symbols.
