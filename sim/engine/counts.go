@@ -1,6 +1,7 @@
 package engine
 
 import (
+	"math"
 	"math/bits"
 
 	"wane/sim/fade"
@@ -148,7 +149,11 @@ func (w *Workspace) marks(end float64) []fade.Marks {
 		w.replay(end)
 		for p := range out {
 			if n.wanted>>p&1 != 0 {
-				out[p] = n.scratch.Find(n.entries[p], n.exits[p])
+				if n.plain && n.inLog>>p&1 == 0 && w.c.earliest > 0 && n.lastIn[p] <= math.MaxFloat64 && n.lastOut[p] <= math.MaxFloat64 {
+					out[p] = n.scratch.FindWithin(n.entries[p], n.exits[p], w.c.earliest, n.lastIn[p], n.lastOut[p])
+				} else {
+					out[p] = n.scratch.Find(n.entries[p], n.exits[p])
+				}
 				if n.entered[p] == w.c.n {
 					n.entries[p] = nil // it may be the column of births
 				}

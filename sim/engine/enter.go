@@ -60,9 +60,10 @@ func (w *Workspace) enterQuiet() (bool, error) {
 		from := len(w.active)
 		for k := range m.Clocks {
 			w.drawExponentials(k, first, n)
-			w.active = appendReached(w.active, first, c.reading[k][first:first+n], s0[k], s1[k], w.caps[k])
 			if w.compact {
-				w.steadyReadings(k, first, n, s0[k], s1[k])
+				w.active = w.enterSteady(w.active, k, first, s0[k][:n], s1[k][:n])
+			} else {
+				w.active = appendReached(w.active, first, c.reading[k][first:first+n], s0[k], s1[k], w.caps[k])
 			}
 		}
 		if len(w.active) > from {
@@ -103,21 +104,6 @@ func (w *Workspace) listActive(from, first int, s0, s1 [][]float64) {
 		for k := range w.m.Clocks {
 			w.c.reading[k][j] = w.exponential(k, j, 0)
 		}
-	}
-}
-
-// steadyReadings is readingOf for a chunk, under the first piece of the
-// history and to the end of the leg. What is born and stays in its second
-// stage has its death at its birth.
-func (w *Workspace) steadyReadings(k, first, n int, s0, s1 []float64) {
-	c := &w.c
-	t0, r0, r := w.past.piece(0, k)
-	x, birth, death := c.reading[k][first:first+n], c.birth[first:first+n], c.death[first:first+n]
-	s0, s1 = s0[:n], s1[:n]
-	for i, e := range x {
-		b := r0 + r*(birth[i]-t0)
-		d := r0 + r*(death[i]-t0)
-		x[i] = d + (e-s0[i]*(d-b))/s1[i]
 	}
 }
 

@@ -19,86 +19,85 @@ import (
 // the clocks anew when it would not.
 func (w *Workspace) fillClocks() error {
 	m, c := w.m, &w.c
-	n := len(m.Clocks)
-	if n == 0 {
+	if len(m.Clocks) == 0 {
 		return nil
 	}
 	for k := range w.clocks {
 		w.clocks[k].reset()
 	}
 	w.setBounds()
-	var now, slow [maxClocks]float64 // readings, and years per unit of reading
-	for k := range n {
-		now[k], slow[k] = w.readingAt(k, w.t), 1/w.env.Rates[k]
-	}
-	var lists [maxClocks]struct {
-		keys []float64
-		ids  []uint32
-	}
-	for k := range n {
-		lists[k].keys, lists[k].ids = w.clocks[k].keys, w.clocks[k].ids
-	}
-	var columns [maxClocks][]float64
-	lead := 0
-	for k := range n {
-		columns[k] = c.reading[k][:c.n]
-		if slow[k] < slow[lead] {
-			lead = k
+	var f filling
+	for k := range m.Clocks {
+		f.now[k], f.slow[k] = w.readingAt(k, w.t), 1/w.env.Rates[k]
+		f.lists[k].keys, f.lists[k].ids = w.clocks[k].keys, w.clocks[k].ids
+		f.columns[k] = c.reading[k][:c.n]
+		if f.slow[k] < f.slow[f.lead] {
+			f.lead = k
 		}
 	}
-	place, stage := c.place[:c.n], w.stage[:c.n]
-	for i, at := range place {
-		if i == chunk {
-			// Room for as many as the first objects let expect, and no more.
-			for k := range n {
-				l := &lists[k]
-				room := len(l.keys)*(len(place)/chunk+1)*33/32 + 64
-				l.keys = slices.Grow(l.keys, max(0, room-len(l.keys)))
-				l.ids = slices.Grow(l.ids, max(0, room-len(l.ids)))
-			}
+	for first := 0; first < c.n; first += chunk {
+		n := min(chunk, c.n-first)
+		if first == chunk {
+			f.makeRoom(c.n/chunk + 1)
 		}
-		if at != law.Bound || c.left[i] != 0 || stage[i] == 0 || stage[i]&waiting != 0 {
-			continue
+		rest, done := w.sortAlone(&f, first, n)
+		for _, i := range rest {
+			w.fillOne(&f, int(i))
 		}
-		var left [maxClocks]float64
-		if soon := columns[lead][i] - now[lead]; w.alone(i, lead, soon, &columns, &now) {
-			l := &lists[lead]
-			l.keys, l.ids = append(l.keys, columns[lead][i]), append(l.ids, uint32(i))
-			continue
-		}
-		first, soonest := 0, never
-		for k := range n {
-			left[k] = columns[k][i] - now[k]
-			if d := left[k] * slow[k]; d < soonest {
-				first, soonest = k, d
-			}
-		}
-		rho := &w.rho
-		for k := range n {
-			if x := columns[k][i]; x < never && (k == first || !(left[k] > rho[k][first]*left[first])) {
-				l := &lists[k]
-				l.keys, l.ids = append(l.keys, x), append(l.ids, uint32(i))
-			}
+		for i := first + done; i < first+n; i++ {
+			w.fillOne(&f, i)
 		}
 	}
-	for k := range n {
-		w.clocks[k].keys, w.clocks[k].ids = lists[k].keys, lists[k].ids
-	}
-	for k := range w.clocks {
+	for k := range m.Clocks {
+		w.clocks[k].keys, w.clocks[k].ids = f.lists[k].keys, f.lists[k].ids
 		w.clocks[k].sort(&w.sorter)
 	}
 	return nil
 }
 
-// alone tells whether the lead clock provably takes object i before any other,
-// when it has soon left to go.
-func (w *Workspace) alone(i, lead int, soon float64, columns *[maxClocks][]float64, now *[maxClocks]float64) bool {
-	for k := range w.m.Clocks {
-		if k != lead && !(columns[k][i]-now[k] > w.rho[k][lead]*soon) {
-			return false
+// filling is a filling of the clocks in progress.
+type filling struct {
+	now, slow [maxClocks]float64 // readings, and years per unit of reading
+	lead      int                // the fastest clock
+	columns   [maxClocks][]float64
+	lists     [maxClocks]struct {
+		keys []float64
+		ids  []uint32
+	}
+}
+
+// makeRoom makes room for as many entries as the first of so many chunks lets
+// expect, and no more.
+func (f *filling) makeRoom(chunks int) {
+	for k := range f.lists {
+		l := &f.lists[k]
+		room := len(l.keys)*chunks*33/32 + 64
+		l.keys = slices.Grow(l.keys, max(0, room-len(l.keys)))
+		l.ids = slices.Grow(l.ids, max(0, room-len(l.ids)))
+	}
+}
+
+// fillOne puts object i on the clocks that may take it.
+func (w *Workspace) fillOne(f *filling, i int) {
+	if w.c.place[i] != law.Bound || w.c.left[i] != 0 || w.stage[i] == 0 || w.stage[i]&waiting != 0 {
+		return
+	}
+	n := len(w.m.Clocks)
+	var left [maxClocks]float64
+	first, soonest := 0, never
+	for k := range n {
+		left[k] = f.columns[k][i] - f.now[k]
+		if d := left[k] * f.slow[k]; d < soonest {
+			first, soonest = k, d
 		}
 	}
-	return soon < never
+	rho := &w.rho
+	for k := range n {
+		if x := f.columns[k][i]; x < never && (k == first || !(left[k] > rho[k][first]*left[first])) {
+			l := &f.lists[k]
+			l.keys, l.ids = append(l.keys, x), append(l.ids, uint32(i))
+		}
+	}
 }
 
 // boundSlack is what a bound on a ratio of rates allows beyond the present.

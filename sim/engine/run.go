@@ -58,6 +58,7 @@ type Workspace struct {
 	meets         meetings
 	books         books
 	ahead         *countRates // of the countdown
+	rest          []uint32    // of a chunk, while the clocks are filled
 	counts        counts
 	reach         *reach // how far the ends of the real number reach; nil: not asked yet
 }

@@ -98,7 +98,7 @@ func (w *Workspace) settleCompact(steady bool) error {
 	return nil
 }
 
-// laterReadings is steadyReadings under the whole history of the leg.
+// laterReadings is enterSteady under the whole history of the leg.
 func (w *Workspace) laterReadings(k, first, n int, s0, s1 []float64) {
 	c := &w.c
 	t0, r0, r := w.past.piece(0, k)

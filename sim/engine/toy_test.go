@@ -149,7 +149,10 @@ func toyDynamics() law.Law {
 			// sqrt(0.5/m) by way of the column forms, which are faster than roots.
 			num.LogInto(e, in.Columns[0].Values)
 			for i, m := range in.Columns[0].Values {
-				e[i], f[i], k[i] = -0.5*(e[i]+math.Ln2), 2*m, 0.5+m
+				f[i], k[i] = 2*m, 0.5+m
+			}
+			for i, l := range e {
+				e[i] = -0.5 * (l + math.Ln2)
 			}
 			num.ExpInto(e, e)
 			return in.Answer(law.Numbers("to_ejection", e), law.Numbers("to_infall", f), law.Numbers("to_collision", k))

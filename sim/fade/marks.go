@@ -75,6 +75,18 @@ func (s *Scratch) FindLate(entered int, lastEntry float64, exits []float64, firs
 	return m
 }
 
+// FindWithin is Find for dates > 0 that are all finite and none before first,
+// the last entry and the last exit being lastEntry and lastExit. LastIndex is
+// not looked for.
+func (s *Scratch) FindWithin(entries, exits []float64, first, lastEntry, lastExit float64) Marks {
+	in := extent{n: len(entries), first: first, last: lastEntry, lastIndex: -1}
+	out := extent{n: len(exits), first: first, last: lastExit, lastIndex: -1}
+	m := newMarks(in.n, out)
+	s.search(&m, entries, exits, in, out)
+	m.close(out)
+	return m
+}
+
 // apart finds the marks when everybody is in before the first leaves: they are
 // order statistics of the exits. (With negative dates it leaves the work to
 // search.)

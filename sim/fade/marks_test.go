@@ -180,6 +180,12 @@ func TestFindAgainstSorting(t *testing.T) {
 		if got != want {
 			t.Fatalf("%d entries, %d exits: got %+v, want %+v", len(entries), len(exits), got, want)
 		}
+		if first, last, ok := finite(entries, exits); ok {
+			within := s.FindWithin(entries, exits, first, last[0], last[1])
+			if within.LastIndex = want.LastIndex; within != want {
+				t.Fatalf("%d entries, %d exits, FindWithin: got %+v, want %+v", len(entries), len(exits), within, want)
+			}
+		}
 		if !slices.Equal(was[0], entries) || !slices.Equal(was[1], exits) {
 			t.Fatal("the lists were changed")
 		}
@@ -187,6 +193,19 @@ func TestFindAgainstSorting(t *testing.T) {
 			t.Fatalf("marks out of order: %+v", got)
 		}
 	})
+}
+
+// finite returns the first of all dates and the last of each list, if there
+// are any, all of them finite and above zero.
+func finite(lists ...[]float64) (first float64, last []float64, ok bool) {
+	first = inf
+	for _, l := range lists {
+		if len(l) == 0 || slices.Max(l) == inf {
+			return 0, nil, false
+		}
+		first, last = min(first, slices.Min(l)), append(last, slices.Max(l))
+	}
+	return first, last, first > 0
 }
 
 func TestKeysKeepTheOrder(t *testing.T) {

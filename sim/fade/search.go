@@ -30,14 +30,20 @@ func (r *run) most() int { return r.before + r.in }
 func (s *Scratch) search(m *Marks, entries, exits []float64, in, out extent) {
 	g := newGrid(min(in.first, out.first), max(in.last, out.last), in.n+out.n, 1<<15)
 	bins := s.clearBins(g.bins)
-	g.count(bins, entries, 1)
-	g.count(bins, exits, 1<<32)
+	positive := in.first > 0 && out.first > 0
+	if positive {
+		g.countBelow(bins, entries, 1)
+		g.countBelow(bins, exits, 1<<32)
+	} else {
+		g.count(bins, entries, 1)
+		g.count(bins, exits, 1<<32)
+	}
 	low, high := s.peakBounds()
 	if high <= 0 {
 		return
 	}
 	s.chooseRuns(low, high, m.Remaining)
-	s.gather(g, entries, exits)
+	s.gather(g, entries, exits, positive)
 	s.findPeak(m, low)
 	if m.Peak > 0 {
 		m.Half = s.lastFall(m.Peak/2, m.Remaining)
@@ -120,14 +126,32 @@ func (g grid) count(bins []bin, dates []float64, unit bin) {
 	}
 }
 
+// countBelow is count for dates > 0.
+func (g grid) countBelow(bins []bin, dates []float64, unit bin) {
+	low, shift := g.low^1<<63, g.shift
+	for _, v := range dates {
+		x := math.Float64bits(v)
+		if b := (x - low) >> (shift & 63); b < uint64(len(bins)) && x < infBits {
+			bins[b] += unit
+		}
+	}
+}
+
+const infBits = 0x7ff << 52
+
 // gather collects the dates of the chosen bins.
-func (s *Scratch) gather(g grid, entries, exits []float64) {
+func (s *Scratch) gather(g grid, entries, exits []float64, positive bool) {
 	for side, dates := range [2][]float64{entries, exits} {
-		g.choose(s.slot, dates, func(slot int32, v float64) {
+		put := func(slot int32, v float64) {
 			r := &s.runs[slot]
 			s.keys[r.fill[side]] = key(v)
 			r.fill[side]++
-		})
+		}
+		if positive {
+			g.chooseBelow(s.slot, dates, put)
+		} else {
+			g.choose(s.slot, dates, put)
+		}
 	}
 }
 
@@ -137,6 +161,17 @@ func (g grid) choose(slots []int32, dates []float64, yield func(slot int32, v fl
 	for _, v := range dates {
 		b := (key(v) - low) >> (shift & 63)
 		if b < uint64(len(slots)) && slots[b] >= 0 && v <= math.MaxFloat64 {
+			yield(slots[b], v)
+		}
+	}
+}
+
+// chooseBelow is choose for dates > 0.
+func (g grid) chooseBelow(slots []int32, dates []float64, yield func(slot int32, v float64)) {
+	low, shift := g.low^1<<63, g.shift
+	for _, v := range dates {
+		x := math.Float64bits(v)
+		if b := (x - low) >> (shift & 63); b < uint64(len(slots)) && slots[b] >= 0 && x < infBits {
 			yield(slots[b], v)
 		}
 	}
