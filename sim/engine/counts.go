@@ -39,6 +39,7 @@ type counts struct {
 	lastWhy  []uint8
 	scratch  fade.Scratch
 	logs     [3][]float64
+	states   []state // of a chunk in a plain run
 }
 
 func (n *counts) reset(m *Model, plain bool, spare [][]float64) {

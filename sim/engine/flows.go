@@ -3,7 +3,6 @@ package engine
 import (
 	"math/bits"
 
-	"wane/sim/law"
 	"wane/sim/num"
 )
 
@@ -85,6 +84,40 @@ func (n *counts) move(x *flow, date float64) {
 	x.kept++
 }
 
+// moveAll enters changes of a flow.
+func (n *counts) moveAll(x *flow, dates []float64) {
+	x.count += int64(len(dates))
+	first, last := x.first, x.last
+	for _, date := range dates {
+		if date > last {
+			last = date
+		}
+		if date < first {
+			first = date
+		}
+	}
+	x.first, x.last = first, last
+	if x.exits == 0 {
+		return
+	}
+	for len(dates) > 0 {
+		if x.kept == len(x.dates) {
+			n.moreRoom(x)
+		}
+		k := copy(x.dates[x.kept:], dates)
+		x.kept, dates = x.kept+k, dates[k:]
+	}
+}
+
+// born is the flow of births into a state.
+func (n *counts) born(now state) *flow {
+	x := n.flows.of(now, 0)
+	if !x.known {
+		n.learn(x, stateGone, now, true)
+	}
+	return x
+}
+
 // moreRoom moves a flow's dates to where there is room for more: memory that is
 // lent if it is twice as large, else its own.
 func (n *counts) moreRoom(x *flow) {
@@ -162,118 +195,4 @@ func (n *counts) takeExits(p int, x *flow, cause uint8) {
 	if logs {
 		num.Log10Into(n.exits[p][at:], x.dates[:x.kept])
 	}
-}
-
-// tallyPlain is tallyChunk for all objects in a plain run. It must say what
-// books.life and each say; it has no need to ask what kinds of things can
-// happen.
-func (w *Workspace) tallyPlain() {
-	c, n, b := &w.c, &w.counts, &w.books
-	n.flows.reset(w.m)
-	for first := 0; first < c.n; first += chunk {
-		w.tallyPlainChunk(first, min(chunk, c.n-first))
-		b.post()
-	}
-	n.settleFlows(b)
-}
-
-func (w *Workspace) tallyPlainChunk(first, size int) {
-	c, n, b := &w.c, &w.counts, &w.books
-	births, deaths, leaves := c.birth[first:first+size], c.death[first:first+size], c.leave[first:first+size]
-	died, left, place := c.died[first:first+size], c.left[first:first+size], c.place[first:first+size]
-	kind0, kind1 := c.kind0[first:first+size], c.kind1[first:first+size]
-	mass0, mass1 := c.mass0[first:first+size], c.mass1[first:first+size]
-	end, ended := c.end[first:first+size], c.ended[first:first+size]
-	var atDeath, atLeave, atEnd recent
-	for i, birth := range births {
-		leave := leaves[i]
-		if leave < birth {
-			b.fired[left[i]]++
-			b.takes(w, uint32(first+i), mass0[i])
-			continue
-		}
-		now := stateOf(kind0[i], law.Bound, law.Founded)
-		x := n.flows.of(now, 0)
-		if !x.known {
-			n.learn(x, stateGone, now, true)
-		}
-		x.count++
-		if birth > x.last {
-			x.last = birth
-		}
-		mass := mass1[i]
-		if why := died[i]; why != 0 {
-			death := deaths[i]
-			if leave < death {
-				if now = w.plainLeave(first+i, now, leave, mass0[i]); now == stateGone {
-					continue
-				}
-				leave = never
-			}
-			if death == never {
-				w.rests(now, mass0[i])
-				continue
-			}
-			to := stateOf(kind1[i], 0, law.Founded) + now%statesAKind
-			x := atDeath.flow
-			if !atDeath.is(now, why) {
-				if x = atDeath.look(&n.flows, now, why); !x.known {
-					n.learn(x, now, to, true)
-				}
-			}
-			n.move(x, death)
-			now = to
-			if b.radiates[why] {
-				b.part.radiated += mass0[i] - mass
-			} else {
-				b.part.gas += mass0[i] - mass
-			}
-		}
-		if leave < never {
-			if place[i] != law.Adrift {
-				w.plainLeave(first+i, now, leave, mass)
-				continue
-			}
-			to := now + 2*law.Adrift
-			x := atLeave.flow
-			if !atLeave.is(now, left[i]) {
-				if x = atLeave.look(&n.flows, now, left[i]); !x.known {
-					n.learn(x, now, to, true)
-				}
-			}
-			n.move(x, leave)
-			now = to
-		}
-		if end[i] == never {
-			w.rests(now, mass)
-			continue
-		}
-		x = atEnd.flow
-		if !atEnd.is(now, ended[i]) {
-			if x = atEnd.look(&n.flows, now, ended[i]); !x.known {
-				n.learn(x, now, stateGone, false)
-			}
-		}
-		n.move(x, end[i])
-		b.part.radiated += mass
-	}
-}
-
-// plainLeave enters the leaving of object i, which weighs mass, and returns
-// the state it is in then.
-func (w *Workspace) plainLeave(i int, now state, leave, mass float64) state {
-	n, c := &w.counts, &w.c
-	to := stateGone
-	if c.place[i] == law.Adrift {
-		to = now + 2*law.Adrift
-	}
-	x := n.flows.of(now, c.left[i])
-	if !x.known {
-		n.learn(x, now, to, true)
-	}
-	n.move(x, leave)
-	if to == stateGone {
-		w.books.takes(w, uint32(i), mass)
-	}
-	return to
 }
