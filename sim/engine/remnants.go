@@ -76,10 +76,14 @@ func (a *asker) keepRemnants(c *columns, r *rows, u *law.Use, n int, pick []int3
 // markSure sets each row's word where one word has all the chance, and tells
 // whether there are rows, left at NoWord, that have none.
 func markSure(dst []uint8, out law.Batch, words int) (unsure bool) {
-	for i := range dst {
-		dst[i] = law.NoWord
+	for i, chance := range out.Columns[0].Values[:len(dst)] {
+		now := uint8(law.NoWord)
+		if chance == 1 {
+			now = 0
+		}
+		dst[i] = now
 	}
-	for w := range words {
+	for w := 1; w < words; w++ {
 		word := uint8(w)
 		chances := out.Columns[w].Values[:len(dst)]
 		for i, now := range dst {

@@ -25,20 +25,28 @@ func (m *Model) compileSimple() {
 // partition sorts the rows by the wearing law that speaks for them.
 func (a *asker) partition(r *rows) {
 	a.parts = grown(a.parts, len(a.m.wearing))
-	var n [256]int
 	for w := range a.parts {
 		a.parts[w] = grown(a.parts[w], r.n)
 	}
+	// Long runs of rows go to one part: it is held while a run lasts.
+	var sizes [256]int
+	var part []int32
+	now, n := 0, 0
 	for i, k := range r.kind[:r.n] {
-		w := a.m.wornBy[k]
+		w := int(a.m.wornBy[k])
 		if w < 0 || a.m.wornInPart && !a.m.wearing[w].Speaks(k, r.mass[i], r.metals[i]) {
 			continue
 		}
-		a.parts[w][n[uint8(w)]] = int32(i)
-		n[uint8(w)]++
+		if part == nil || w != now {
+			sizes[now] = n
+			now, n, part = w, sizes[w], a.parts[w]
+		}
+		part[n] = int32(i)
+		n++
 	}
+	sizes[now] = n
 	for w := range a.parts {
-		a.parts[w] = a.parts[w][:n[w]]
+		a.parts[w] = a.parts[w][:sizes[w]]
 	}
 }
 

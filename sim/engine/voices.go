@@ -16,10 +16,11 @@ func (a *asker) spoken(use *law.Use, r *rows) (s *rows, pick []int32) {
 	if kind, one := oneKind(r.kind[:r.n]); one {
 		whole, none = v.all[kind], !v.some[kind]
 	} else {
+		said := uint8(wholeBit | noneBit)
 		for _, k := range r.kind[:r.n] {
-			whole = whole && v.all[k]
-			none = none && !v.some[k]
+			said &= v.says[k]
 		}
+		whole, none = said&wholeBit != 0, said&noneBit != 0
 	}
 	if whole {
 		return r, nil
@@ -51,9 +52,15 @@ func oneKind(kinds []uint8) (kind uint8, one bool) {
 // and which columns it reads.
 type voice struct {
 	some, all [256]bool
+	says      [256]uint8 // wholeBit, noneBit: all of that kind, none
 	reads     columnSet
 	draws     bool // it reads a draw of the object
 }
+
+const (
+	wholeBit = 1 << iota
+	noneBit
+)
 
 func (m *Model) compileVoices() {
 	m.voices = map[*law.Use]*voice{}
@@ -72,6 +79,14 @@ func (m *Model) compileVoices() {
 		}
 		for k := range m.Set.Kinds {
 			v.some[k], v.all[k] = u.SpeaksForKind(uint8(k))
+			if v.all[k] {
+				v.says[k] |= wholeBit
+			}
+		}
+		for k, some := range v.some {
+			if !some {
+				v.says[k] |= noneBit
+			}
 		}
 		m.voices[u] = v
 	}

@@ -35,12 +35,13 @@ func (f *Fault) Error() string {
 // batch's Parameters and Kinds are filled in here; its columns must be those
 // of the card, in that order.
 func (u *Use) Ask(question string, in Batch) (Batch, error) {
-	want, ok := u.outputs[question]
-	if !ok {
+	q := u.question(question)
+	if q == nil {
 		return Batch{}, &Fault{Law: u.ID(), Question: question, Row: -1, Got: "a question that is not on its card", Want: "one of its own"}
 	}
 	in.Parameters, in.Kinds = u.Parameters, u.kinds
-	if f := u.checkInput(question, in); f != nil {
+	want := q.outputs
+	if f := u.checkInput(question, q.inputs, in); f != nil {
 		return Batch{}, f
 	}
 	if in.Rows == 0 {
@@ -54,6 +55,24 @@ func (u *Use) Ask(question string, in Batch) (Batch, error) {
 		return Batch{}, f
 	}
 	return out, nil
+}
+
+// exchange is what is read and answered for one question.
+type exchange struct {
+	name    string
+	inputs  []input
+	outputs []output
+}
+
+// question returns nil for one that is not on the card. There are a few at
+// most: a search is quicker than a map, and galaxies are asked often.
+func (u *Use) question(name string) *exchange {
+	for i := range u.asked {
+		if u.asked[i].name == name {
+			return &u.asked[i]
+		}
+	}
+	return nil
 }
 
 func emptyAnswer(want []output) Batch {
@@ -109,8 +128,7 @@ func (u *Use) check(question string, want []output, in, out Batch) *Fault {
 }
 
 // checkInput finds a column that the host left out, misplaced or cut short.
-func (u *Use) checkInput(question string, in Batch) *Fault {
-	want := u.inputs[question]
+func (u *Use) checkInput(question string, want []input, in Batch) *Fault {
 	bad := func(column, got, wanted string) *Fault {
 		return &Fault{Law: u.ID(), Question: question, Column: column, Row: -1, Got: got, Want: wanted}
 	}

@@ -11,8 +11,7 @@ type Use struct {
 	Parameters []float64 // in the order of the card
 
 	role    Role
-	inputs  map[string][]input
-	outputs map[string][]output
+	asked   []exchange // the questions of the card
 	limits  [2]float64 // of Accepts, resolved
 	kinds   []string   // word list of the run
 	accepts []bool     // by kind code
@@ -27,10 +26,8 @@ func NewUse(l Law) *Use {
 	}
 	p, _ := ProcessNamed(c.Process)
 	u.role = p.Role
-	u.inputs, u.outputs = map[string][]input{}, map[string][]output{}
 	for _, q := range c.Questions {
-		u.inputs[q.Name] = inputsOf(q)
-		u.outputs[q.Name] = outputsOf(c, q.Name)
+		u.asked = append(u.asked, exchange{q.Name, inputsOf(q), outputsOf(c, q.Name)})
 	}
 	u.limits = [2]float64{-inf, inf}
 	u.resolve()
