@@ -51,7 +51,7 @@ func registry(t testing.TB) *law.Registry {
 		fake{grand}, fake{other}, fake{card("nucleon-decay", "stable", wear)},
 		fake{card("evaporation", "page", wear, law.Parameter{Name: "spin", Low: 0, High: 1, Preset: 0.5})},
 		fake{die},
-		fake{card("infall", "branching", nil, law.Parameter{Name: "f_in", Low: 0.01, High: 0.1, Preset: 0.05})},
+		fake{card("infall", "branching", []law.Question{{Name: "divert"}}, law.Parameter{Name: "f_in", Low: 0.01, High: 0.1, Preset: 0.05})},
 		fake{cool},
 	)
 	if err != nil {

@@ -8,7 +8,7 @@ import (
 // impossible warns of own populations that can never have a member.
 func (b *builder) impossible(set *law.Set) {
 	made := makes(set)
-	if b.s.CentralMass > 0 {
+	if b.s.CentralMass > 0 || swallows(set) {
 		made["central-hole"] = true
 	}
 	merges := false
@@ -20,6 +20,22 @@ func (b *builder) impossible(set *law.Set) {
 			b.warn(b.at["populations."+p.Name], "population %s can never have a member: %s", p.Name, why)
 		}
 	}
+}
+
+// swallows tells whether a law of the run sends objects to the centre, where
+// the first of them makes a hole if there is none.
+func swallows(set *law.Set) bool {
+	for _, u := range set.All() {
+		if u.Card.StopFate == law.FateCentral || u.Card.Answers("divert") {
+			return true
+		}
+		for _, c := range u.Card.Clocks {
+			if c.Fate == law.FateCentral {
+				return true
+			}
+		}
+	}
+	return false
 }
 
 // makes lists the kinds that can come to be in a run.
@@ -80,7 +96,7 @@ func never(c galaxy.Condition, made map[string]bool, merges bool) string {
 func neverKind(kind string, c galaxy.Condition, made map[string]bool) string {
 	switch {
 	case kind == "central-hole" && !made[kind]:
-		return "the galaxy has no central hole (galaxy.central-mass is 0)"
+		return "the galaxy has no central hole (galaxy.central-mass is 0), and no law of this run makes one"
 	case !made[kind]:
 		return "no law of this run makes a " + kind
 	case len(c.Places) == 0:
