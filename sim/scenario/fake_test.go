@@ -38,8 +38,9 @@ func registry(t testing.TB) *law.Registry {
 		law.Parameter{Name: "lifetime", Unit: "yr", Log10: true, Low: 45, High: 169, Preset: 45})
 	die := card("remnant", "simple", []law.Question{{Name: "die", Words: []string{"white-dwarf"}}, {Name: "remain"}},
 		law.Parameter{Name: "scatter", Unit: "solMass", Low: 0, High: 0.1, Preset: 0.06})
-	frame := card("ejection", "still", []law.Question{{Name: "rate"}})
+	frame := card("ejection", "still", []law.Question{{Name: "rate"}, {Name: "expose"}})
 	frame.Frame = true
+	frame.Clocks = []law.Clock{{Name: "ejection", Outcome: "ejected", Fate: law.FateAdrift}}
 	heavy := die
 	heavy.Name, heavy.Accepts = "light-only", law.Accepts{Kinds: []string{"star"}, Column: "mass", High: law.At(8)}
 	cool := card("white-dwarf-cooling", "mestel-debye", []law.Question{{Name: "shine"}})
@@ -51,7 +52,7 @@ func registry(t testing.TB) *law.Registry {
 		fake{grand}, fake{other}, fake{card("nucleon-decay", "stable", wear)},
 		fake{card("evaporation", "page", wear, law.Parameter{Name: "spin", Low: 0, High: 1, Preset: 0.5})},
 		fake{die},
-		fake{card("infall", "branching", []law.Question{{Name: "divert"}}, law.Parameter{Name: "f_in", Low: 0.01, High: 0.1, Preset: 0.05})},
+		fake{card("infall", "branching", []law.Question{{Name: "divert", Words: []string{"ejection"}}}, law.Parameter{Name: "f_in", Low: 0.01, High: 0.1, Preset: 0.05})},
 		fake{cool},
 	)
 	if err != nil {
