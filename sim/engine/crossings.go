@@ -178,7 +178,7 @@ func (f *feeler) raise(have []int32, guess []float64, open []int32) error {
 const (
 	youngest = 0.0   // log10 yr: nothing cools within a year of its birth
 	forever  = 1e4   // log10 yr: as far as cooling is followed
-	coolTol  = 1e-10 // of log10 age
+	coolTol  = 2e-13 // of log10 age
 )
 
 // roots narrows the brackets [low, high] (log10 ages) to the crossing by the

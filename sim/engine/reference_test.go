@@ -96,7 +96,7 @@ func compareWith(t failer, w *engine.Workspace, s engine.Setup, realisation uint
 
 // warmExact is how well dates of cooling must agree: both engines find them as
 // roots.
-const warmExact = 2e-10
+const warmExact = 1e-12
 
 // closeTo compares parts of a mass that add up to all: small ones are what
 // rounding leaves of differences of large ones.
