@@ -20,7 +20,7 @@ func (m *Model) compileCauses() {
 		}
 	}
 	for _, u := range m.cooling {
-		m.coolsByMetals = m.coolsByMetals || reads(u)&^(hasKind|hasMass|hasComposition) != 0
+		m.coolsByMetals = m.coolsByMetals || reads(u)&^(hasKind|hasMass|hasComposition|hasDraws) != 0
 		m.cause(u.Card.Process, cooledWord)
 	}
 	m.cause("warmth", cooledWord)
