@@ -3,6 +3,7 @@ package lawtest
 import (
 	"fmt"
 	"math"
+	"slices"
 
 	"wane/sim/law"
 )
@@ -29,6 +30,33 @@ func differ(a, b law.Batch) string {
 		}
 	}
 	return ""
+}
+
+// reordered tells whether two answers hold the same values, each column in
+// whatever order.
+func reordered(a, b law.Batch) bool {
+	if len(a.Columns) != len(b.Columns) {
+		return false
+	}
+	for i := range a.Columns {
+		x, y := a.Columns[i], b.Columns[i]
+		if !slices.Equal(sortedBits(x), sortedBits(y)) {
+			return false
+		}
+	}
+	return true
+}
+
+func sortedBits(c law.Column) []uint64 {
+	out := make([]uint64, 0, len(c.Values)+len(c.Words))
+	for _, v := range c.Values {
+		out = append(out, math.Float64bits(v))
+	}
+	for _, w := range c.Words {
+		out = append(out, uint64(w))
+	}
+	slices.Sort(out)
+	return out
 }
 
 // pick makes a batch of some rows of another, in the given order.

@@ -1,19 +1,21 @@
 package lawtest
 
 import (
+	"errors"
 	"fmt"
 	"math/rand/v2"
 	"slices"
-	"testing"
 
 	"wane/sim/law"
 )
 
 // Finding is one rule the law breaks.
 type Finding struct {
-	Check    string // the rule, one of the words of the package's doc
+	Check    string // the rule, one of [Words]
 	Question string // empty when it is about the law as a whole
 	Detail   string // what was asked and what came back
+	// Doubt says that the contract does not forbid it: somebody should look.
+	Doubt bool
 }
 
 func (f Finding) String() string {
@@ -23,12 +25,18 @@ func (f Finding) String() string {
 	return f.Check + ": question " + f.Question + ": " + f.Detail
 }
 
+// Words are the checks, in the order of their first finding.
+func Words() []string {
+	return []string{"card", "describe", "answer", "chances", "shapes", "pure", "input", "unset", "rows", "order", "monotone", "size", "domain", "foretell", "parameter"}
+}
+
 // Option changes how a law is checked.
 type Option func(*settings)
 
 type settings struct {
 	foretell float64
 	among    []law.Law
+	watch    func(check string) bool
 }
 
 // ForetellWithin sets how far, relatively, the foretold wait may be from the
@@ -40,8 +48,19 @@ func ForetellWithin(relative float64) Option { return func(s *settings) { s.fore
 // them sets it, and its parameters may matter to their ranges alone.
 func Among(laws ...law.Law) Option { return func(s *settings) { s.among = laws } }
 
+// Watch is told of each check before it begins. Where it says no, the check
+// and all after it are left out.
+func Watch(begins func(check string) bool) Option { return func(s *settings) { s.watch = begins } }
+
+// Test is the part of testing.TB that Run needs. A program that only checks
+// laws then does without package testing.
+type Test interface {
+	Helper()
+	Errorf(format string, a ...any)
+}
+
 // Run checks a law and fails the test for each rule it breaks.
-func Run(t testing.TB, l law.Law, options ...Option) {
+func Run(t Test, l law.Law, options ...Option) {
 	t.Helper()
 	c := l.Describe()
 	for _, f := range Check(l, options...) {
@@ -52,29 +71,54 @@ func Run(t testing.TB, l law.Law, options ...Option) {
 // Check takes a law through the whole kit and returns what it found, at most
 // one finding a rule and question where one tells enough.
 func Check(l law.Law, options ...Option) []Finding {
-	s := settings{foretell: 1e-6}
+	s := settings{foretell: 1e-6, watch: func(string) bool { return true }}
 	for _, o := range options {
 		o(&s)
 	}
 	k := &kit{settings: s, law: l, card: l.Describe(), findings: &[]Finding{}}
+	if !k.watch("card") {
+		return nil
+	}
 	k.checkCard()
 	if _, known := law.ProcessNamed(k.card.Process); !known {
 		return *k.findings
 	}
 	k.use, k.set = k.inUse(nil)
-	k.checkDescribe()
-	for _, q := range k.card.Questions {
-		if k.checkAnswer(q) {
-			k.checkShapes(q)
-			k.checkPure(q)
-			k.checkUnset(q)
-			k.checkRows(q)
-			k.checkMonotone(q)
+	var sound []law.Question // those with answers to compare
+	each := func(check func(law.Question)) func() {
+		return func() {
+			for _, q := range sound {
+				check(q)
+			}
 		}
 	}
-	k.checkDomain()
-	k.checkForetell()
-	k.checkParameters()
+	for _, c := range []struct {
+		word string
+		do   func()
+	}{
+		{"describe", k.checkDescribe},
+		{"answer", func() {
+			for _, q := range k.card.Questions {
+				if k.checkAnswer(q) {
+					sound = append(sound, q)
+				}
+			}
+		}},
+		{"shapes", each(k.checkShapes)},
+		{"pure", each(k.checkPure)},
+		{"unset", each(k.checkUnset)},
+		{"rows", each(k.checkRows)},
+		{"monotone", each(k.checkMonotone)},
+		{"size", each(k.checkSize)},
+		{"domain", k.checkDomain},
+		{"foretell", k.checkForetell},
+		{"parameter", k.checkParameters},
+	} {
+		if !k.watch(c.word) {
+			break
+		}
+		c.do()
+	}
 	return *k.findings
 }
 
@@ -89,7 +133,25 @@ type kit struct {
 }
 
 func (k *kit) found(check, question, format string, a ...any) {
-	f := Finding{Check: check, Question: question, Detail: fmt.Sprintf(format, a...)}
+	k.add(Finding{Check: check, Question: question, Detail: fmt.Sprintf(format, a...)})
+}
+
+// doubt is a finding that is no breach.
+func (k *kit) doubt(check, question, format string, a ...any) {
+	k.add(Finding{Check: check, Question: question, Detail: fmt.Sprintf(format, a...), Doubt: true})
+}
+
+// wrong is an answer that failed: under the name of the check that asked, but
+// for chances, which have a name of their own.
+func (k *kit) wrong(check, question, when string, err error) {
+	var fault *law.Fault
+	if errors.As(err, &fault) && fault.Column == "chances" {
+		check = "chances"
+	}
+	k.found(check, question, "%s%v", when, err)
+}
+
+func (k *kit) add(f Finding) {
 	if !slices.Contains(*k.findings, f) {
 		*k.findings = append(*k.findings, f)
 	}

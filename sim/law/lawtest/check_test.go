@@ -16,7 +16,7 @@ import (
 func good() map[string]fake {
 	return map[string]fake{
 		"shine": shine(), "births": births(), "endless": endless(), "remnants": remnants(), "holes": holes(),
-		"matter": matter(), "turning": turning(), "throwing": throwing(), "collapse": collapse(),
+		"matter": matter(), "turning": turning(), "throwing": throwing(), "collapse": collapse(), "lives": lives(),
 	}
 }
 
@@ -80,7 +80,19 @@ func TestFindsFaults(t *testing.T) {
 		}, "answer", "domain parameter"},
 		{"chances that miss 1", func() law.Law {
 			return remnants().spoilt(changed("chance_white_dwarf", func(_ law.Batch, _ int, v float64) float64 { return 0.99 * v }))
-		}, "answer", "domain"},
+		}, "chances", ""},
+		{"years that are no logarithms", func() law.Law {
+			return lives().spoilt(changed("wait", func(_ law.Batch, _ int, v float64) float64 { return num.Exp10(v) }))
+		}, "size", ""},
+		{"seconds for years", func() law.Law {
+			return lives().spoilt(changed("wait", func(_ law.Batch, _ int, v float64) float64 { return v + 7.4991 }))
+		}, "size", ""},
+		{"rows that come back in another order", func() law.Law {
+			return shine().spoilt(func(_ string, _, out law.Batch) law.Batch {
+				slices.Sort(out.Columns[0].Values)
+				return out
+			})
+		}, "order", "monotone rows"},
 		{"a remnant heavier than its star", func() law.Law {
 			return remnants().spoilt(func(q string, in, out law.Batch) law.Batch {
 				if q == "remain" {

@@ -158,13 +158,13 @@ func (k *kit) checkDomain() {
 func (k *kit) domain(when string) {
 	for _, q := range k.card.Questions {
 		if _, err := k.ask(q.Name, lay(q, k.corners(q))); err != nil {
-			k.found("domain", q.Name, "in a corner%s: %v", when, err)
+			k.wrong("domain", q.Name, "in a corner"+when+": ", err)
 		}
 		if when == "" {
 			continue
 		}
 		if _, err := k.ask(q.Name, k.plausible(q, 200)); err != nil {
-			k.found("domain", q.Name, "plausible rows%s: %v", when, err)
+			k.wrong("domain", q.Name, "plausible rows"+when+": ", err)
 		}
 	}
 }

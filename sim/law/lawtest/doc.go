@@ -13,13 +13,16 @@
 //	card        the card is in order (law.CheckCard), and says formula and domain
 //	describe    the card is the same each time
 //	answer      every answer keeps the rules of law.Use.Ask, on plausible rows
-//	shapes      0, 1, 2, 1000 and 16384 rows are answered
+//	chances     chances are 0 .. 1 and sum to 1
+//	shapes      0, 1, 2, 1000, 16384 and 65536 rows are answered
 //	pure        the same batch gives the same bits: again, after other batches, in many goroutines
 //	input       the law leaves the rows it reads as they were
 //	unset       every row of the answer is set, even where memory is lent
 //	rows        row i depends on row i alone: split, shuffled, concatenated
-//	domain      the rules hold in the corners of every column and parameter
+//	order       row i of the answer is the answer to row i
 //	monotone    quantiles rise with the draw, cooling never warms, a hazard never falls
+//	size        answers are of the size that their unit lets expect (a doubt, no breach)
+//	domain      the rules hold in the corners of every column and parameter
 //	foretell    a wearing law's foretold wait is the integral dM/rate to its next threshold
-//	parameter   each parameter changes something
+//	parameter   each parameter changes something (a doubt, no breach)
 package lawtest

@@ -226,3 +226,11 @@ func collapse() fake {
 	f.card.Parameters = append([]law.Parameter{f.card.Parameters[0]}, number("m_up", 6, 8, 11))
 	return f
 }
+
+// lives are stars that burn a share of themselves at M^3.5 suns.
+func lives() fake {
+	c := card("lifetime", law.Question{Name: "live", Inputs: []string{"mass"}})
+	c.Accepts.Kinds = []string{"star"}
+	c.Parameters = []law.Parameter{number("slope", 2, 2.5, 3)}
+	return fake{c, onlyNumbers("wait", []string{"mass"}, func(p, x []float64) float64 { return 10 - p[0]*num.Log10(x[0]) })}
+}

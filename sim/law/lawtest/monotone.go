@@ -63,7 +63,7 @@ func (k *kit) follow(q law.Question, n int, grid []float64, column, answer strin
 		in := lay(q, path)
 		out, err := k.ask(q.Name, in)
 		if err != nil {
-			k.found("monotone", q.Name, "%v", err)
+			k.wrong("monotone", q.Name, "", err)
 			return
 		}
 		values := out.Values(answer)

@@ -26,10 +26,10 @@ func (k *kit) checkParameters() {
 		values := extremes(p)
 		switch {
 		case len(values) == 0:
-			k.found("parameter", "", "%s can only be %v", p.Name, p.Preset)
+			k.doubt("parameter", "", "%s can only be %v", p.Name, p.Preset)
 		case k.readByHost(p.Name) || k.bounds(p.Name):
 		case !k.changes(p, values, before):
-			k.found("parameter", "", "parameter %d, %s, changes nothing between %s and %s",
+			k.doubt("parameter", "", "parameter %d, %s, changes nothing between %s and %s",
 				i, p.Name, setting(p, values[0]), setting(p, values[len(values)-1]))
 		}
 	}

@@ -32,7 +32,7 @@ func (k *kit) checkDescribe() {
 // that compare answers make sense only if there are any: it tells.
 func (k *kit) checkAnswer(q law.Question) bool {
 	if _, err := k.ask(q.Name, k.plausible(q, 1000)); err != nil {
-		k.found("answer", q.Name, "%v", err)
+		k.wrong("answer", q.Name, "", err)
 		return false
 	}
 	return true
@@ -49,8 +49,33 @@ func (k *kit) checkShapes(q law.Question) {
 	}
 	for _, n := range []int{1, 2, 1000, 16384} {
 		if _, err := k.ask(q.Name, k.plausible(q, n)); err != nil {
-			k.found("shapes", q.Name, "%d rows: %v", n, err)
+			k.wrong("shapes", q.Name, fmt.Sprintf("%d rows: ", n), err)
 		}
+	}
+	k.checkMany(q)
+}
+
+// most is how many rows may come in one batch.
+const most = 65536
+
+// checkMany asks about as many rows as may come, a few over and over: each is
+// answered as it is alone.
+func (k *kit) checkMany(q law.Question) {
+	few := k.plausible(q, 1000)
+	want, err := k.ask(q.Name, few)
+	if err != nil {
+		return // reported before
+	}
+	want = pick(want, upTo(0, want.Rows))
+	rows := upTo(0, most)
+	for i := range rows {
+		rows[i] %= few.Rows
+	}
+	out, err := k.ask(q.Name, pick(few, rows))
+	if err != nil {
+		k.wrong("shapes", q.Name, fmt.Sprintf("%d rows: ", most), err)
+	} else if d := differ(pick(want, rows), out); d != "" {
+		k.found("rows", q.Name, "asked %d rows, then those over and over up to %d: %s", few.Rows, most, d)
 	}
 }
 
@@ -151,8 +176,14 @@ func (k *kit) checkRows(q law.Question) {
 	want = pick(want, upTo(0, want.Rows))
 	compare := func(how string, out law.Batch, err error) {
 		if err != nil {
-			k.found("rows", q.Name, "%s: %v", how, err)
-		} else if d := differ(want, out); d != "" {
+			k.wrong("rows", q.Name, how+": ", err)
+			return
+		}
+		switch d := differ(want, out); {
+		case d == "":
+		case reordered(want, out):
+			k.found("order", q.Name, "asked whole, then %s: the same values in other rows: %s", how, d)
+		default:
 			k.found("rows", q.Name, "asked whole, then %s: %s", how, d)
 		}
 	}
