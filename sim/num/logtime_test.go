@@ -16,6 +16,10 @@ func TestPublishedDates(t *testing.T) {
 			row.Check(t, num.Add10(a, row.Number(t, "b")))
 		case "difference":
 			row.Check(t, num.Sub10(a, row.Number(t, "b")))
+		case "smallest-step":
+			// The least age, in units of t, that can be told at date a.
+			next := math.Nextafter(a, math.Inf(1))
+			row.Check(t, num.Exp10(num.Sub10(next, a)-a))
 		case "100-terms":
 			terms := make([]float64, 100)
 			for i := range terms {

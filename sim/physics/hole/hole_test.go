@@ -11,15 +11,61 @@ import (
 
 	"wane/sim/physics/constant"
 	"wane/testdata/published"
+	"wane/testdata/reference"
 )
 
-// sets are the species of the literature, by the name the rows use.
+// lists are the species of the literature, by the name the rows use.
+func lists() map[string][]Species {
+	with := func(n int) []Species { return append(Light(), MasslessNeutrinos(n)...) }
+	return map[string][]Species{
+		"photons-gravitons":        Light(),
+		"one-massless-neutrino":    with(1),
+		"page-1976":                with(2),
+		"three-massless-neutrinos": with(3),
+	}
+}
+
 func sets() map[string]*Emission {
-	return map[string]*Emission{
-		"photons-gravitons":        NewEmission(Light()),
-		"one-massless-neutrino":    NewEmission(Light(), MasslessNeutrinos(1)),
-		"page-1976":                NewEmission(Light(), MasslessNeutrinos(2)),
-		"three-massless-neutrinos": NewEmission(Light(), MasslessNeutrinos(3)),
+	out := map[string]*Emission{}
+	for name, list := range lists() {
+		out[name] = NewEmission(list)
+	}
+	return out
+}
+
+// spins are in the order in which greybody.py prints them.
+var spins = []struct {
+	name string
+	spin Spin
+}{{"scalar", Scalar}, {"half", Half}, {"vector", Vector}, {"graviton", Graviton}}
+
+func spinNamed(t *testing.T, name string) Spin {
+	for _, s := range spins {
+		if s.name == name {
+			return s.spin
+		}
+	}
+	t.Fatalf("unknown spin %q", name)
+	return 0
+}
+
+func speciesNamed(t *testing.T, name string) Species {
+	for _, s := range append(append(Light(), MasslessNeutrinos(1)...), Massive()...) {
+		if s.Name == name {
+			return s
+		}
+	}
+	t.Fatalf("unknown species %q", name)
+	return Species{}
+}
+
+// TestStatesAgainstWaveEquation compares alpha of one state with the radial
+// wave equation solved by SciPy, from the horizon to far outside.
+func TestStatesAgainstWaveEquation(t *testing.T) {
+	for i, want := range reference.Python(t, "testdata/greybody.py")[0] {
+		if got := StateAlpha(spins[i].spin); math.Abs(got/want-1) > 2e-4 {
+			t.Errorf("alpha of one %s state is %.5g, SciPy says %.6g", spins[i].name, got, want)
+		}
 	}
 }
 
@@ -44,6 +90,19 @@ func TestPublished(t *testing.T) {
 			row.Check(t, Temperature(mass())*constant.Boltzmann/constant.EV)
 		case "alpha":
 			row.Check(t, alpha(set))
+		case "state-alpha":
+			row.Check(t, StateAlpha(spinNamed(t, set)))
+		case "state-weight":
+			// dM/dt = -5.34e25 g^3/s f/M^2, hbar c^4/G^2 = 1.912263e29 g^3/s.
+			row.Check(t, StateAlpha(spinNamed(t, set))*1.912263e29/5.34e25)
+		case "species-alpha":
+			row.Check(t, speciesNamed(t, set).Alpha())
+		case "sum-of-species":
+			sum := 0.0
+			for _, s := range lists()[set] {
+				sum += s.Alpha()
+			}
+			row.Check(t, sum)
 		case "fraction-page-1976":
 			var part float64
 			switch set {

@@ -23,6 +23,10 @@ func TestPublished(t *testing.T) {
 			row.Check(t, MeanDensity(m, WhiteDwarfRadius(m)))
 		case "limiting-mass":
 			row.Check(t, LimitingMass(in("mu_e")))
+		case "fit-deviation":
+			m := in("mass_Msun")
+			x := math.Pow(1.459/m, 2.0/3)
+			row.Check(t, 0.01125*constant.SunR/1e3*math.Sqrt(x-1/x)/WhiteDwarfRadius(m)-1)
 		case "hole-radius":
 			row.Check(t, HoleRadius(in("mass_Msun")))
 		case "star-radius":
