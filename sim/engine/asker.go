@@ -42,7 +42,7 @@ type constantColumns struct {
 func newAsker(m *Model) *asker {
 	a := &asker{m: m, streams: map[string]draw.Stream{}, sub: newRows(0), alone: newRows(0), rest: newRows(0)}
 	a.arena = &a.arenas[0]
-	n := min(chunk, m.Objects)
+	n := min(m.batch, m.Objects)
 	a.constants = constantColumns{make([]uint8, n), make([]uint8, n), make([]uint8, n), make([]float64, n)}
 	for i := range n {
 		a.constants.hydrogen[i], a.constants.bound[i], a.constants.founded[i] = law.Hydrogen, law.Bound, law.Founded

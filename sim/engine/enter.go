@@ -51,8 +51,8 @@ func (w *Workspace) enterQuiet() (bool, error) {
 		return false, nil
 	}
 	most := c.n/8 + 16
-	for first := 0; first < c.n; first += chunk {
-		n := min(chunk, c.n-first)
+	for first := 0; first < c.n; first += m.batch {
+		n := min(m.batch, c.n-first)
 		s0, s1, err := w.susceptibilities(first, n)
 		if err != nil {
 			return false, err

@@ -16,8 +16,8 @@ func (w *Workspace) exposeAll() error {
 		}
 	}
 	w.meets.grow(w)
-	for first := 0; first < c.n; first += chunk {
-		n := min(chunk, c.n-first)
+	for first := 0; first < c.n; first += m.batch {
+		n := min(m.batch, c.n-first)
 		s0, s1, err := w.exposeChunk(first, n)
 		if err != nil {
 			return err

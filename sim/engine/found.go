@@ -13,8 +13,8 @@ import (
 // and prospects, whole generations in one batch a question.
 func (a *asker) found(c *columns) error {
 	c.resize(a.m, a.m.Objects)
-	for first := 0; first < c.n; first += chunk {
-		if err := a.foundChunk(c, first, min(chunk, c.n-first)); err != nil {
+	for first := 0; first < c.n; first += a.m.batch {
+		if err := a.foundChunk(c, first, min(a.m.batch, c.n-first)); err != nil {
 			return err
 		}
 	}
@@ -214,20 +214,26 @@ func (c *columns) founding(first, n int) (latest float64) {
 			c.earliest = b
 		}
 	}
-	// Four sums side by side, since each has to wait for its last addition.
-	var part [4]float64
-	mass := c.mass0[first : first+n]
-	for ; len(mass) >= 4; mass = mass[4:] {
-		part[0] += mass[0]
-		part[1] += mass[1]
-		part[2] += mass[2]
-		part[3] += mass[3]
+	for to := first + n; first < to; first += chunk {
+		c.founded.add(sumOf(c.mass0[first:min(first+chunk, to)]))
 	}
-	for _, x := range mass {
-		part[0] += x
-	}
-	c.founded.add((part[0] + part[1]) + (part[2] + part[3]))
 	return latest
+}
+
+// sumOf adds in four sums side by side, since each has to wait for its last
+// addition.
+func sumOf(x []float64) float64 {
+	var part [4]float64
+	for ; len(x) >= 4; x = x[4:] {
+		part[0] += x[0]
+		part[1] += x[1]
+		part[2] += x[2]
+		part[3] += x[3]
+	}
+	for _, v := range x {
+		part[0] += v
+	}
+	return (part[0] + part[1]) + (part[2] + part[3])
 }
 
 // cutShort ends a star's life by a prospect that comes before its death.

@@ -62,6 +62,7 @@ type Model struct {
 	wornBy                          [256]int8 // by kind: the wearing law, -1: none; good in a simple run
 	wornInPart                      bool      // a law speaks for part of a kind only
 	stagesDraw                      bool      // a law of what objects become reads a draw
+	batch                           int       // rows to ask about at a time
 	coolsByMetals                   bool
 	voices                          map[*law.Use]*voice
 	deathsMatter                    bool // a declared value changes when a star dies
@@ -134,6 +135,7 @@ func Compile(s Setup) (*Model, error) {
 	m.wearing = actives(s.Set.OfRole(law.Wearing))
 	m.turning = actives(s.Set.OfRole(law.Turning))
 	m.cooling = actives(s.Set.OfRole(law.Cooling))
+	m.compileBatch()
 	m.compileCauses()
 	m.compileSimple()
 	m.compileVoices()

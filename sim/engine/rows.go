@@ -4,9 +4,24 @@ import (
 	"wane/sim/law"
 )
 
-// chunk is how many rows are asked at a time: few enough for their columns to
-// stay in the processor's cache. No answer depends on it.
+// chunk is how many objects are taken at a time: few enough for their columns
+// to stay in the processor's cache. So many rows laws are asked about at a
+// time, too, unless one wants more of them.
 const chunk = 4096
+
+// mostRows is the most that are asked about at a time.
+const mostRows = 16 * chunk
+
+// compileBatch finds how many rows to ask about at a time, a multiple of
+// chunk. No answer depends on it.
+func (m *Model) compileBatch() {
+	m.batch = chunk
+	for _, u := range m.Set.All() {
+		if b, ok := u.Law.(law.Batcher); ok && !u.Card.Idle {
+			m.batch = max(m.batch, min((b.Rows()+chunk-1)/chunk*chunk, mostRows))
+		}
+	}
+}
 
 // rows is a table of objects about to be asked about. All columns have n rows;
 // they may be views of the galaxy's own columns, which laws only read.

@@ -15,8 +15,8 @@ func (w *Workspace) settle(t float64) error {
 		return w.settleCompact(steady)
 	}
 	isActive := 0
-	for first := 0; first < c.n; first += chunk {
-		n := min(chunk, c.n-first)
+	for first := 0; first < c.n; first += w.m.batch {
+		n := min(w.m.batch, c.n-first)
 		var s0, s1 [][]float64
 		if !steady {
 			var err error
@@ -58,8 +58,8 @@ func (w *Workspace) settle(t float64) error {
 func (w *Workspace) settleCompact(steady bool) error {
 	c := &w.c
 	active := w.active
-	for first := 0; first < c.n; first += chunk {
-		n := min(chunk, c.n-first)
+	for first := 0; first < c.n; first += w.m.batch {
+		n := min(w.m.batch, c.n-first)
 		here := 0
 		for here < len(active) && int(active[here]) < first+n {
 			here++

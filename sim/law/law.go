@@ -12,6 +12,14 @@ type Law interface {
 	Answer(question string, in Batch) (Batch, error)
 }
 
+// Batcher is a law that wants to be asked about many rows at a time, since each
+// question costs it much beside the rows, as in another process.
+type Batcher interface {
+	Law
+	// Rows is how many rows it wants at a time, from 1 on. It may get fewer.
+	Rows() int
+}
+
 // Batch is a table of rows in columns. A law reads the columns its card
 // declares for the question, in that order, and never writes to them.
 type Batch struct {
