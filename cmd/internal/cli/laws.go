@@ -59,6 +59,7 @@ func (p *Program) listLaws(s *settings, registry *law.Registry, process string) 
 			lines = append(lines, lawLine{c.Process, c.Name, c.Version, defaults[c.Process] == c.Name, c.Summary})
 		}
 	}
+	lines = withNone(lines)
 	if len(lines) == 0 {
 		var names []string
 		for _, known := range law.Processes {
@@ -86,6 +87,25 @@ func (p *Program) listLaws(s *settings, registry *law.Registry, process string) 
 		field(p.Out, 2, 26, star+" "+l.Name, l.Summary)
 	}
 	return nil
+}
+
+// withNone adds to each process that a run may do without, after its last law,
+// that it may be given none. A law of that name tells itself.
+func withNone(lines []lawLine) []lawLine {
+	var out []lawLine
+	named := false
+	for i, l := range lines {
+		out = append(out, l)
+		named = named || l.Name == "none"
+		if i+1 < len(lines) && lines[i+1].Process == l.Process {
+			continue
+		}
+		if known, _ := law.ProcessNamed(l.Process); known.Optional && !named {
+			out = append(out, lawLine{Process: l.Process, Name: "none", Summary: "no law: the run does without"})
+		}
+		named = false
+	}
+	return out
 }
 
 func (p *Program) oneLaw(s *settings, c law.Card) error {

@@ -1,6 +1,7 @@
 package inquiry
 
 import (
+	"fmt"
 	"math"
 
 	"wane/sim/law"
@@ -71,6 +72,7 @@ func (a *asking) shining(out *Answer, q law.Question, answer law.Batch) {
 // remarks adds what the roles leave unsaid.
 func (a *asking) remarks(out *Answer) {
 	p, _ := law.ProcessNamed(a.use.Card.Process)
+	a.tooHeavy(out)
 	for _, q := range out.Questions {
 		switch {
 		case q == "shine":
@@ -80,5 +82,31 @@ func (a *asking) remarks(out *Answer) {
 		case q == "heat":
 			out.Notes = append(out.Notes, "it wears only while the sky is colder than this temperature")
 		}
+	}
+}
+
+// tooHeavy says so when the question is about a white dwarf that cannot be: a
+// law answers by its formula all the same.
+func (a *asking) tooHeavy(out *Answer) {
+	kind, mass, muE := "", 0.0, 2.0
+	for _, v := range out.Inputs {
+		switch {
+		case v.Name == "kind":
+			kind = v.Word
+		case v.Name == "mass":
+			mass = v.Number
+		case v.Name == "composition" && v.Word == law.CompositionWords[law.Iron]:
+			muE = ironPerElectron
+		}
+	}
+	if code, given := a.codes["kind"]; given {
+		kind = a.kinds[code]
+	} else if kind == "" {
+		if code, _, err := a.kind("kind"); err == nil {
+			kind = a.kinds[code]
+		}
+	}
+	if limit := structure.LimitingMass(muE); kind == "white-dwarf" && mass > limit {
+		out.Notes = append(out.Notes, fmt.Sprintf("no such white dwarf: above %.2f Msun electrons cannot hold it up (Chandrasekhar 1935)", limit))
 	}
 }

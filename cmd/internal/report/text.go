@@ -82,8 +82,14 @@ func (p *page) header(s *ensemble.Summary) {
 }
 
 func standing(s *ensemble.Summary) string {
-	if s.Whole {
+	one := s.Objects == 1
+	switch {
+	case s.Whole && one:
+		return "whole: 1 object, which is itself"
+	case s.Whole:
 		return fmt.Sprintf("whole: %s objects, each is itself", grouped(s.Objects))
+	case one:
+		return "a sample: 1 object stands for " + Count(s.StandsFor, 3)
 	}
 	return fmt.Sprintf("a sample: %s objects stand for %s, each for %s",
 		grouped(s.Objects), Count(s.StandsFor, 3), Count(s.StandsFor/float64(s.Objects), 3))
