@@ -13,6 +13,7 @@ type Fault struct {
 	Row                   int
 	Object                string // the row in words, when there is one
 	Got, Want             string
+	Log                   string // the last an outside law wrote about itself
 }
 
 func (f *Fault) Error() string {
@@ -26,7 +27,11 @@ func (f *Fault) Error() string {
 	if f.Column != "" {
 		where += ": " + f.Column
 	}
-	return fmt.Sprintf("%s: got %s, want %s", where, f.Got, f.Want)
+	text := fmt.Sprintf("%s: got %s, want %s", where, f.Got, f.Want)
+	if f.Log != "" {
+		text += "; its log: " + f.Log
+	}
+	return text
 }
 
 // Ask asks the law a question and checks the answer. This is the one place
@@ -49,12 +54,25 @@ func (u *Use) Ask(question string, in Batch) (Batch, error) {
 	}
 	out, err := u.Law.Answer(question, in)
 	if err != nil {
-		return Batch{}, fmt.Errorf("law %s: question %s: %w", u.ID(), question, err)
+		return Batch{}, fmt.Errorf("law %s: question %s: %w", u.label(), question, err)
 	}
 	if f := u.check(question, want, in, out); f != nil {
+		f.Law = u.label()
+		if o, ok := u.Law.(Outside); ok {
+			f.Log = o.Log()
+		}
 		return Batch{}, f
 	}
 	return out, nil
+}
+
+// label names the law in faults: an outside one by what the person called it,
+// too.
+func (u *Use) label() string {
+	if o, ok := u.Law.(Outside); ok && o.Label() != "" {
+		return o.Label() + " (" + u.ID() + ")"
+	}
+	return u.ID()
 }
 
 // exchange is what is read and answered for one question.

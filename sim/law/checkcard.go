@@ -20,17 +20,19 @@ var (
 // presets outside their range, missing citations, words that mean nothing.
 func CheckCard(c Card) []error {
 	p, ok := ProcessNamed(c.Process)
-	if !ok {
-		return []error{fmt.Errorf("card: unknown process %q", c.Process)}
-	}
 	k := cardCheck{Card: c, process: p}
+	if !ok {
+		k.bad("unknown process %q", c.Process)
+	}
 	k.identity()
-	k.questions()
 	k.parameters()
 	k.accepts()
-	k.thresholds()
-	k.clocks()
-	k.words()
+	if ok { // what else may be on a card hangs on the process
+		k.questions()
+		k.thresholds()
+		k.clocks()
+		k.words()
+	}
 	return k.faults
 }
 

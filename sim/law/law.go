@@ -20,6 +20,13 @@ type Batcher interface {
 	Rows() int
 }
 
+// Outside is what a law tells besides when it is not part of the program. Its
+// faults are then reported with both.
+type Outside interface {
+	Label() string // what the person called it: "./my-burden"
+	Log() string   // the last it wrote about itself; may be empty
+}
+
 // Batch is a table of rows in columns. A law reads the columns its card
 // declares for the question, in that order, and never writes to them.
 type Batch struct {

@@ -77,13 +77,19 @@ func outputsOf(c Card, question string) []output {
 	names := c.Outputs(question)
 	out := make([]output, len(names))
 	for i, n := range names {
-		out[i] = output{name: n, rule: ruleOf(question, n)}
-		switch n {
-		case "kind", "kind_1", "kind_2", "composition", "composition_1", "composition_2", "outcome":
-			out[i].words = true
-		}
+		out[i] = output{name: n, rule: ruleOf(question, n), words: AnsweredInWords(n)}
 	}
 	return out
+}
+
+// AnsweredInWords tells whether a column of answers holds codes of words; all
+// others hold numbers.
+func AnsweredInWords(column string) bool {
+	switch column {
+	case "kind", "kind_1", "kind_2", "composition", "composition_1", "composition_2", "outcome":
+		return true
+	}
+	return false
 }
 
 func ruleOf(question, column string) rule {

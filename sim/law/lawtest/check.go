@@ -220,3 +220,21 @@ func (k *kit) direct(question string, in law.Batch) (out law.Batch, err error) {
 	in.Parameters, in.Kinds = k.use.Parameters, k.set.Kinds
 	return k.law.Answer(question, in)
 }
+
+// Rows is a batch of n plausible rows for a question of a law's card, with the
+// parameters at their presets: what the checks ask about. It is nil where the
+// card has no such question.
+func Rows(l law.Law, question string, n int, options ...Option) law.Batch {
+	var s settings
+	for _, o := range options {
+		o(&s)
+	}
+	k := &kit{settings: s, law: l, card: l.Describe(), findings: &[]Finding{}}
+	k.use, k.set = k.inUse(nil)
+	b := k.plausible(k.question(question), n)
+	b.Parameters, b.Kinds = k.use.Parameters, k.set.Kinds
+	return b
+}
+
+// Differ tells where two answers differ in a bit; it is empty where they do not.
+func Differ(a, b law.Batch) string { return differ(a, b) }
