@@ -79,7 +79,10 @@ func info(sc *scenario.Scenario, set *law.Set, m *engine.Model, interrupted bool
 		Requested: sc.Realisations, Interrupted: interrupted, Seed: sc.Seed, Scenario: sc.Name, Populations: sc.Populations,
 	}
 	for _, u := range set.All() {
-		i.Laws = append(i.Laws, ensemble.LawInUse{Process: u.Card.Process, Name: u.Card.Name, Version: u.Card.Version})
+		outside := sc.Outside[u.Card.Process]
+		i.Laws = append(i.Laws, ensemble.LawInUse{
+			Process: u.Card.Process, Name: u.Card.Name, Version: u.Card.Version, Path: outside.Written, Digest: outside.Digest,
+		})
 		if u.Card.Idle {
 			i.Idle = append(i.Idle, u.Card.Process)
 		}

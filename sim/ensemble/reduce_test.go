@@ -168,9 +168,11 @@ func TestLedger(t *testing.T) {
 
 func TestInactive(t *testing.T) {
 	info := dwarfs()
-	info.Laws = []LawInUse{
-		{"expansion", "lambda-cdm", "1"}, {"warmth", "none", "1"}, {"vacuum-decay", "never", "1"}, {"ejection", "contracting", "1"},
-		{"infall", "branching", "1"}, {"nucleon-decay", "stable", "1"}, {"evaporation", "page", "1"}, {"orbital-decay", "peters", "1"},
+	for _, l := range [][2]string{
+		{"expansion", "lambda-cdm"}, {"warmth", "none"}, {"vacuum-decay", "never"}, {"ejection", "contracting"},
+		{"infall", "branching"}, {"nucleon-decay", "stable"}, {"evaporation", "page"}, {"orbital-decay", "peters"},
+	} {
+		info.Laws = append(info.Laws, LawInUse{Process: l[0], Name: l[1], Version: "1"})
 	}
 	info.Idle = []string{"vacuum-decay"}
 	info.Reasons = map[string]string{"evaporation": "the sky never grew colder than a hole"}

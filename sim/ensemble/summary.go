@@ -68,8 +68,9 @@ type LedgerMeans struct {
 	Founded, Bound, Adrift, Central, Gas, Radiated float64
 }
 
-// LawInUse names a law of the run.
-type LawInUse struct{ Process, Name, Version string }
+// LawInUse names a law of the run. Path, as it was given, and the digest of its
+// files are those of a law outside the program.
+type LawInUse struct{ Process, Name, Version, Path, Digest string }
 
 // Inactive is a process that did nothing, and why.
 type Inactive struct{ Process, Law, Why string }

@@ -40,6 +40,19 @@ func (r *Registry) Add(l Law) error {
 	return nil
 }
 
+// Put adds a law in the place of the one of its process and name, if there is
+// one, as a law outside the program may be called like one that is built in.
+func (r *Registry) Put(l Law) error {
+	c := l.Describe()
+	old, taken := r.laws[c.Process][c.Name]
+	delete(r.laws[c.Process], c.Name)
+	err := r.Add(l)
+	if err != nil && taken {
+		r.laws[c.Process][c.Name] = old
+	}
+	return err
+}
+
 // Find returns the law process/name.
 func (r *Registry) Find(process, name string) (Law, bool) {
 	l, ok := r.laws[process][name]

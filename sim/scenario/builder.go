@@ -28,10 +28,12 @@ type builder struct {
 	when   map[string]int   // in which order
 	said   int              // how many settings so far
 	doubt  map[string]bool  // processes whose law was faulty: their parameters are not judged
+	opened []Outside        // laws given by a path
+	closed map[string]*node // processes whose law is given by a path that was not opened
 }
 
 func newBuilder(reg *law.Registry, defaults map[string]string) (*builder, error) {
-	b := &builder{reg: reg, at: map[string]place{}, when: map[string]int{}, doubt: map[string]bool{}, s: &Scenario{
+	b := &builder{reg: reg, at: map[string]place{}, when: map[string]int{}, doubt: map[string]bool{}, closed: map[string]*node{}, s: &Scenario{
 		Realisations: defaultRealisations,
 		Seed:         defaultSeed,
 		Until:        math.Inf(1),
@@ -51,7 +53,7 @@ func newBuilder(reg *law.Registry, defaults map[string]string) (*builder, error)
 
 // apply applies one file.
 func (b *builder) apply(root *node) {
-	b.unknownKeys(root, "", "base", "title", "question", "until", "realisations", "seed", "galaxy", "laws", "parameters", "populations")
+	b.unknownKeys(root, "", "base", "title", "question", "until", "realisations", "seed", "galaxy", "laws", "trust", "parameters", "populations")
 	for _, key := range []string{"title", "question"} {
 		if n := root.field(key); n != nil && n.form != aText {
 			b.fault(n.at, "%s: got %s, want a text", key, n.form)
@@ -65,6 +67,7 @@ func (b *builder) apply(root *node) {
 		}
 	}
 	b.laws(b.table(root, "laws"))
+	b.trust(b.table(root, "trust"))
 	b.parameters(b.table(root, "parameters"))
 	b.populations(b.table(root, "populations"))
 }
@@ -160,6 +163,7 @@ func (b *builder) until(n *node) {
 func (b *builder) finish(leaf *node) {
 	top := place{leaf.at.file, 1, 1}
 	b.galaxyWhole(top)
+	b.outsideWhole()
 	if len(b.faults) > 0 {
 		return
 	}

@@ -10,9 +10,9 @@ func TestFaults(t *testing.T) {
 	for name, c := range map[string]struct{ text, want string }{
 		"unknown key": {
 			"base = \"reach\"\nsede = 1\n[galaxy]\nradios = \"1 pc\"\n[lawns]\n",
-			`x.toml:2:1: unknown key "sede" (did you mean "seed"? known: base, title, question, until, realisations, seed, galaxy, laws, parameters, populations)
+			`x.toml:2:1: unknown key "sede" (did you mean "seed"? known: base, title, question, until, realisations, seed, galaxy, laws, trust, parameters, populations)
 x.toml:4:1: galaxy: unknown key "radios" (did you mean "radius"? known: objects, sample, radius, central-mass)
-x.toml:5:2: unknown table "lawns" (did you mean "laws"? known: base, title, question, until, realisations, seed, galaxy, laws, parameters, populations)`,
+x.toml:5:2: unknown table "lawns" (did you mean "laws"? known: base, title, question, until, realisations, seed, galaxy, laws, trust, parameters, populations)`,
 		},
 		"key in the wrong table": {
 			"base = \"reach\"\nobjects = 1\nevaporation = \"page\"\n",
@@ -127,7 +127,7 @@ x.toml:2:8: expected ']' to close table name`,
 		"base of itself":  {"base = \"x\"", `x.toml:1:8: bases form a loop: x.toml -> x.toml`},
 		"no such base":    {"base = \"raech\"", `x.toml:1:8: base: no scenario "raech" (did you mean "reach"? known: reach)`},
 		"base elsewhere":  {"base = \"../reach\"", `x.toml:1:8: base: "../reach": want the name of a scenario, such as "lantern-reach"`},
-		"fault in a base": {"base = \"bad\"\nseed = -1", "bad.toml:1:1: unknown key \"sede\" (did you mean \"seed\"? known: base, title, question, until, realisations, seed, galaxy, laws, parameters, populations)\nx.toml:2:8: seed: -1: want a whole number, 0 .. 18446744073709551615"},
+		"fault in a base": {"base = \"bad\"\nseed = -1", "bad.toml:1:1: unknown key \"sede\" (did you mean \"seed\"? known: base, title, question, until, realisations, seed, galaxy, laws, trust, parameters, populations)\nx.toml:2:8: seed: -1: want a whole number, 0 .. 18446744073709551615"},
 		"populations": {
 			"base = \"reach\"\n[populations.stars]\n[populations.\"a b\"]\n[populations.p]\nkinds = [\"white-dwarfs\", 3, \"star\", \"star\"]\nplaces = []\norigins = 1\ntemperature = \"798 K\"\nluminosity = \"> 3 K\"\nkind = 1\n[populations.q]\ntemperature = \">= 3 K\"\n[populations.r]\ntemperature = \"> 0 K\"\n[populations.s]\ntemperature = 5",
 			`x.toml:2:14: populations.stars: every run counts a population of this name: want another name
@@ -177,8 +177,8 @@ func TestOverrideFaults(t *testing.T) {
 			"evaporation.spin=0.5", "infal.f_in=0.1", "galaxy.objects=1e20"},
 		Realisations: -1, Objects: -5, Until: "tomorrow",
 	})
-	const want = `--law infall: want process=name, such as "nucleon-decay=stable"
---law evaporation: given twice
+	const want = `--law infall: want process=name, such as "nucleon-decay=stable", or process=./path
+--law evaporation: given twice: a run has one law of each process
 --set seed=3: want process.parameter=value or galaxy.key=value, such as "galaxy.radius=8kpc"
 --set evaporation.spin: given twice
 --set evaporation.spin: "2": want 0 .. 1

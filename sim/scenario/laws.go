@@ -36,6 +36,10 @@ func (b *builder) laws(t *node) {
 			b.fault(n.at, "laws.%s: got %s, want the name of a law %s", process, n.form, among("", b.known(p)))
 			continue
 		}
+		if IsPath(n.text) {
+			b.outsideLaw(p, n)
+			continue
+		}
 		if _, ok := b.reg.Find(process, n.text); !ok && !(p.Optional && n.text == none) {
 			b.unknownLaw(p, n)
 			continue
@@ -77,6 +81,8 @@ func (b *builder) choose(process string, n *node) {
 		delete(b.s.Parameters, process)
 	}
 	b.s.Laws[process] = n.text
+	delete(b.s.Outside, process)
+	delete(b.closed, process)
 	b.set(process, n.at)
 }
 

@@ -30,6 +30,7 @@ func Load(fsys fs.FS, file string, reg *law.Registry, defaults map[string]string
 	if err != nil {
 		return nil, nil, err
 	}
+	b.opened = o.Outside
 	layers, err := b.files(fsys, file)
 	if err != nil {
 		return nil, nil, err

@@ -7,16 +7,7 @@ import (
 
 // override applies the settings of the command line.
 func (b *builder) override(o Overrides) {
-	laws := newTable(place{file: "--law"})
-	for _, text := range o.Laws {
-		process, name, ok := strings.Cut(text, "=")
-		at := place{file: "--law " + process}
-		if !ok || process == "" || name == "" {
-			b.fault(place{file: "--law " + text}, `want process=name, such as "nucleon-decay=stable"`)
-			continue
-		}
-		laws.put(b, strings.TrimSpace(process), &node{form: aLoose, at: at, key: at, text: strings.TrimSpace(name)})
-	}
+	laws := b.typedLaws(o)
 	galaxies, parameters := newTable(place{file: "--set"}), newTable(place{file: "--set"})
 	for _, text := range o.Sets {
 		key, value, ok := strings.Cut(text, "=")
@@ -43,6 +34,25 @@ func (b *builder) override(o Overrides) {
 	b.laws(laws)
 	b.parameters(parameters)
 	b.overrideRun(o)
+}
+
+// typedLaws is the table of laws that the command line gives.
+func (b *builder) typedLaws(o Overrides) *node {
+	laws := newTable(place{file: "--law"})
+	for _, text := range o.Laws {
+		process, name, ok := strings.Cut(text, "=")
+		at := place{file: "--law " + process}
+		if !ok || process == "" || name == "" {
+			b.fault(place{file: "--law " + text}, `want process=name, such as "nucleon-decay=stable", or process=./path`)
+			continue
+		}
+		if laws.field(strings.TrimSpace(process)) != nil {
+			b.fault(at, "given twice: a run has one law of each process")
+			continue
+		}
+		laws.add(strings.TrimSpace(process), &node{form: aLoose, at: at, key: at, text: strings.TrimSpace(name)})
+	}
+	return laws
 }
 
 // put adds a setting of the command line, which may come once.

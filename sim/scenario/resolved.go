@@ -43,6 +43,8 @@ type ResolvedLaw struct {
 	Version    string    `json:"version,omitempty"`
 	Summary    string    `json:"summary,omitempty"`
 	From       string    `json:"from"`
+	Path       string    `json:"path,omitempty"`   // of a law outside the program
+	Digest     string    `json:"digest,omitempty"` // of its files
 	Sources    []string  `json:"sources,omitempty"`
 	Parameters []Setting `json:"parameters,omitempty"`
 }
@@ -107,6 +109,7 @@ func (s *Scenario) resolveLaw(reg *law.Registry, process, name string) ResolvedL
 	}
 	card := l.Describe()
 	r.Version, r.Summary, r.Sources = card.Version, card.Summary, card.Sources
+	r.Path, r.Digest = s.Outside[process].Written, s.Outside[process].Digest
 	for _, p := range card.Parameters {
 		r.Parameters = append(r.Parameters, Setting{
 			Name: p.Name, Value: Show(p, s.Parameters[process][p.Name]), Unit: p.Unit, Doc: p.Doc,
@@ -162,6 +165,10 @@ func (r Resolved) Print(out io.Writer) error {
 	w.line("\nlaws")
 	for _, l := range r.Laws {
 		w.line("\n%s/%s (%s)", l.Process, l.Name, l.From)
+		if l.Path != "" {
+			w.line("  outside: %s", l.Path)
+			w.line("  digest %s", l.Digest)
+		}
 		if l.Summary != "" {
 			w.wrapped("  ", l.Summary)
 		}

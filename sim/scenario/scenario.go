@@ -22,6 +22,8 @@ type Scenario struct {
 	// Laws names the law of each process; "none" where a process that a run
 	// may do without has none.
 	Laws map[string]string
+	// Outside holds those of Laws that are not built in; nil if all are.
+	Outside map[string]Outside
 	// Parameters holds every parameter of every law in use, preset or set, as
 	// it is handed to the law: log10 where the card says so, an index for a word.
 	Parameters map[string]map[string]float64
@@ -51,10 +53,14 @@ func (s *Scenario) Weight() float64 { return s.Objects / float64(s.Held()) }
 // Overrides are settings of the command line. They come after those of the
 // file; the zero value changes nothing.
 type Overrides struct {
-	Laws         []string // "process=name"
+	Laws         []string // "process=name", "process=./path"
 	Sets         []string // "process.parameter=value", "galaxy.radius=8kpc"
 	Realisations int      // 0: as the scenario says
 	Objects      int64    // objects to simulate, the sample; 0: as the scenario says
 	Seed         *uint64
 	Until        string // a date or "never"; empty: as the scenario says
+
+	// Outside is the laws of [Paths], opened, or why not. The registry must hold
+	// those that are opened.
+	Outside []Outside
 }

@@ -43,6 +43,9 @@ func (s *Scenario) write(reg *law.Registry) string {
 			line := p.Name + " = " + text(name)
 			if v, ok := s.versions[p.Name]; ok {
 				line += " # version " + strings.Join(strings.Fields(v), " ")
+				if o, ok := s.Outside[p.Name]; ok {
+					line += ", outside, " + o.Digest
+				}
 			}
 			w.line("%s", line)
 		}

@@ -43,6 +43,23 @@ func (p *page) closing(s *ensemble.Summary) {
 			p.line("    " + l)
 		}
 	}
+	p.outside(s)
+}
+
+// outside names the laws that are not built in.
+func (p *page) outside(s *ensemble.Summary) {
+	head := false
+	for _, l := range s.Laws {
+		if l.Path == "" {
+			continue
+		}
+		if !head {
+			p.line("")
+			p.line(p.style.heading("Laws outside the program"))
+			head = true
+		}
+		p.remarks([]string{l.Process + "/" + l.Name + ", version " + l.Version + ": " + l.Path + ", " + l.Digest})
+	}
 }
 
 func (p *page) paragraph(text string) {

@@ -22,6 +22,7 @@ type Document struct {
 	Populations  []populationJSON  `json:"populations"`
 	Ledger       ledgerJSON        `json:"ledger"`
 	Laws         map[string]string `json:"laws"`
+	Outside      []outsideJSON     `json:"outside,omitempty"`
 	Inactive     []inactiveJSON    `json:"inactive"`
 	Evaporation  *float64          `json:"evaporation_starts_log10_yr"`
 	Notes        []string          `json:"notes"`
@@ -66,6 +67,15 @@ type massJSON struct {
 	Radiated *float64 `json:"radiated"`
 }
 
+// outsideJSON is a law that is not built in.
+type outsideJSON struct {
+	Process string `json:"process"`
+	Name    string `json:"name"`
+	Version string `json:"version"`
+	Path    string `json:"path"`
+	Digest  string `json:"digest"`
+}
+
 type inactiveJSON struct {
 	Process string `json:"process"`
 	Law     string `json:"law"`
@@ -98,6 +108,9 @@ func DocumentOf(s *ensemble.Summary) Document {
 	}
 	for _, l := range s.Laws {
 		d.Laws[l.Process] = l.Name
+		if l.Path != "" {
+			d.Outside = append(d.Outside, outsideJSON(l))
+		}
 	}
 	for _, x := range s.Inactive {
 		d.Inactive = append(d.Inactive, inactiveJSON(x))
