@@ -222,8 +222,8 @@ func (k *kit) direct(question string, in law.Batch) (out law.Batch, err error) {
 }
 
 // Rows is a batch of n plausible rows for a question of a law's card, with the
-// parameters at their presets: what the checks ask about. It is nil where the
-// card has no such question.
+// parameters at their presets: what the checks ask about. It has no columns where
+// the card has no such question.
 func Rows(l law.Law, question string, n int, options ...Option) law.Batch {
 	var s settings
 	for _, o := range options {

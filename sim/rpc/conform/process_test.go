@@ -1,0 +1,141 @@
+package conform
+
+import (
+	"context"
+	"errors"
+	"slices"
+	"testing"
+	"time"
+
+	"wane/sim/law"
+)
+
+// paced takes its time for each row.
+type paced struct {
+	law.Law
+	clock *clock
+	row   time.Duration
+}
+
+func (p paced) Answer(question string, in law.Batch) (law.Batch, error) {
+	p.clock.pass(50*time.Microsecond + time.Duration(in.Rows)*p.row)
+	return p.Law.Answer(question, in)
+}
+
+// TestProcessFaults feeds the judge processes with one fault each.
+func TestProcessFaults(t *testing.T) {
+	quick := builtin(t, "remnant/cummings")
+	for _, x := range []struct {
+		fault
+		change func(*Subject, *clock)
+	}{
+		{fault{name: "does not start", check: "start", level: Fail, says: "second fault"}, func(s *Subject, _ *clock) {
+			s.Open = func(context.Context) (Process, error) {
+				return nil, errors.Join(errors.New("first fault"), errors.New("second fault"))
+			}
+		}},
+		{fault{name: "slow to start", check: "start", level: Warn, says: "4.0 s"}, func(s *Subject, c *clock) {
+			s.Open = func(context.Context) (Process, error) {
+				c.pass(4 * time.Second)
+				return process{Law: quick, clock: c}, nil
+			}
+		}},
+		{fault{name: "slow answers", check: "speed", level: Warn, says: "20µs a row"}, func(s *Subject, c *clock) {
+			s.Open = func(context.Context) (Process, error) {
+				return process{Law: paced{quick, c, 20 * time.Microsecond}, clock: c}, nil
+			}
+		}},
+		{fault{name: "answers that take for ever", check: "speed", level: Fail, says: "2ms a row"}, func(s *Subject, c *clock) {
+			s.Open = func(context.Context) (Process, error) {
+				return process{Law: paced{quick, c, 2 * time.Millisecond}, clock: c}, nil
+			}
+		}},
+		{fault{name: "another answer in each process", check: "fresh", level: Fail, says: "then in a new one"}, func(s *Subject, c *clock) {
+			started := 0
+			s.Open = func(context.Context) (Process, error) {
+				started++
+				shift := 1e-12 * float64(started)
+				return process{Law: each(quick, "die", "chance_white_dwarf", func(_ law.Batch, _ int, v float64) float64 { return v - shift }), clock: c}, nil
+			}
+		}},
+		{fault{name: "another card in each process", check: "describe", level: Fail, says: "version differs"}, func(s *Subject, c *clock) {
+			started := 0
+			s.Open = func(context.Context) (Process, error) {
+				started++
+				version := string(rune('0' + started))
+				return process{Law: carded(quick, func(c *law.Card) { c.Version = version }), clock: c}, nil
+			}
+		}},
+		{fault{name: "starts but once", check: "fresh", level: Fail, says: "no more"}, func(s *Subject, c *clock) {
+			started := 0
+			s.Open = func(context.Context) (Process, error) {
+				if started++; started > 1 {
+					return nil, errors.New("no more")
+				}
+				return process{Law: quick, clock: c}, nil
+			}
+		}},
+		{fault{name: "crashes that were healed", check: "crash", level: Fail, says: "2 times; its log: the last line of its log"}, func(s *Subject, c *clock) {
+			s.Open = func(context.Context) (Process, error) { return process{Law: quick, clock: c, restarts: 2}, nil }
+		}},
+		{fault{name: "slow to end", check: "end", level: Fail, says: "2.5 s"}, func(s *Subject, c *clock) {
+			s.Open = func(context.Context) (Process, error) {
+				return process{Law: quick, clock: c, closing: 2500 * time.Millisecond}, nil
+			}
+		}},
+		{fault{name: "had to be killed", check: "end", level: Fail, says: "killed"}, func(s *Subject, c *clock) {
+			s.Open = func(context.Context) (Process, error) {
+				return process{Law: quick, clock: c, fails: errors.New("killed")}, nil
+			}
+		}},
+		{fault{name: "leaves its socket", check: "end", level: Fail, says: "/tmp/socket"}, func(s *Subject, c *clock) {
+			s.Open = func(context.Context) (Process, error) {
+				return process{Law: quick, clock: c, left: []string{"/tmp/socket"}}, nil
+			}
+			s.Left = func(p Process) []string { return p.(process).left }
+		}},
+		{fault{name: "content with being started by hand", check: "by-hand", level: Warn, says: "exit code 0"}, func(s *Subject, _ *clock) {
+			s.ByHand = func(context.Context) (string, int, error) { return "hello", 0, nil }
+		}},
+		{fault{name: "silent when started by hand", check: "by-hand", level: Warn, says: "said nothing"}, func(s *Subject, _ *clock) {
+			s.ByHand = func(context.Context) (string, int, error) { return " ", 1, nil }
+		}},
+	} {
+		t.Run(x.name, func(t *testing.T) {
+			c := &clock{}
+			s := Subject{Open: func(context.Context) (Process, error) { return process{Law: quick, clock: c}, nil }, now: c.now}
+			x.change(&s, c)
+			expect(t, judged(t, s), x.fault)
+		})
+	}
+}
+
+// A judgement that is interrupted is none.
+func TestInterrupted(t *testing.T) {
+	ctx, cancel := context.WithCancel(context.Background())
+	s := running(builtin(t, "evaporation/page"))
+	var begun []string
+	s.Begins = func(check string) {
+		if begun = append(begun, check); check == "answer" {
+			cancel()
+		}
+	}
+	findings, err := Judge(ctx, s)
+	if !errors.Is(err, context.Canceled) || findings != nil {
+		t.Errorf("got %v, %v", findings, err)
+	}
+	if slices.Contains(begun, "domain") {
+		t.Errorf("went on with %v", begun)
+	}
+}
+
+// Every check that may find something has advice.
+func TestAdvice(t *testing.T) {
+	seen := map[string]bool{}
+	for _, c := range checks {
+		if c.advice == "" || seen[c.word] || c.passed == "" {
+			t.Errorf("check %q: advice %q, passed %q, twice %v", c.word, c.advice, c.passed, seen[c.word])
+		}
+		seen[c.word] = true
+	}
+}
