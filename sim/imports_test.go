@@ -27,6 +27,7 @@ sim/fade                 : sim/num sim/draw sim/physics/... sim/law sim/sky sim/
 sim/engine/...           : sim/num sim/draw sim/physics/... sim/law sim/sky sim/galaxy sim/fade sim/engine gonum.org/v1/gonum/... golang.org/x/sys/cpu
 sim/table                : sim/num sim/law
 sim/rpc/conform          : sim/law sim/law/lawtest sim/scenario/quantity
+sim/rpc/folder           : sim/rpc os os/exec github.com/pelletier/go-toml/v2/...
 sim/rpc                  : sim/num sim/law os os/exec net log github.com/hashicorp/go-plugin google.golang.org/...
 sim/scenario/...         : sim/num sim/draw sim/physics/... sim/law sim/sky sim/galaxy sim/engine sim/fade sim/scenario sim/scenario/quantity github.com/pelletier/go-toml/v2/...
 sim/ensemble             : sim/num sim/draw sim/physics/... sim/law sim/sky sim/galaxy sim/engine sim/fade gonum.org/v1/gonum/...
@@ -50,6 +51,7 @@ sim/draw/...             : sim/internal/... testdata/... os os/exec math/rand/v2
 sim/physics/...          : testdata/... sim/draw os os/exec math/rand/v2
 sim/law/...              : testdata/... os os/exec math/rand/v2
 plugins                  : plugins/... sim/... testdata/... os os/exec math/rand/v2
+plugins/outside/...      : sim/... plugins scenarios testdata/... os os/exec math/rand/v2
 plugins/...              : sim/law/lawtest sim/draw sim/sky testdata/... os os/exec math/rand/v2
 scenarios                : sim/... plugins os
 sim/...                  : sim/law/lawtest plugins plugins/... scenarios testdata/... sim/engine/reference os os/exec flag math/rand/v2
