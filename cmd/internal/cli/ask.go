@@ -15,9 +15,10 @@ import (
 func (p *Program) ask(s *settings) *cobra.Command {
 	question := ""
 	c := &cobra.Command{
-		Use:   "ask process/name key=value...",
+		Use:   "ask law key=value...",
 		Short: "Ask one law one thing",
-		Long: `Ask one law about one object, outside any galaxy.
+		Long: `Ask one law about one object, outside any galaxy. The law is process/name, or the path of a law
+outside the program: a folder with a law.toml, or an executable file.
 
 A key is a parameter of the law, an input of one of its questions, or one of its answers; where a name
 is both, it is the parameter. With an answer given, the one input left open is found, where only one
@@ -32,7 +33,8 @@ process/name', without the log10_ of their names.`,
 			"  wane ask white-dwarf-cooling/mestel-debye mass=0.6Msun age=1Gyr\n" +
 			"  wane ask white-dwarf-cooling/mestel-debye mass=0.6Msun temperature=798K\n" +
 			"  wane ask nucleon-decay/grand-unified mass=0.6Msun lifetime=1e36yr\n" +
-			"  wane ask evaporation/page mass=10Msun --question heat",
+			"  wane ask evaporation/page mass=10Msun --question heat\n" +
+			"  wane ask ./my-burden mass=10Msun",
 		Args: func(_ *cobra.Command, args []string) error {
 			if len(args) == 0 {
 				return fmt.Errorf("ask: which law? want process/name, such as evaporation/page")
@@ -40,13 +42,21 @@ process/name', without the log10_ of their names.`,
 			return nil
 		},
 		ValidArgsFunction: p.completeAsk,
-		RunE: func(_ *cobra.Command, args []string) error {
+		RunE: func(c *cobra.Command, args []string) error {
 			registry, err := p.Builtin()
 			if err != nil {
 				return failed(err)
 			}
+			id, outside := args[0], (*Outside)(nil)
+			if isLawPath(registry, id) {
+				if outside, err = p.openTyped(c.Context(), s, registry, id); err != nil {
+					return err
+				}
+				defer outside.Close()
+				id = outside.id()
+			}
 			answer, err := inquiry.Ask(inquiry.Inquiry{
-				Registry: registry, Defaults: p.Defaults(), ID: args[0], Question: question, Given: args[1:],
+				Registry: registry, Defaults: p.Defaults(), ID: id, Question: question, Given: args[1:],
 			})
 			var wrong *law.Fault
 			if errors.As(err, &wrong) {
@@ -56,7 +66,7 @@ process/name', without the log10_ of their names.`,
 				return err
 			}
 			if s.json {
-				return printJSON(p.Out, answerOf(answer))
+				return printJSON(p.Out, answerOf(answer, outside))
 			}
 			p.printAnswer(s, answer)
 			return nil
@@ -68,6 +78,7 @@ process/name', without the log10_ of their names.`,
 
 type answerJSON struct {
 	Law       string               `json:"law"`
+	Outside   *outsideJSON         `json:"outside,omitempty"`
 	Questions []string             `json:"questions"`
 	Inputs    map[string]valueJSON `json:"inputs"`
 	Outputs   map[string]valueJSON `json:"outputs"`
@@ -82,9 +93,9 @@ type valueJSON struct {
 	Why   string `json:"why,omitempty"`
 }
 
-func answerOf(a *inquiry.Answer) answerJSON {
+func answerOf(a *inquiry.Answer, outside *Outside) answerJSON {
 	out := answerJSON{
-		Law: a.Law, Questions: a.Questions, Inputs: map[string]valueJSON{}, Outputs: map[string]valueJSON{},
+		Law: a.Law, Outside: outsideOf(outside), Questions: a.Questions, Inputs: map[string]valueJSON{}, Outputs: map[string]valueJSON{},
 		Formula: a.Card.Formula, Notes: append([]string{}, a.Notes...), Sources: append([]string{}, a.Card.Sources...),
 	}
 	for _, v := range a.Inputs {

@@ -26,6 +26,7 @@ type cardJSON struct {
 	Parameters []parameterJSON `json:"parameters"`
 	Notes      []string        `json:"notes"`
 	Sources    []string        `json:"sources"`
+	Outside    *outsideJSON    `json:"outside,omitempty"`
 }
 
 type acceptsJSON struct {

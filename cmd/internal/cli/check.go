@@ -10,6 +10,7 @@ import (
 
 func (p *Program) check(s *settings) *cobra.Command {
 	var laws, sets []string
+	var trust bool
 	c := &cobra.Command{
 		Use:   "check scenario",
 		Short: "Check a scenario without running it, and print it laid open",
@@ -19,7 +20,8 @@ func (p *Program) check(s *settings) *cobra.Command {
 			"With --quiet nothing is printed but faults.",
 		Example: "  wane check lantern-reach\n" +
 			"  wane check my-galaxy.toml --quiet && wane run my-galaxy.toml\n" +
-			"  wane check lantern-reach --set nucleon-decay.lifetime=1e35yr --json",
+			"  wane check lantern-reach --set nucleon-decay.lifetime=1e35yr --json\n" +
+			"  wane check lantern-reach --law evaporation=./my-burden",
 		Args: func(_ *cobra.Command, args []string) error {
 			if len(args) != 1 {
 				return fmt.Errorf("check: want one scenario, not %d", len(args))
@@ -27,12 +29,13 @@ func (p *Program) check(s *settings) *cobra.Command {
 			return nil
 		},
 		ValidArgsFunction: p.completeScenario,
-		RunE: func(_ *cobra.Command, args []string) error {
-			sc, registry, err := p.load(s, args[0], scenario.Overrides{Laws: laws, Sets: sets})
+		RunE: func(c *cobra.Command, args []string) error {
+			l, err := p.load(c.Context(), s, args[0], scenario.Overrides{Laws: laws, Sets: sets}, trust)
 			if err != nil {
 				return err
 			}
-			resolved := sc.Resolve(registry)
+			defer l.close()
+			resolved := l.Resolve(l.registry)
 			switch {
 			case s.json:
 				return printJSON(p.Out, resolved)
@@ -42,7 +45,7 @@ func (p *Program) check(s *settings) *cobra.Command {
 			return resolved.Print(p.Out)
 		},
 	}
-	c.Flags().StringArrayVar(&laws, "law", nil, "use this law: `process=name` (repeatable)")
+	lawFlags(c, &laws, &trust)
 	c.Flags().StringArrayVar(&sets, "set", nil, "set `name=value`: process.parameter or galaxy.radius=8kpc (repeatable)")
 	return c
 }

@@ -31,6 +31,7 @@ type Program struct {
 	Defaults func() map[string]string // process to law
 	Embedded fs.FS                    // scenarios that need no file
 	Run      RunFunc
+	Open     OpenFunc // of laws outside the program
 }
 
 // Main runs the command line and returns the exit code. The first interrupt

@@ -12,15 +12,16 @@ import (
 
 func (p *Program) laws(s *settings) *cobra.Command {
 	return &cobra.Command{
-		Use:   "laws [process[/name]]",
+		Use:   "laws [process[/name] | path]",
 		Short: "List the laws, or print one law's card",
 		Long: "List every process with its laws; the one marked * is the default of a scenario that names none.\n" +
 			"With a process, list its laws alone. With process/name, print the law's card in full: its formula,\n" +
-			"parameters with ranges, presets and citations, what it speaks for, assumptions and sources.",
-		Example:           "  wane laws\n  wane laws evaporation\n  wane laws evaporation/page",
+			"parameters with ranges, presets and citations, what it speaks for, assumptions and sources. So it does\n" +
+			"with the path of a law outside the program, a folder with a law.toml or an executable file.",
+		Example:           "  wane laws\n  wane laws evaporation\n  wane laws evaporation/page\n  wane laws ./my-burden",
 		Args:              cobra.MaximumNArgs(1),
 		ValidArgsFunction: p.completeLaws,
-		RunE: func(_ *cobra.Command, args []string) error {
+		RunE: func(c *cobra.Command, args []string) error {
 			registry, err := p.Builtin()
 			if err != nil {
 				return failed(err)
@@ -29,12 +30,20 @@ func (p *Program) laws(s *settings) *cobra.Command {
 			if len(args) == 1 {
 				which = args[0]
 			}
+			if isLawPath(registry, which) {
+				o, err := p.openTyped(c.Context(), s, registry, which)
+				if err != nil {
+					return err
+				}
+				defer o.Close()
+				return p.oneLaw(s, o.card(), o)
+			}
 			if strings.Contains(which, "/") {
 				l, err := inquiry.Find(registry, which)
 				if err != nil {
 					return err
 				}
-				return p.oneLaw(s, l.Describe())
+				return p.oneLaw(s, l.Describe(), nil)
 			}
 			return p.listLaws(s, registry, which)
 		},
@@ -108,10 +117,12 @@ func withNone(lines []lawLine) []lawLine {
 	return out
 }
 
-func (p *Program) oneLaw(s *settings, c law.Card) error {
-	isDefault := p.Defaults()[c.Process] == c.Name
+func (p *Program) oneLaw(s *settings, c law.Card, outside *Outside) error {
+	isDefault := outside == nil && p.Defaults()[c.Process] == c.Name
 	if s.json {
-		return printJSON(p.Out, cardOf(c, isDefault))
+		j := cardOf(c, isDefault)
+		j.Outside = outsideOf(outside)
+		return printJSON(p.Out, j)
 	}
 	printCard(p.Out, c, isDefault)
 	return nil

@@ -3,11 +3,12 @@ package cli
 import (
 	"wane/sim/ensemble"
 	"wane/sim/law"
+	"wane/sim/rpc/folder"
 	"wane/sim/scenario"
 )
 
-// manifest is what is needed to repeat a run. It holds no date and no path,
-// so the same run writes the same bytes.
+// manifest is what is needed to repeat a run. It holds no date, and no path but
+// those of laws outside the program, so the same run writes the same bytes.
 type manifest struct {
 	Schema       string       `json:"schema"`
 	Wane         build        `json:"wane"`
@@ -31,6 +32,29 @@ type lawJSON struct {
 	Name       string           `json:"name"`
 	Version    string           `json:"version"`
 	Parameters []parameterValue `json:"parameters"`
+	Outside    *outsideJSON     `json:"outside,omitempty"`
+}
+
+// outsideJSON is what a law outside the program consists of.
+type outsideJSON struct {
+	Path          string        `json:"path"` // as it was given
+	Digest        string        `json:"digest"`
+	Files         []folder.File `json:"files"`
+	Program       folder.File   `json:"program"`       // what was started
+	Repeatability string        `json:"repeatability"` // portable: the same bits everywhere; or tolerance
+	Tolerance     float64       `json:"tolerance,omitempty"`
+	Runtime       string        `json:"runtime"`
+}
+
+func outsideOf(o *Outside) *outsideJSON {
+	if o == nil {
+		return nil
+	}
+	j := &outsideJSON{Path: o.Path, Digest: o.Digest, Files: o.Files, Program: o.Program, Repeatability: "portable", Runtime: o.Runtime}
+	if t := o.card().Tolerance; t > 0 {
+		j.Repeatability, j.Tolerance = "tolerance", t
+	}
+	return j
 }
 
 // parameterValue is a parameter as a run uses it.
@@ -42,27 +66,28 @@ type parameterValue struct {
 	Citation string `json:"citation"`
 }
 
-func manifestOf(sc *scenario.Scenario, registry *law.Registry, summary *ensemble.Summary) manifest {
+func manifestOf(l *loaded, summary *ensemble.Summary) manifest {
+	sc := l.Scenario
 	return manifest{
 		Schema: "wane-manifest-1", Wane: thisBuild(),
-		Scenario: scenarioJSON{sc.Name, sc.Digest, sc.Text()}, Laws: lawsOf(sc, registry),
+		Scenario: scenarioJSON{sc.Name, sc.Digest, sc.Text()}, Laws: lawsOf(l),
 		Seed: sc.Seed, Objects: summary.Objects, Realisations: summary.Realisations, Requested: summary.Requested,
 		Interrupted: summary.Interrupted,
 	}
 }
 
 // lawsOf lists the laws of a scenario with every parameter.
-func lawsOf(sc *scenario.Scenario, registry *law.Registry) []lawJSON {
+func lawsOf(run *loaded) []lawJSON {
 	out := []lawJSON{}
 	for _, process := range law.Processes {
-		l, ok := registry.Find(process.Name, sc.Laws[process.Name])
+		l, ok := run.registry.Find(process.Name, run.Laws[process.Name])
 		if !ok {
 			continue
 		}
 		c := l.Describe()
-		j := lawJSON{c.Process, c.Name, c.Version, []parameterValue{}}
+		j := lawJSON{c.Process, c.Name, c.Version, []parameterValue{}, outsideOf(run.of(c.Process))}
 		for _, x := range c.Parameters {
-			j.Parameters = append(j.Parameters, parameterOf(x, sc.Parameters[c.Process][x.Name]))
+			j.Parameters = append(j.Parameters, parameterOf(x, run.Parameters[c.Process][x.Name]))
 		}
 		out = append(out, j)
 	}

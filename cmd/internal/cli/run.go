@@ -26,7 +26,7 @@ type runFlags struct {
 	realisations, objects, seed, workers wholeNumber
 	until                                string
 	out                                  string
-	force                                bool
+	force, trust                         bool
 }
 
 func (p *Program) run(s *settings) *cobra.Command {
@@ -39,6 +39,11 @@ summary: for each population its peak, and the dates from which it never again e
 hundredth of that, and at which its last member goes; what took its members; and which law each last
 date hangs on.
 
+A law is named, or given by the path of a law outside the program: a folder with a law.toml, or an
+executable file. A path that you type is started, and its digest shown. One in a scenario file counts
+from that file, and is started only with --trust, or if the file says its digest: [trust] process =
+"sha256:...".
+
 The same scenario, seed and laws give the same answer for any number of workers. An interrupt ends
 the run: what is finished is reported, labelled as such, and the exit code is 130.
 
@@ -48,6 +53,7 @@ or not at all.`,
 		Example: "  wane run lantern-reach\n" +
 			"  wane run scenarios/lantern-reach.toml --realisations 100 --seed 7\n" +
 			"  wane run lantern-reach --law evaporation=black-body\n" +
+			"  wane run lantern-reach --law evaporation=./my-burden\n" +
 			"  wane run lantern-reach --set nucleon-decay.lifetime=1e35yr --set galaxy.radius=8kpc\n" +
 			"  wane run little-lamp --until 1e20yr --out little --force\n" +
 			"  wane run lantern-reach --json | jq '.populations[] | {name, last: .marks.last}'",
@@ -67,7 +73,7 @@ or not at all.`,
 		},
 	}
 	flags := c.Flags()
-	flags.StringArrayVar(&f.laws, "law", nil, "use this law: `process=name` (repeatable)")
+	lawFlags(c, &f.laws, &f.trust)
 	flags.StringArrayVar(&f.sets, "set", nil, "set `name=value`: process.parameter or galaxy.radius=8kpc (repeatable)")
 	flags.Var(&f.realisations, "realisations", "random histories (default: the scenario's)")
 	flags.Var(&f.objects, "objects", "objects to simulate, such as 1e5 (default: the scenario's)")
@@ -77,6 +83,12 @@ or not at all.`,
 	flags.StringVar(&f.out, "out", "", "write the answer to this new folder, `DIR`")
 	flags.BoolVar(&f.force, "force", false, "let --out replace an earlier run's folder")
 	return c
+}
+
+// lawFlags are the flags about laws that run and check have.
+func lawFlags(c *cobra.Command, laws *[]string, trust *bool) {
+	c.Flags().StringArrayVar(laws, "law", nil, "use this law: `process=name` or process=./path (repeatable)")
+	c.Flags().BoolVar(trust, "trust", false, "start the laws outside the program that the scenario file names")
 }
 
 // maxWorkers is more than any machine has cores for; each holds a realisation.
@@ -120,17 +132,18 @@ func (f *runFlags) overrides(c *cobra.Command) (o scenario.Overrides, workers in
 }
 
 func (p *Program) runScenario(ctx context.Context, s *settings, which string, o scenario.Overrides, workers int, f *runFlags) error {
-	sc, registry, err := p.load(s, which, o)
+	l, err := p.load(ctx, s, which, o, f.trust)
 	if err != nil {
 		return err
 	}
+	defer l.close()
 	if f.out != "" {
 		if err := mayWrite(f.out, f.force); err != nil {
 			return bad(err)
 		}
 	}
 	bar := newBar(p.Err, s.quiet)
-	summary, err := p.Run(ctx, sc, registry, workers, bar.set)
+	summary, err := p.Run(ctx, l.Scenario, l.registry, workers, bar.set)
 	bar.close()
 	if err != nil {
 		if ctx.Err() != nil && errors.Is(err, ctx.Err()) {
@@ -141,11 +154,14 @@ func (p *Program) runScenario(ctx context.Context, s *settings, which string, o 
 	if summary.Interrupted && summary.Realisations == 0 {
 		return &fault{ExitInterrupted, errors.New("interrupted before the first realisation was finished")}
 	}
+	if !s.quiet {
+		l.healed(p.Err)
+	}
 	if err := p.printSummary(s, summary); err != nil {
 		return failed(err)
 	}
 	if f.out != "" {
-		files, err := runFiles(sc, registry, summary)
+		files, err := runFiles(l, summary)
 		if err == nil {
 			err = writeFolder(f.out, f.force, files)
 		}
@@ -171,7 +187,7 @@ func (p *Program) printSummary(s *settings, summary *ensemble.Summary) error {
 }
 
 // runFiles is what --out writes.
-func runFiles(sc *scenario.Scenario, registry *law.Registry, summary *ensemble.Summary) (map[string][]byte, error) {
+func runFiles(l *loaded, summary *ensemble.Summary) (map[string][]byte, error) {
 	var text, data, manifest bytes.Buffer
 	if err := report.Text(&text, summary, report.Style{}); err != nil {
 		return nil, err
@@ -179,7 +195,7 @@ func runFiles(sc *scenario.Scenario, registry *law.Registry, summary *ensemble.S
 	if err := report.JSON(&data, summary); err != nil {
 		return nil, err
 	}
-	if err := printJSON(&manifest, manifestOf(sc, registry, summary)); err != nil {
+	if err := printJSON(&manifest, manifestOf(l, summary)); err != nil {
 		return nil, err
 	}
 	return map[string][]byte{

@@ -1,6 +1,7 @@
 package cli
 
 import (
+	"context"
 	"errors"
 	"fmt"
 	"io"
@@ -15,36 +16,103 @@ import (
 	"wane/sim/scenario"
 )
 
-// folder serves the files of one folder of the disk by the paths a person
+// diskFolder serves the files of one folder of the disk by the paths a person
 // gave, so that messages name them so. Nothing outside it is opened.
-type folder struct{ path string }
+type diskFolder struct{ path string }
 
-func (f folder) Open(name string) (fs.File, error) {
+func (f diskFolder) Open(name string) (fs.File, error) {
 	if path.Dir(name) != f.path && path.Clean(name) != f.path {
 		return nil, &fs.PathError{Op: "open", Path: name, Err: fs.ErrNotExist}
 	}
 	return os.Open(filepath.FromSlash(name))
 }
 
-// load reads a scenario by path or by the name of an embedded one, and prints
-// its warnings.
-func (p *Program) load(s *settings, which string, o scenario.Overrides) (*scenario.Scenario, *law.Registry, error) {
+// loaded is a scenario with the laws it may use, and those that had to be
+// opened for it. Whoever loads closes.
+type loaded struct {
+	*scenario.Scenario
+	registry *law.Registry
+	outside  []*Outside
+}
+
+func (l *loaded) close() {
+	for _, o := range l.outside {
+		if o != nil {
+			_ = o.Close() // it has answered; how it ends is no fault of the run
+		}
+	}
+}
+
+// healed says which laws had to be started again. Their answers are what they
+// would have been: each was asked the same once more.
+func (l *loaded) healed(w io.Writer) {
+	for _, o := range l.outside {
+		if n := o.Restarts(); n > 0 {
+			fmt.Fprintf(w, "wane: warning: law %s (%s) ended in the run and was started again: %d times\n", o.Path, o.id(), n)
+		}
+	}
+}
+
+// of returns the law outside the program that a process has, or nil.
+func (l *loaded) of(process string) *Outside {
+	given, outside := l.Outside[process]
+	for _, o := range l.outside {
+		if outside && o.Law == given.Law {
+			return o
+		}
+	}
+	return nil
+}
+
+// load reads a scenario by path or by the name of an embedded one, opens the
+// laws that it or the command line gives by their paths, and prints its
+// warnings. With trust, a scenario file may start what it likes.
+func (p *Program) load(ctx context.Context, s *settings, which string, o scenario.Overrides, trust bool) (*loaded, error) {
 	registry, err := p.Builtin()
 	if err != nil {
-		return nil, nil, failed(err)
+		return nil, failed(err)
 	}
 	fsys, file, err := p.source(which)
 	if err != nil {
-		return nil, nil, bad(err)
+		return nil, bad(err)
+	}
+	l := &loaded{registry: registry}
+	l.outside, o.Outside = p.openGiven(ctx, s, scenario.Paths(fsys, file, o), trust)
+	if err := l.join(ctx, o); err != nil {
+		l.close()
+		return nil, err
 	}
 	sc, warnings, err := scenario.Load(fsys, file, registry, p.Defaults(), o)
 	if !s.quiet {
 		warn(p.Err, warnings)
 	}
 	if err != nil {
-		return nil, nil, bad(err)
+		l.close()
+		return nil, bad(err)
 	}
-	return sc, registry, nil
+	l.Scenario = sc
+	for _, o := range l.outside {
+		if !s.quiet {
+			o.announce(p.Err)
+		}
+	}
+	return l, nil
+}
+
+// join puts the laws that were opened into the registry, each under its own
+// process; where that is not the one it was given for, the scenario says so.
+func (l *loaded) join(ctx context.Context, o scenario.Overrides) error {
+	if ctx.Err() != nil {
+		return &fault{ExitInterrupted, errors.New("interrupted before the run began")}
+	}
+	for _, x := range o.Outside {
+		if x.Fault == nil && x.Law.Describe().Process == x.Process {
+			if err := l.registry.Put(x.Law); err != nil {
+				return bad(err)
+			}
+		}
+	}
+	return nil
 }
 
 func warn(w io.Writer, warnings []scenario.Fault) {
@@ -77,7 +145,7 @@ func (p *Program) source(which string) (fs.FS, string, error) {
 		}
 		return nil, "", fmt.Errorf("scenario %s: no such file%s", which, hint)
 	}
-	return scenario.Layered(folder{path.Dir(file)}, p.Embedded), file, nil
+	return scenario.Layered(diskFolder{path.Dir(file)}, p.Embedded), file, nil
 }
 
 // embedded lists the names of the embedded scenarios.

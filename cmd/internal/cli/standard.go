@@ -16,7 +16,7 @@ import (
 func Standard() *Program {
 	return &Program{
 		Out: os.Stdout, Err: os.Stderr, Builtin: plugins.Builtin, Defaults: plugins.Defaults,
-		Embedded: scenarios.FS, Run: engine,
+		Embedded: scenarios.FS, Run: engine, Open: openFolder,
 	}
 }
 

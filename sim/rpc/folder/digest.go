@@ -45,7 +45,8 @@ var code = map[string]bool{
 // Digest returns "sha256:<hex>", a digest of the law's files, and each file
 // with its own. It is the SHA-256 of a line for each file in the order of
 // their paths: the path, a zero byte, and the SHA-256 of its content in
-// hexadecimal. The error is [Faults].
+// hexadecimal. A program that start names by an absolute path counts as a file of
+// the law, unless it lies where the system has its own. The error is [Faults].
 func (f *Folder) Digest() (sum string, files []File, err error) {
 	if f.bare != "" {
 		one, fault := f.file(f.bare, nil)
@@ -66,6 +67,13 @@ func (f *Folder) Digest() (sum string, files []File, err error) {
 	}
 	if len(faults) == 0 {
 		faults = f.uncovered(names)
+	}
+	if program := f.Start[0]; filepath.IsAbs(program) && !ofSystem(program) && len(faults) == 0 {
+		sum, err := HashFile(program)
+		if err != nil {
+			faults = append(faults, f.at("start", 0, "start: %s: %v", program, reason(err)))
+		}
+		files = append(files, File{program, sum})
 	}
 	if len(faults) > 0 {
 		return "", nil, faults
@@ -157,12 +165,28 @@ func matches(glob, name []string) bool {
 	return ok && err == nil && matches(glob[1:], name[1:])
 }
 
+// ofSystem tells whether a file lies where only the system puts files.
+func ofSystem(name string) bool {
+	for _, dir := range []string{"/usr/", "/bin/", "/sbin/", "/lib/", "/opt/", "/nix/", "/etc/"} {
+		if strings.HasPrefix(filepath.Clean(name), dir) {
+			return true
+		}
+	}
+	return false
+}
+
 // uncovered finds arguments of start that are files of the folder which the
 // digest leaves out: the law could change and nobody would see it.
 func (f *Folder) uncovered(names []string) Faults {
 	var faults Faults
 	for i, a := range f.Start {
-		if filepath.IsAbs(a) || strings.HasPrefix(a, builtPrefix) || i == 0 && !strings.Contains(a, "/") {
+		if filepath.IsAbs(a) {
+			if info, err := os.Stat(a); i > 0 && err == nil && info.Mode().IsRegular() && !ofSystem(a) {
+				faults = append(faults, f.at("start", i, "start: %s lies outside what the digest covers: want a file of the folder, without the folder's path", a))
+			}
+			continue
+		}
+		if strings.HasPrefix(a, builtPrefix) || i == 0 && !strings.Contains(a, "/") {
 			continue
 		}
 		name := path.Clean(a)

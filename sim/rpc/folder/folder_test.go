@@ -154,6 +154,7 @@ func TestDigestChanges(t *testing.T) {
 }
 
 func TestDigestFaults(t *testing.T) {
+	binary := testBinary(t)
 	for _, c := range []struct {
 		what  string
 		files map[string]string
@@ -170,6 +171,8 @@ func TestDigestFaults(t *testing.T) {
 			"DIR/law.toml:2:20: files: \"x/*\": no such file in the folder"},
 		{"what start runs is left out", map[string]string{"law.toml": shellToml + "files = [\"a\"]\n", "a": "", "law.sh": ""}, nil,
 			"DIR/law.toml:1:21: start: law.sh is not among files: want a digest that covers it"},
+		{"a script outside", map[string]string{"law.toml": "start = [\"/bin/sh\", \"" + binary + "\"]\n"}, nil,
+			"DIR/law.toml:1:21: start: " + binary + " lies outside what the digest covers: want a file of the folder, without the folder's path"},
 	} {
 		dir := made(t, c.files)
 		for name, to := range c.links {

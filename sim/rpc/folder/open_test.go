@@ -81,6 +81,9 @@ func TestOpen(t *testing.T) {
 	})
 	for _, path := range []string{dir, filepath.Join(dir, "bare"), filepath.Join(dir, "inside")} {
 		o := answers(t, path, Options{})
+		if path == dir && o.Files[len(o.Files)-1].Path != testBinary(t) {
+			t.Errorf("the digest does not cover the program: %+v", o.Files)
+		}
 		if len(o.Digest) != len("sha256:")+64 || len(o.Files) == 0 || len(o.Program.SHA256) != 64 || !filepath.IsAbs(o.Program.Path) {
 			t.Errorf("%s: %+v", path, o)
 		}
