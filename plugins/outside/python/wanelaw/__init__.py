@@ -36,6 +36,7 @@ python3-grpcio, python3-protobuf).
 
 import sys
 
+from . import exact
 from .card import (Accepts, Card, Clock, Kind, Limit, Outcome, Parameter, Question, Threshold, at, at_parameter)
 from .law import Law, LawError
 from .serve import ask_by_hand, hold_stdout, serve
@@ -43,7 +44,7 @@ from .words import COMPOSITIONS, KINDS, NO_WORD, ORIGINS, PLACES
 
 __all__ = [
     "Accepts", "Card", "Clock", "Kind", "Limit", "Outcome", "Parameter", "Question", "Threshold", "at", "at_parameter",
-    "Law", "LawError", "serve", "COMPOSITIONS", "KINDS", "NO_WORD", "ORIGINS", "PLACES",
+    "Law", "LawError", "exact", "serve", "COMPOSITIONS", "KINDS", "NO_WORD", "ORIGINS", "PLACES",
 ]
 
 # From here on a print() of the law goes to the law's log: standard output
