@@ -15,16 +15,19 @@ import (
 	"wane/cmd/internal/cli"
 	"wane/sim/ensemble"
 	"wane/sim/law"
+	"wane/sim/rpc"
 	"wane/sim/scenario"
 )
 
 // The scripts run wane itself, and slow-wane and broken-wane: the same program
-// over an engine that waits to be interrupted, and one that fails.
+// over an engine that waits to be interrupted, and one that fails. burden-law is
+// a law outside the program.
 func TestMain(m *testing.M) {
 	testscript.Main(m, map[string]func(){
 		"wane":        main,
 		"slow-wane":   func() { os.Exit(with(slow)) },
 		"broken-wane": func() { os.Exit(with(broken)) },
+		"burden-law":  func() { rpc.Serve(burden{}) },
 	})
 }
 

@@ -20,6 +20,14 @@ type Given struct {
 	at place
 }
 
+// File is the file in which the path stands; empty on the command line.
+func (g Given) File() string {
+	if g.Typed {
+		return ""
+	}
+	return g.at.file
+}
+
 // Outside is a law given by its path: opened, or with the reason why it is
 // not.
 type Outside struct {
@@ -122,6 +130,27 @@ func (b *builder) outsideLaw(p law.Process, n *node) {
 		b.s.Outside = map[string]Outside{}
 	}
 	b.s.Outside[p.Name] = *found
+}
+
+// kindOfClosed returns a kind of a population that nobody knows, when it may be
+// one of a law given by a path in whose place another one is used, and the
+// path.
+func (b *builder) kindOfClosed(population *node) (kind, path string) {
+	if len(b.closed) == 0 {
+		return "", ""
+	}
+	path = b.closed[sortedKeys(b.closed)[0]].text
+	n := population.field("kinds")
+	if n == nil {
+		return "", ""
+	}
+	known := b.kinds()
+	for _, item := range append(n.items, n) {
+		if item.form == aText && !contains(known, item.text) {
+			return item.text, path
+		}
+	}
+	return "", ""
 }
 
 // trust checks a table of process = digest. [Paths] has read it.

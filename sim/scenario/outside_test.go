@@ -153,6 +153,9 @@ func TestOutsideFaults(t *testing.T) {
 		{"digests that are none", "[laws]\nevaporation = \"./b\"\n[trust]\nevaporation = \"sha256:12\"\nevaporatoin = 3\n", nil, nil,
 			"main/x.toml:7:15: trust.evaporation: \"sha256:12\": want the digest of the law, \"sha256:\" and 64 hexadecimal digits\n" +
 				"main/x.toml:8:1: trust: unknown process \"evaporatoin\" (did you mean \"evaporation\"?)"},
+		{"another law on top, whose kind a population wants",
+			"[laws]\nevaporation = \"./b\"\n[populations.sparks]\nkinds = [\"ember\"]\n", nil, []string{"evaporation=page"},
+			"main/x.toml:6:14: populations.sparks is left out: no law of this run knows the kind \"ember\" (./b, which may, has another law in its place)"},
 		{"a digest of nothing", "[trust]\nevaporation = \"" + someDigest + "\"\n", nil, nil,
 			"main/x.toml:5:15: trust.evaporation has no effect: the law of the process is page, which is built in"},
 	} {

@@ -24,6 +24,10 @@ func (b *builder) populations(t *node) {
 			b.fault(n.key, "%s: every run counts a population of this name: want another name", key)
 			continue
 		}
+		if kind, path := b.kindOfClosed(n); kind != "" {
+			b.warn(n.key, "%s is left out: no law of this run knows the kind %q (%s, which may, has another law in its place)", key, kind, path)
+			continue
+		}
 		p := galaxy.Population{Name: name, Condition: b.condition(key, n)}
 		b.set(key, n.key)
 		b.keep(p)

@@ -6,6 +6,7 @@ import (
 	"fmt"
 	"io"
 	"os"
+	"path/filepath"
 	"strings"
 	"sync"
 
@@ -52,15 +53,21 @@ func (o *Outside) announce(w io.Writer) {
 }
 
 // isLawPath tells whether the law that a command is asked about is given by its
-// path: it begins with a full stop or a slash, or is no law's process/name but
-// something on the disk.
+// path: it begins with a full stop or a slash, or names neither a law nor a
+// process but something on the disk.
 func isLawPath(registry *law.Registry, which string) bool {
 	if strings.HasPrefix(which, ".") || strings.HasPrefix(which, "/") {
 		return true
 	}
 	process, name, slash := strings.Cut(which, "/")
-	if _, known := registry.Find(process, name); known || !slash {
+	if _, known := registry.Find(process, name); known {
 		return false
+	}
+	if !slash {
+		if _, known := law.ProcessNamed(which); known {
+			return false
+		}
+		which = filepath.Join(which, "law.toml")
 	}
 	_, err := os.Stat(which)
 	return err == nil
@@ -118,10 +125,24 @@ func (p *Program) openOne(ctx context.Context, s *settings, g scenario.Given, tr
 			g.Path, changed.Want, changed.Got)
 	}
 	if err != nil {
-		return nil, err
+		return nil, p.meantBuiltin(g, err)
 	}
 	o.Path = g.Written
 	return o, nil
+}
+
+// meantBuiltin adds to a fault that a path in the form of process/name was
+// meant for the law of that name.
+func (p *Program) meantBuiltin(g scenario.Given, err error) error {
+	registry, failure := p.Builtin()
+	process, name, _ := strings.Cut(g.Written, "/")
+	if failure != nil || process != g.Process {
+		return err
+	}
+	if _, known := registry.Find(process, name); known {
+		return fmt.Errorf("%w (a law that is built in goes by its name alone: %s)", err, name)
+	}
+	return err
 }
 
 // untrusted is the fault of a scenario file that wants a program started which
@@ -131,9 +152,17 @@ func untrusted(g scenario.Given) error {
 	if err != nil {
 		return err
 	}
-	sum, _, err := f.Digest()
+	sum, files, err := f.Digest()
 	if err != nil {
 		return err
+	}
+	if full, err := filepath.Abs(g.File()); err == nil {
+		for _, x := range files {
+			if filepath.Join(f.Dir, filepath.FromSlash(x.Path)) == full {
+				return fmt.Errorf("%s is a program of its own, and a scenario file starts none by itself: --trust starts it. "+
+					"Its digest cannot stand in this file, for it covers the file: move it, or list the law's files in its law.toml (files)", g.Path)
+			}
+		}
 	}
 	return fmt.Errorf("%s is a program of its own, and a scenario file starts none by itself. "+
 		"If you know it: --trust, or in the file\n  [trust]\n  %s = %q", g.Path, g.Process, sum)

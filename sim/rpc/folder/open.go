@@ -64,14 +64,18 @@ func (f *Folder) Open(ctx context.Context, o Options) (*Opened, error) {
 	}
 	opened := &Opened{Path: f.Path, Dir: f.Dir, Digest: sum, Files: files, Program: program}
 	limits := o.Limits
-	limits.BeforeRestart = func() error { return f.same(sum, program) }
+	started, err := os.Stat(program.Path)
+	if err != nil {
+		return nil, fmt.Errorf("law %s: %w", f.Path, err)
+	}
+	limits.BeforeRestart = func() error { return f.same(sum, program, started) }
 	opened.Law, err = rpc.Open(ctx, rpc.Start{
 		Name: f.Path, Args: words, Dir: f.Dir, Log: o.Log, Env: f.environment(), Options: limits,
 	})
 	if err != nil {
 		return nil, err
 	}
-	if err := opened.check(f); err != nil {
+	if err := opened.check(f, started); err != nil {
 		return nil, errors.Join(err, opened.Law.Close())
 	}
 	return opened, nil
@@ -81,16 +85,17 @@ func (f *Folder) Open(ctx context.Context, o Options) (*Opened, error) {
 func (o *Opened) Close() error { return o.Law.Close() }
 
 // check finds what can be found only once the law has started.
-func (o *Opened) check(f *Folder) error {
+func (o *Opened) check(f *Folder, started os.FileInfo) error {
 	card := o.Law.Describe()
 	if is := card.Process + "/" + card.Name; f.Name != "" && f.Name != is {
 		return Faults{f.at("name", 0, "name: %q, but its card says %q", f.Name, is)}
 	}
-	return f.same(o.Digest, o.Program)
+	return f.same(o.Digest, o.Program, started)
 }
 
-// same tells whether the law still consists of what it did.
-func (f *Folder) same(sum string, program File) error {
+// same tells whether the law still consists of what it did. A program outside
+// the folder may be large: it is looked at, not read again.
+func (f *Folder) same(sum string, program File, started os.FileInfo) error {
 	now, _, err := f.Digest()
 	if err != nil {
 		return err
@@ -98,7 +103,8 @@ func (f *Folder) same(sum string, program File) error {
 	if now != sum {
 		return &Changed{f.Path, sum, now}
 	}
-	if is, err := HashFile(program.Path); err != nil || is != program.SHA256 {
+	is, err := os.Stat(program.Path)
+	if err != nil || !os.SameFile(is, started) || is.Size() != started.Size() || !is.ModTime().Equal(started.ModTime()) {
 		return fmt.Errorf("law %s: its program %s has been replaced", f.Path, program.Path)
 	}
 	return nil
