@@ -85,7 +85,9 @@ def power(x, y):
 
 def _in_blocks(f, *arguments):
     """f of flat doubles, block by block, in the shape of the arguments."""
-    arrays = np.broadcast_arrays(*[np.asarray(a, dtype=np.float64) for a in arguments])
+    arrays = [np.asarray(a, dtype=np.float64) for a in arguments]
+    if len(arrays) > 1:
+        arrays = np.broadcast_arrays(*arrays)
     shape, flat = arrays[0].shape, [np.ascontiguousarray(a).reshape(-1) for a in arrays]
     with np.errstate(all="ignore"):
         if flat[0].size <= _BLOCK:

@@ -39,6 +39,7 @@ def serve(card, *answers):
     if os.environ.get(COOKIE[0]) != COOKIE[1]:
         sys.exit(_by_hand(card, answers, sys.argv))
     hold_stdout()
+    _keep_memory()
     try:
         law = Law(card, *answers)
         import grpc
@@ -50,6 +51,19 @@ def serve(card, *answers):
         sys.exit("wanelaw: %s; a law in Python needs Debian's python3-grpcio, python3-protobuf and python3-numpy, and law.toml must name "
                  "the interpreter that sees them (/usr/bin/python3)" % e)
     _run(law, message, grpc, wire)
+
+
+def _keep_memory():
+    """Has freed memory kept for the next batch: numpy's columns would else go
+    back to the system each time, and cost more than what is computed."""
+    trim_threshold, mmap_threshold = -1, -3  # of malloc.h
+    try:
+        import ctypes
+        libc = ctypes.CDLL(None)
+        libc.mallopt(trim_threshold, 1 << 29)
+        libc.mallopt(mmap_threshold, 1 << 25)
+    except (ImportError, OSError, AttributeError):
+        pass  # another libc does as it likes
 
 
 def _run(law, message, grpc, wire):

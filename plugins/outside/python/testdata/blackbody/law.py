@@ -9,6 +9,10 @@ ALPHA = float.fromhex("0x1.5bade52f95e69p-16")  # 1/(15360 pi)
 LOSS_UNIT = float.fromhex("0x1.43599734c215dp-210")  # hbar c^4/G^2 in solMass^3/yr
 SUN_TEMPERATURE = float.fromhex("0x1.0902bb0e0420ep-24")  # hbar c^3/(8 pi G solMass k), K
 
+LOG10_RATE = exact.log10(ALPHA) + exact.log10(LOSS_UNIT)  # of one solar mass
+LOG10_LIFE = exact.log10(3 * ALPHA * LOSS_UNIT)
+LOG10_TEMPERATURE = exact.log10(SUN_TEMPERATURE)
+
 HOLES = ["black-hole", "central-hole"]
 
 card = wanelaw.Card(
@@ -27,16 +31,16 @@ card = wanelaw.Card(
 
 
 def wear(mass):
-    rate = exact.log10(ALPHA) + exact.log10(LOSS_UNIT) - 2 * exact.log10(mass)
+    rate = LOG10_RATE - 2 * exact.log10(mass)
     return np.where(mass > 0, rate, -np.inf), 0
 
 
 def foretell(mass):
-    return np.maximum(-1000, 3 * exact.log10(mass) - exact.log10(3 * ALPHA * LOSS_UNIT))
+    return np.maximum(-1000, 3 * exact.log10(mass) - LOG10_LIFE)
 
 
 def heat(mass):
-    return np.where(mass > 0, exact.log10(SUN_TEMPERATURE) - exact.log10(mass), -np.inf)
+    return np.where(mass > 0, LOG10_TEMPERATURE - exact.log10(mass), -np.inf)
 
 
 if __name__ == "__main__":
