@@ -2,6 +2,7 @@ package folder
 
 import (
 	"context"
+	"errors"
 	"fmt"
 	"io"
 	"os"
@@ -33,17 +34,24 @@ func (f *Folder) Build(ctx context.Context, log io.Writer) error {
 	if err != nil {
 		return fmt.Errorf("law %s: build: %w", f.Path, err)
 	}
-	if !f.hangsOnOthers() && fresh(place, sum) {
+	before := fresh(place, sum)
+	if before && !f.hangsOnOthers() {
 		return nil
 	}
-	if log != nil {
+	if log != nil && !before {
 		fmt.Fprintf(log, "building law %s\n", f.Path)
 	}
+	sweep(place)
 	work, err := os.MkdirTemp(place, "new-")
 	if err != nil {
 		return fmt.Errorf("law %s: build: %w", f.Path, err)
 	}
 	defer os.RemoveAll(work)
+	if before { // the go command looks at what is there, and is done at once if it will do
+		if err := copyNoted(place, work); err != nil {
+			return fmt.Errorf("law %s: build: %w", f.Path, err)
+		}
+	}
 	if err := f.runBuild(ctx, work); err != nil {
 		return err
 	}
@@ -169,24 +177,65 @@ func (f *Folder) settle(place, work, sum string) error {
 	return nil
 }
 
+// noted reads the note beside what was built: from which sources, and which
+// files with which digests.
+func noted(place string) (sum string, files []File) {
+	note, err := os.ReadFile(filepath.Join(place, noteName))
+	if err != nil {
+		return "", nil
+	}
+	lines := strings.Split(strings.TrimSpace(string(note)), "\n")
+	for _, l := range lines[1:] {
+		digest, name, _ := strings.Cut(l, " ")
+		files = append(files, File{filepath.Base(name), digest})
+	}
+	return lines[0], files
+}
+
 // fresh tells whether what lies in a place was built from these sources, and
 // is still what was built.
 func fresh(place, sum string) bool {
-	note, err := os.ReadFile(filepath.Join(place, noteName))
-	if err != nil {
+	from, files := noted(place)
+	if from != sum || len(files) == 0 {
 		return false
 	}
-	lines := strings.Split(strings.TrimSpace(string(note)), "\n")
-	if lines[0] != sum || len(lines) < 2 {
-		return false
-	}
-	for _, l := range lines[1:] {
-		digest, name, _ := strings.Cut(l, " ")
-		if got, err := HashFile(filepath.Join(place, name)); err != nil || got != digest {
+	for _, f := range files {
+		if got, err := HashFile(filepath.Join(place, f.Path)); err != nil || got != f.SHA256 {
 			return false
 		}
 	}
 	return true
+}
+
+// copyNoted copies what was built.
+func copyNoted(place, to string) error {
+	_, files := noted(place)
+	for _, f := range files {
+		in, err := os.Open(filepath.Join(place, f.Path))
+		if err != nil {
+			return err
+		}
+		out, err := os.OpenFile(filepath.Join(to, f.Path), os.O_CREATE|os.O_EXCL|os.O_WRONLY, 0o755)
+		if err == nil {
+			_, err = io.Copy(out, in)
+			err = errors.Join(err, out.Close())
+		}
+		if err = errors.Join(err, in.Close()); err != nil {
+			return err
+		}
+	}
+	return nil
+}
+
+// sweep removes what builds that were killed have left.
+func sweep(place string) {
+	entries, _ := os.ReadDir(place)
+	for _, e := range entries {
+		info, err := e.Info()
+		if err == nil && e.IsDir() && strings.HasPrefix(e.Name(), "new-") && time.Since(info.ModTime()) > 2*longestBuild {
+			os.RemoveAll(filepath.Join(place, e.Name()))
+		}
+	}
 }
 
 // tail is the last lines of a text.
