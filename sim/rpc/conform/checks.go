@@ -9,6 +9,8 @@ type check struct {
 
 // checks are all that is judged, in the order in which it is told.
 var checks = []check{
+	{"folder", "the folder is in order and its program is there",
+		"correct law.toml, or what the build says; 'wane law new' makes a folder that is in order"},
 	{"start", "starts and shows a card",
 		"start it by hand and read what it says; law.toml says how it is started"},
 	{"by-hand", "started by hand it says what it is and ends",

@@ -38,6 +38,9 @@ type Process interface {
 
 // Subject is the law to be judged.
 type Subject struct {
+	// Ready makes what is to be started, such as a program out of its source.
+	// Nil: there is nothing to be made. Its error is like that of Open.
+	Ready func(context.Context) error
 	// Open starts the law, each time in a process of its own. Its error may
 	// hold several faults, as errors.Join makes.
 	Open func(context.Context) (Process, error)
@@ -110,6 +113,9 @@ func (j *judge) found(check, question string, level Level, format string, a ...a
 }
 
 func (j *judge) all() {
+	if !j.ready() {
+		return
+	}
 	p, ok := j.start()
 	if !ok {
 		return

@@ -111,6 +111,7 @@ func TestSoundLawsPass(t *testing.T) {
 	for _, id := range []string{"evaporation/page", "white-dwarf-cooling/mestel-debye", "remnant/cummings", "ejection/contracting"} {
 		t.Run(id, func(t *testing.T) {
 			s := running(builtin(t, id))
+			s.Ready = func(context.Context) error { return nil }
 			s.ByHand = func(context.Context) (string, int, error) { return "this is a law", 1, nil }
 			s.Left = func(Process) []string { return nil }
 			s.Among = []law.Law{builtin(t, "collapse/raithel")}

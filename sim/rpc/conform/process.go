@@ -8,6 +8,7 @@ import (
 
 	"wane/sim/law"
 	"wane/sim/law/lawtest"
+	"wane/sim/rpc/folder"
 	"wane/sim/scenario/quantity"
 )
 
@@ -26,18 +27,37 @@ const (
 
 // faults lists what an error is made of.
 func faults(err error) []string {
-	var joined interface{ Unwrap() []error }
-	if e, ok := err.(interface{ Unwrap() []error }); ok {
-		joined = e
+	var out []string
+	if f, ok := err.(folder.Faults); ok {
+		for _, each := range f {
+			out = append(out, each.Error())
+		}
+		return out
 	}
-	if joined == nil {
+	joined, ok := err.(interface{ Unwrap() []error })
+	if !ok {
 		return []string{err.Error()}
 	}
-	var out []string
 	for _, e := range joined.Unwrap() {
 		out = append(out, faults(e)...)
 	}
 	return out
+}
+
+func (j *judge) ready() bool {
+	if j.Ready == nil {
+		return true
+	}
+	if !j.begin("folder") {
+		return false
+	}
+	err := j.Ready(j.ctx)
+	if err != nil {
+		for _, f := range faults(err) {
+			j.found("folder", "", Fail, "%s", f)
+		}
+	}
+	return err == nil
 }
 
 func (j *judge) start() (Process, bool) {

@@ -29,6 +29,9 @@ func TestProcessFaults(t *testing.T) {
 		fault
 		change func(*Subject, *clock)
 	}{
+		{fault{name: "cannot be built", check: "folder", level: Fail, says: "no such package"}, func(s *Subject, _ *clock) {
+			s.Ready = func(context.Context) error { return errors.New("no such package") }
+		}},
 		{fault{name: "does not start", check: "start", level: Fail, says: "second fault"}, func(s *Subject, _ *clock) {
 			s.Open = func(context.Context) (Process, error) {
 				return nil, errors.Join(errors.New("first fault"), errors.New("second fault"))
