@@ -39,6 +39,9 @@ func TestAnswersCross(t *testing.T) {
 			outside := open(t, s)
 			for _, q := range card.Questions {
 				for _, n := range []int{0, 1, 1000, 20000} {
+					if rows > 0 && n > 1000 {
+						continue // two hundred calls tell no more than ten
+					}
 					in := lawtest.Rows(inside, q.Name, n)
 					want, err1 := inside.Answer(q.Name, in)
 					got, err2 := outside.Answer(q.Name, in)
