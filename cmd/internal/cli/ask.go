@@ -10,6 +10,7 @@ import (
 
 	"wane/cmd/internal/inquiry"
 	"wane/sim/law"
+	"wane/sim/rpc"
 )
 
 func (p *Program) ask(s *settings) *cobra.Command {
@@ -58,8 +59,7 @@ process/name', without the log10_ of their names.`,
 			answer, err := inquiry.Ask(inquiry.Inquiry{
 				Registry: registry, Defaults: p.Defaults(), ID: id, Question: question, Given: args[1:],
 			})
-			var wrong *law.Fault
-			if errors.As(err, &wrong) {
+			if ofTheLaw(err) {
 				return failed(err)
 			}
 			if err != nil {
@@ -74,6 +74,14 @@ process/name', without the log10_ of their names.`,
 	}
 	c.Flags().StringVar(&question, "question", "", "ask this `question` of the card only (default: all that can be answered)")
 	return c
+}
+
+// ofTheLaw tells whether an error is the law's own, and not the asker's.
+func ofTheLaw(err error) bool {
+	var wrong *law.Fault
+	var cannot *rpc.AnswerError
+	var stopped *rpc.StoppedError
+	return errors.As(err, &wrong) || errors.As(err, &cannot) || errors.As(err, &stopped)
 }
 
 type answerJSON struct {

@@ -75,7 +75,7 @@ func isLawPath(registry *law.Registry, which string) bool {
 
 // openTyped opens the law whose path was typed, and puts it into the registry.
 func (p *Program) openTyped(ctx context.Context, s *settings, registry *law.Registry, path string) (*Outside, error) {
-	o, err := p.Open(ctx, path, folder.Options{Log: p.lawLog(s)})
+	o, err := p.Open(ctx, path, folder.Options{Log: p.lawLog(s, true)})
 	if err != nil {
 		if ctx.Err() != nil {
 			return nil, &fault{ExitInterrupted, errors.New("interrupted")}
@@ -112,7 +112,7 @@ func (p *Program) openGiven(ctx context.Context, s *settings, given []scenario.G
 }
 
 func (p *Program) openOne(ctx context.Context, s *settings, g scenario.Given, trust bool) (*Outside, error) {
-	options := folder.Options{Log: p.lawLog(s)}
+	options := folder.Options{Log: p.lawLog(s, false)}
 	if !g.Typed && !trust {
 		if options.Digest = g.Trust; g.Trust == "" {
 			return nil, untrusted(g)

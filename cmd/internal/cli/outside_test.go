@@ -181,19 +181,30 @@ func TestOutsideThatDoesNotStart(t *testing.T) {
 
 // The logs of laws are shown where they matter, in words.
 func TestLawLog(t *testing.T) {
-	var said bytes.Buffer
-	p := &Program{Err: &said}
-	w := p.lawLog(&settings{})
-	for _, part := range []string{"building law ./x\n{\"level\":\"debug\",\"law\":\"./x\",\"message\":\"loading\"}\n{\"level\":\"warn\",",
-		"\"law\":\"./x\",\"message\":\"a table is short\"}\n"} {
-		if _, err := w.Write([]byte(part)); err != nil {
-			t.Fatal(err)
+	const records = "building law ./x\n" +
+		`{"level":"debug","law":"./x","message":"starting plugin"}
+{"level":"error","law":"./x","message":"plugin process exited"}
+{"level":"debug","law":"./x","from":"x.py","message":"mass is 3"}
+{"level":"debug","law":"./x","from":"x.py","said":"2026-12-01","message":"plugin address"}
+{"level":"warn","law":"./x","from":"x.py","message":"a table is short"}
+{"level":"error","law":"./x","from":"x.py","message":"panic: no mass"}
+{"level":"error","law":"./x","from":"x.py","message":"goroutine 1 [running]:"}
+`
+	const warned = "wane: building law ./x\nwane: law ./x: a table is short\nwane: law ./x: panic: no mass\n"
+	for all, want := range map[bool]string{false: warned, true: strings.Replace(warned, "wane: law", "wane: law ./x: mass is 3\nwane: law", 1)} {
+		var said bytes.Buffer
+		p := &Program{Err: &said}
+		w := p.lawLog(&settings{}, all)
+		for _, part := range []string{records[:100], records[100:]} { // a line may come in pieces
+			if _, err := w.Write([]byte(part)); err != nil {
+				t.Fatal(err)
+			}
+		}
+		if said.String() != want {
+			t.Errorf("all: %v: said\n%s\nwant\n%s", all, said.String(), want)
 		}
 	}
-	if want := "wane: building law ./x\nwane: law ./x: a table is short\n"; said.String() != want {
-		t.Errorf("said %q, want %q", said.String(), want)
-	}
-	if p.lawLog(&settings{quiet: true}) != nil {
+	if (&Program{}).lawLog(&settings{quiet: true}, true) != nil {
 		t.Error("a quiet command has a log")
 	}
 }
