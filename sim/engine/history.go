@@ -178,18 +178,21 @@ func (h *centralHole) swallow(w *Workspace, t, mass float64) {
 	h.grown = t
 }
 
-// look asks, at a refresh, when the hole would end if nothing more fell in. A
-// date that has passed ends it.
+// look finds out, at a refresh, whether the hole has ended. The date at which it
+// would end if nothing more fell in is a lower bound, since a hole that grows
+// later and becomes heavier lasts longer: only once that has passed is the
+// law asked anew.
 func (h *centralHole) look(w *Workspace, t float64) error {
 	if h.mass == 0 {
 		return nil
 	}
-	if h.mass != h.looked {
+	now := num.Log10(t) + w.env.unit
+	if h.mass != h.looked && (h.looked == 0 || h.end.date <= now) {
 		if err := h.foretell(w); err != nil {
 			return err
 		}
 	}
-	if h.end.date <= num.Log10(t)+w.env.unit {
+	if h.end.date <= now {
 		w.env.add(slotCentral, -h.mass)
 		w.books.count(h.end.cause)
 		h.finish()

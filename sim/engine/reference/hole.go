@@ -36,9 +36,10 @@ func (h *hole) swallow(g *run, mass float64) {
 	h.grown = g.log(g.t)
 }
 
-// look ends the hole at a refresh, if its time has come by then.
+// look ends the hole at a refresh, if its time has come by then. What was
+// foretold of a lighter hole is a lower bound for what it has become.
 func (h *hole) look(g *run) error {
-	if h.mass == 0 {
+	if h.mass == 0 || h.looked > 0 && h.end.date > g.log(g.t) {
 		return nil
 	}
 	if err := h.foretell(g); err != nil {
