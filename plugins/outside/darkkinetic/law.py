@@ -44,15 +44,15 @@ card = wanelaw.Card(
 
 def warm(mass, radius, place, p, words):
     r, v = radius * 1e3, p.speed * 1e3
-    r_safe = np.where(r > 0, r, 1.0)  # what has no size yet catches nothing
-    escape2 = np.minimum(2 * G_SUN * mass / r_safe, 0.99 * C * C)  # m2/s2
+    there = (place == words.place("bound")) & (r > 0)
+    escape2 = np.minimum(2 * G_SUN * mass / np.where(there, r, 1.0), 0.99 * C * C)  # m2/s2
     gamma = 1 / np.sqrt(1 - escape2 / (C * C))
-    swept = np.pi * r * r * (1 + escape2 / (v * v) * gamma * gamma)  # m2
+    nucleons = mass * SUN / NUCLEON
+    target = np.minimum(np.pi * r * r, nucleons * wanelaw.exact.exp10(p.cross_section) * 1e-4)  # m2: f pi R^2
+    focus = 1 + escape2 / (v * v) * gamma * gamma  # b^2/R^2
     flux = p.density * GEV * 1e6 * v  # W/m2 of rest energy
-    per_nucleon = wanelaw.exact.exp10(p.cross_section) * 1e-4  # m2
-    caught = np.minimum(1, per_nucleon * mass * SUN / (NUCLEON * np.pi * r_safe * r_safe))
     per_rest = gamma - 1 + (1 if p.annihilates == "yes" else 0)
-    return np.where((place == words.place("bound")) & (r > 0), caught * swept * flux * per_rest, 0.0)
+    return np.where(there, target * focus * flux * per_rest, 0.0)
 
 
 if __name__ == "__main__":
