@@ -8,10 +8,13 @@ import (
 	"wane/sim/law"
 )
 
-// completeLaws completes process or process/name.
+// completeLaws completes process/name, or the path of a law outside the program.
 func (p *Program) completeLaws(_ *cobra.Command, args []string, begun string) ([]string, cobra.ShellCompDirective) {
 	if len(args) > 0 {
 		return nil, cobra.ShellCompDirectiveNoFileComp
+	}
+	if strings.HasPrefix(begun, ".") || strings.HasPrefix(begun, "/") {
+		return nil, cobra.ShellCompDirectiveDefault
 	}
 	registry, err := p.Builtin()
 	if err != nil {

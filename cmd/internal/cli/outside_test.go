@@ -168,6 +168,23 @@ func TestOutsideTwin(t *testing.T) {
 	}
 }
 
+// What is interrupted while a law is being started ends as what is interrupted.
+func TestOutsideInterrupted(t *testing.T) {
+	s := &strangers{law: builtin(t, "evaporation", "page"), err: context.Canceled}
+	ctx, cancel := context.WithCancel(context.Background())
+	cancel()
+	p := Standard()
+	p.Err, p.Open = &bytes.Buffer{}, s.openLaw
+	for _, args := range []string{"run little-lamp --law evaporation=./x", "ask ./x mass=1Msun", "check little-lamp --law evaporation=./x"} {
+		root := p.root()
+		root.SetArgs(strings.Fields(args))
+		var f *fault
+		if err := root.ExecuteContext(ctx); !errors.As(err, &f) || f.code != ExitInterrupted {
+			t.Errorf("wane %s: %v, want an exit code of %d", args, err, ExitInterrupted)
+		}
+	}
+}
+
 // A law that does not start is a fault of the input.
 func TestOutsideThatDoesNotStart(t *testing.T) {
 	s := &strangers{err: errors.New("law ./x: it is no law: it ended before it said where it listens")}

@@ -14,6 +14,9 @@ import (
 	"wane/sim/rpc"
 )
 
+// deadly is a mass that ends the law's process.
+const deadly = 666
+
 // served is what the test binary serves when a test starts it as a law.
 type served struct{}
 
@@ -28,6 +31,9 @@ func (served) Describe() law.Card {
 func (served) Answer(_ string, in law.Batch) (law.Batch, error) {
 	rate, heat := in.NewValues(), in.NewValues()
 	for i, m := range in.Values("mass") {
+		if m == deadly {
+			os.Exit(3)
+		}
 		rate[i], heat[i] = -m, 0
 	}
 	return in.Answer(law.Numbers("log10_rate", rate), law.Numbers("heat", heat)), nil
@@ -177,6 +183,33 @@ func TestChangedMeanwhile(t *testing.T) {
 	var changed *Changed
 	if _, err := Open(context.Background(), dir, Options{}); !errors.As(err, &changed) {
 		t.Errorf("a law that changes as it starts: %v", err)
+	}
+}
+
+// A law whose files have been replaced is not started again.
+func TestReplacedWhileRunning(t *testing.T) {
+	dir := made(t, map[string]string{"law.toml": "start = [\"./run\"]\n", "run*": script(t)})
+	l, err := Open(context.Background(), dir, Options{})
+	if err != nil {
+		t.Fatal(err)
+	}
+	defer l.Close()
+	if err := os.WriteFile(filepath.Join(dir, "run"), []byte(script(t)+"# another\n"), 0o755); err != nil {
+		t.Fatal(err)
+	}
+	ask := func(mass float64) error {
+		_, err := l.Law.Answer("wear", law.Batch{Rows: 1, Columns: []law.Column{law.Numbers("mass", []float64{mass})}})
+		return err
+	}
+	if err := ask(1); err != nil {
+		t.Errorf("the law that still runs: %v", err)
+	}
+	sum, _, err := (&Folder{Path: dir, Dir: dir, Start: []string{"./run"}}).Digest()
+	if err != nil {
+		t.Fatal(err)
+	}
+	if err := ask(deadly); err == nil || !strings.Contains(err.Error(), "has changed: its digest was "+l.Digest+" and is "+sum) {
+		t.Errorf("a law that was replaced: %v", err)
 	}
 }
 
