@@ -96,7 +96,7 @@ func (p *Program) root() *cobra.Command {
 	root.PersistentFlags().BoolVar(&s.json, "json", false, "print JSON instead of text")
 	root.PersistentFlags().BoolVarP(&s.quiet, "quiet", "q", false, "print the answer only: no progress, no warnings, no remarks")
 	root.SetHelpTemplate(root.HelpTemplate() + exitCodes)
-	root.AddCommand(p.run(s), p.check(s), p.scenarios(s), p.laws(s), p.ask(s), p.schema(s), p.version(s))
+	root.AddCommand(p.run(s), p.check(s), p.scenarios(s), p.laws(s), p.ask(s), p.law(s), p.schema(s), p.version(s))
 	for _, c := range append(root.Commands(), root) {
 		c.Long = wrapped(c.Long)
 	}

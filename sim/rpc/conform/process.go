@@ -2,12 +2,14 @@ package conform
 
 import (
 	"context"
+	"errors"
 	"reflect"
 	"strings"
 	"time"
 
 	"wane/sim/law"
 	"wane/sim/law/lawtest"
+	"wane/sim/rpc"
 	"wane/sim/rpc/folder"
 	"wane/sim/scenario/quantity"
 )
@@ -67,15 +69,35 @@ func (j *judge) start() (Process, bool) {
 	from := j.now()
 	p, err := j.Open(j.ctx)
 	if err != nil {
-		for _, f := range faults(err) {
-			j.found("start", "", Fail, "%s", f)
-		}
+		j.unstarted(err)
 		return nil, false
 	}
 	if took := j.now().Sub(from); took > startSlow {
 		j.found("start", "", Warn, "it took %.1f s to start; every run waits for it", took.Seconds())
 	}
 	return p, true
+}
+
+// unstarted tells why a law did not start, each fault of its card by itself.
+func (j *judge) unstarted(err error) {
+	var card *rpc.CardError
+	if !errors.As(err, &card) {
+		for _, f := range faults(err) {
+			j.found("start", "", Fail, "%s", f)
+		}
+		return
+	}
+	for _, f := range card.Faults {
+		check, text := "card", f.Error()
+		switch {
+		case strings.Contains(text, "when asked for twice"):
+			check = "describe"
+		case strings.Contains(text, " unit "):
+			check = "units"
+		}
+		j.begun = append(j.begun, check)
+		j.found(check, "", Fail, "%s", text)
+	}
 }
 
 func (j *judge) byHand() {
