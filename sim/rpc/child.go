@@ -46,8 +46,11 @@ func startChild(ctx context.Context, s Start, folder string, log *logger, errs *
 		SyncStdout:       errs,
 		SyncStderr:       errs,
 		Logger:           log,
-		GRPCDialOptions: []grpc.DialOption{grpc.WithDefaultCallOptions(
-			grpc.ForceCodecV2(newCodec()), grpc.MaxCallRecvMsgSize(largestMessage), grpc.MaxCallSendMsgSize(largestMessage))},
+		GRPCDialOptions: []grpc.DialOption{
+			grpc.WithDefaultCallOptions(
+				grpc.ForceCodecV2(newCodec()), grpc.MaxCallRecvMsgSize(largestMessage), grpc.MaxCallSendMsgSize(largestMessage)),
+			grpc.WithInitialWindowSize(window), grpc.WithInitialConnWindowSize(2 * window),
+		},
 	})
 	done := make(chan error, 1)
 	go func() { done <- c.connect() }()

@@ -22,6 +22,11 @@ import (
 // widest question with room to spare.
 const largestMessage = 64 << 20
 
+// window is how many bytes may be under way before the other side has taken
+// them. A window of fixed size needs no probing for a better one, which would
+// be a round trip of its own beside each small call.
+const window = 16 << 20
+
 // Serve is the main of an outside law in Go: it answers the host's questions
 // until the host ends the process. Started by hand it says what it is, on
 // standard error, and exits with 1. Standard output belongs to the protocol
@@ -39,7 +44,9 @@ func Serve(l law.Law) {
 		HandshakeConfig:  handshake(),
 		VersionedPlugins: plugins(func(g *grpc.Server) { g.RegisterService(s.service(), s) }),
 		GRPCServer: func(o []grpc.ServerOption) *grpc.Server {
-			return grpc.NewServer(append(o, grpc.ForceServerCodecV2(newCodec()), grpc.MaxRecvMsgSize(largestMessage), grpc.MaxSendMsgSize(largestMessage))...)
+			return grpc.NewServer(append(o,
+				grpc.ForceServerCodecV2(newCodec()), grpc.MaxRecvMsgSize(largestMessage), grpc.MaxSendMsgSize(largestMessage),
+				grpc.InitialWindowSize(window), grpc.InitialConnWindowSize(2*window))...)
 		},
 		Logger: hclog.New(&hclog.LoggerOptions{Level: hclog.Warn, Output: os.Stderr, JSONFormat: true}),
 	})
