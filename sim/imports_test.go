@@ -39,6 +39,7 @@ plugins/...              : sim/num sim/physics/... sim/law gonum.org/v1/gonum/..
 scenarios                :
 testdata/published       :
 testdata/reference       : os os/exec
+cmd/internal/newlaw      : sim sim/law plugins/outside/python os
 cmd/internal/...         : sim/... plugins scenarios cmd/internal/... os os/exec os/signal syscall flag net log github.com/... golang.org/x/term gonum.org/v1/...
 cmd/...                  : sim/... plugins plugins/... scenarios cmd/internal/... os os/exec os/signal syscall flag net log github.com/...
 `
@@ -52,12 +53,13 @@ sim/draw/...             : sim/internal/... testdata/... os os/exec math/rand/v2
 sim/physics/...          : testdata/... sim/draw os os/exec math/rand/v2
 sim/law/...              : testdata/... os os/exec math/rand/v2
 plugins                  : plugins/... sim/... testdata/... os os/exec math/rand/v2
-plugins/outside/...      : sim/... plugins scenarios testdata/... os os/exec math/rand/v2
+plugins/outside/...      : sim/... plugins plugins/outside/python scenarios testdata/... os os/exec math/rand/v2
 plugins/...              : sim/law/lawtest sim/draw sim/sky testdata/... os os/exec math/rand/v2
 scenarios                : sim/... plugins os
+sim/rpc/...              : sim/... plugins testdata/... os os/exec syscall math/rand/v2
 sim/...                  : sim/law/lawtest plugins plugins/... scenarios testdata/... sim/engine/reference os os/exec flag math/rand/v2
 testdata/...             : os
-cmd/...                  : scenarios plugins plugins/... testdata/... sim/... os os/exec math/rand/v2
+cmd/...                  : scenarios plugins plugins/... testdata/... sim/... os os/exec math/rand/v2 flag
 `
 
 // testLibraries are for tests of any package.
@@ -150,6 +152,14 @@ func TestImports(t *testing.T) {
 			}
 			if f.test && fits("net/...", name) {
 				t.Errorf("%s imports %s: no test needs the network", f.path, name)
+			}
+		}
+	}
+	for _, f := range goFiles(t) {
+		for _, name := range f.imports {
+			own, _ := strings.CutPrefix(name, "wane/")
+			if fits("sim/rpc/...", own) && !f.test && !fitsAny([]string{"sim/rpc/...", "plugins/outside/...", "cmd/..."}, path.Dir(f.path)) {
+				t.Errorf("%s imports %s: only commands start processes", f.path, name)
 			}
 		}
 	}
