@@ -86,7 +86,7 @@ def _run(law, message, grpc, wire):
         except LawError as e:
             return wire.refusal(batch, str(e))
         except BaseException as e:  # whatever the author's function raises, the host is to hear of it
-            return wire.refusal(batch, said(e))
+            return wire.refusal(batch, said(e).encode("utf-8", "replace").decode())
 
     def shutdown(_, __):
         stop.set()
