@@ -24,6 +24,13 @@ type cardJSON struct {
 	Accepts    acceptsJSON     `json:"accepts"`
 	Questions  []questionJSON  `json:"questions"`
 	Parameters []parameterJSON `json:"parameters"`
+	Thresholds []thresholdJSON `json:"thresholds"`
+	Clocks     []clockJSON     `json:"clocks"`
+	Outcomes   []outcomeJSON   `json:"outcomes"`
+	Kinds      []kindJSON      `json:"kinds"`
+	Effect     string          `json:"effect,omitempty"`
+	Wears      string          `json:"wears,omitempty"`
+	Tolerance  float64         `json:"tolerance"` // 0: the same bits everywhere
 	Notes      []string        `json:"notes"`
 	Sources    []string        `json:"sources"`
 	Outside    *outsideJSON    `json:"outside,omitempty"`
@@ -34,6 +41,33 @@ type acceptsJSON struct {
 	Column string   `json:"column,omitempty"`
 	Low    string   `json:"low,omitempty"`
 	High   string   `json:"high,omitempty"`
+}
+
+type thresholdJSON struct {
+	Kind      string   `json:"kind"`
+	Mass      *float64 `json:"mass"` // solMass; null: Parameter says it
+	Parameter string   `json:"parameter,omitempty"`
+	Becomes   string   `json:"becomes"`
+	Outcome   string   `json:"outcome"`
+}
+
+type clockJSON struct {
+	Name    string `json:"name"`
+	Outcome string `json:"outcome"`
+	Fate    string `json:"fate"`
+	Doc     string `json:"doc"`
+}
+
+type outcomeJSON struct {
+	Word    string `json:"word"`
+	Becomes string `json:"becomes,omitempty"`
+	Doc     string `json:"doc"`
+}
+
+type kindJSON struct {
+	Name        string `json:"name"`
+	Composition string `json:"composition"`
+	Doc         string `json:"doc"`
 }
 
 type questionJSON struct {
@@ -65,6 +99,7 @@ func cardOf(c law.Card, isDefault bool) cardJSON {
 	for _, q := range c.Questions {
 		out.Questions = append(out.Questions, questionJSON{q.Name, append([]string{}, q.Inputs...), c.Outputs(q.Name)})
 	}
+	out.doings(c)
 	for _, x := range c.Parameters {
 		j := parameterJSON{Name: x.Name, Unit: x.Unit, Log10: x.Log10, Words: x.Words, Doc: x.Doc, Citation: x.Citation}
 		if len(x.Words) > 0 {
@@ -75,6 +110,32 @@ func cardOf(c law.Card, isDefault bool) cardJSON {
 		out.Parameters = append(out.Parameters, j)
 	}
 	return out
+}
+
+// doings fills in what a law does beside answering.
+func (out *cardJSON) doings(c law.Card) {
+	out.Thresholds, out.Clocks, out.Outcomes, out.Kinds = []thresholdJSON{}, []clockJSON{}, []outcomeJSON{}, []kindJSON{}
+	out.Effect, out.Wears, out.Tolerance = c.Effect, c.Wears, c.Tolerance
+	for _, x := range c.Thresholds {
+		j := thresholdJSON{Kind: x.Kind, Parameter: x.Parameter, Becomes: x.Becomes, Outcome: x.Outcome}
+		if x.Parameter == "" {
+			j.Mass = finite(x.Mass)
+		}
+		out.Thresholds = append(out.Thresholds, j)
+	}
+	for _, x := range c.Clocks {
+		out.Clocks = append(out.Clocks, clockJSON{x.Name, x.Outcome, string(x.Fate), x.Doc})
+	}
+	for _, x := range c.Outcomes {
+		out.Outcomes = append(out.Outcomes, outcomeJSON{x.Word, x.Becomes, x.Doc})
+	}
+	for _, x := range c.Kinds {
+		j := kindJSON{Name: x.Name, Doc: x.Doc}
+		if int(x.Composition) < len(law.CompositionWords) {
+			j.Composition = law.CompositionWords[x.Composition]
+		}
+		out.Kinds = append(out.Kinds, j)
+	}
 }
 
 // finite is v, or nil (null) where JSON has no word for it.
@@ -121,6 +182,9 @@ func printCard(w io.Writer, c law.Card, isDefault bool) {
 		}
 		field(w, 2, column, "ends", fmt.Sprintf("%s at %s: %s, becomes %s", t.Kind, mass, t.Outcome, t.Becomes))
 	}
+	for _, line := range doings(c) {
+		field(w, 2, column, line[0], line[1])
+	}
 	if len(c.Parameters) > 0 {
 		fmt.Fprintln(w, "\n  parameters")
 		for _, x := range c.Parameters {
@@ -139,6 +203,44 @@ func printCard(w io.Writer, c law.Card, isDefault bool) {
 	}
 	list("notes", c.Notes)
 	list("sources", c.Sources)
+}
+
+// doings says what else a law does: what its rates add up to, the words it
+// picks, what it makes and how exact it is.
+func doings(c law.Card) [][2]string {
+	var out [][2]string
+	add := func(name, text, doc string) {
+		if doc != "" {
+			text += ": " + doc
+		}
+		out = append(out, [2]string{name, text})
+	}
+	for _, x := range c.Clocks {
+		add("clock", fmt.Sprintf("%s (%s, %s)", x.Name, x.Outcome, x.Fate), x.Doc)
+	}
+	if c.StopOutcome != "" {
+		add("in the end", fmt.Sprintf("all still bound are %s (%s)", c.StopOutcome, c.StopFate), "")
+	}
+	for _, x := range c.Outcomes {
+		text := x.Word
+		if x.Becomes != "" {
+			text += ", becomes " + x.Becomes
+		}
+		add("outcome", text, x.Doc)
+	}
+	for _, x := range c.Kinds {
+		add("makes", x.Name, x.Doc)
+	}
+	if c.Effect != "" {
+		add("effect", c.Effect, "")
+	}
+	if c.Wears != "" && c.Wears != "loss" {
+		add("wears", c.Wears, "")
+	}
+	if c.Tolerance > 0 {
+		add("repeats", fmt.Sprintf("to one part in %.3g", 1/c.Tolerance), "")
+	}
+	return out
 }
 
 // speaksFor puts what a law accepts into words.
