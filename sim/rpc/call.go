@@ -74,7 +74,7 @@ func (l *Law) ask(question string, in law.Batch, out []law.Column, from, to int)
 		}
 		return nil
 	}
-	for try := 1; ; try++ {
+	for {
 		c, err := l.running()
 		if err != nil {
 			return err
@@ -94,7 +94,7 @@ func (l *Law) ask(question string, in law.Batch, out []law.Column, from, to int)
 		case !lost(err, c):
 			return &AnswerError{Reason: callFault(err, c, within), Log: l.Log()}
 		}
-		if err := l.replace(c, try, &StoppedError{Batch: seq, Rows: rows, Reason: callFault(err, c, within)}); err != nil {
+		if err := l.replace(c, &StoppedError{Batch: seq, Rows: rows, Reason: callFault(err, c, within)}); err != nil {
 			return err
 		}
 	}
@@ -111,15 +111,15 @@ func (l *Law) running() (*child, error) {
 }
 
 // replace starts another process for one that was lost. When several calls
-// lose the same one, the first replaces it for all. Two losses over one batch,
-// or more in all than are allowed, stop the law for good.
-func (l *Law) replace(c *child, try int, fault *StoppedError) error {
+// lose the same one, the first replaces it for all: none can know whose batch
+// it was. One loss more than is allowed stops the law for good.
+func (l *Law) replace(c *child, fault *StoppedError) error {
 	l.mu.Lock()
 	defer l.mu.Unlock()
 	if l.stopped != nil {
 		return l.stopped
 	}
-	if l.child != c && try == 1 {
+	if l.child != c {
 		return nil
 	}
 	stop := func() error {
@@ -128,7 +128,7 @@ func (l *Law) replace(c *child, try int, fault *StoppedError) error {
 		return fault
 	}
 	_ = c.end(l.start.Ending, true)
-	if try > 1 || l.restarts >= l.start.MaxRestarts {
+	if l.restarts >= l.start.MaxRestarts {
 		return stop()
 	}
 	l.log.Warn("starting the law again", "batch", fault.Batch, "reason", fault.Reason)
