@@ -32,7 +32,7 @@ func startChild(ctx context.Context, s Start, folder string, log *logger, errs *
 		VersionedPlugins: plugins(nil),
 		AllowedProtocols: []plugin.Protocol{plugin.ProtocolGRPC},
 		RunnerFunc: func(_ hclog.Logger, cmd *exec.Cmd, _ string) (runner.Runner, error) {
-			p, err := newProcess(s, cmd.Env)
+			p, err := newProcess(s, cmd.Env, errs)
 			if err != nil {
 				return nil, err
 			}

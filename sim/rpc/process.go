@@ -19,6 +19,7 @@ import (
 type process struct {
 	cmd            *exec.Cmd
 	stdout, stderr io.ReadCloser
+	log            io.Writer // takes what it prints
 	exited         chan struct{}
 
 	mu     sync.Mutex
@@ -30,11 +31,11 @@ var _ runner.Runner = (*process)(nil)
 
 // newProcess prepares the program with the environment that every law gets,
 // besides the few words of go-plugin itself.
-func newProcess(s Start, forPlugin []string) (*process, error) {
+func newProcess(s Start, forPlugin []string, log io.Writer) (*process, error) {
 	if len(s.Args) == 0 {
 		return nil, errors.New("rpc: no program to start")
 	}
-	p := &process{cmd: exec.Command(s.Args[0], s.Args[1:]...), exited: make(chan struct{})}
+	p := &process{cmd: exec.Command(s.Args[0], s.Args[1:]...), log: log, exited: make(chan struct{})}
 	p.cmd.Dir = s.Dir
 	p.cmd.Env = append(append(cleanEnv(), s.Env...), forPlugin...)
 	apart(p.cmd)
@@ -112,7 +113,8 @@ func (p *process) Kill(context.Context) error {
 	return nil
 }
 
-// state says how the program ended; empty if it has not within the time given.
+// state says how the program ended; empty if it has not within the time given,
+// or only because it was made to.
 func (p *process) state(within time.Duration) string {
 	select {
 	case <-p.exited:
@@ -120,13 +122,16 @@ func (p *process) state(within time.Duration) string {
 		return ""
 	}
 	s := p.cmd.ProcessState
-	if s == nil {
+	p.mu.Lock()
+	byUs := p.doomed
+	p.mu.Unlock()
+	if s == nil || byUs && killed(s) {
 		return ""
 	}
 	return s.String()
 }
 
-func (p *process) Stdout() io.ReadCloser           { return p.stdout }
+func (p *process) Stdout() io.ReadCloser           { return &greeting{from: p.stdout, log: p.log} }
 func (p *process) Stderr() io.ReadCloser           { return p.stderr }
 func (p *process) Name() string                    { return "stderr" } // go-plugin calls the law's own lines by it
 func (p *process) Diagnose(context.Context) string { return "" }
