@@ -65,16 +65,20 @@ func (o *Outside) Subject() Subject {
 
 // left looks for the process and the socket of a law that was closed.
 func left(p Process) []string {
-	r, ok := p.(*started)
-	if !ok {
-		return nil
+	if r, ok := p.(*started); ok {
+		return remains(r.pid, r.Dir())
 	}
+	return nil
+}
+
+// remains names a process and a folder, as far as they are there.
+func remains(pid int, sockets string) []string {
 	var out []string
-	if process, err := os.FindProcess(r.pid); err == nil && r.pid > 0 && process.Signal(syscall.Signal(0)) == nil {
-		out = append(out, fmt.Sprintf("the process %d", r.pid))
+	if process, err := os.FindProcess(pid); err == nil && pid > 0 && process.Signal(syscall.Signal(0)) == nil {
+		out = append(out, fmt.Sprintf("the process %d", pid))
 	}
-	if _, err := os.Stat(r.Dir()); err == nil {
-		out = append(out, "the folder of its socket, "+r.Dir())
+	if _, err := os.Stat(sockets); err == nil {
+		out = append(out, "the folder of its socket, "+sockets)
 	}
 	return out
 }

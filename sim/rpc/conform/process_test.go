@@ -3,11 +3,15 @@ package conform
 import (
 	"context"
 	"errors"
+	"fmt"
+	"os"
+	"os/exec"
 	"slices"
 	"testing"
 	"time"
 
 	"wane/sim/law"
+	"wane/sim/rpc"
 )
 
 // paced takes its time for each row.
@@ -37,6 +41,9 @@ func TestProcessFaults(t *testing.T) {
 				return nil, errors.Join(errors.New("first fault"), errors.New("second fault"))
 			}
 		}},
+		{fault{name: "a column in another unit", check: "units", level: Fail, says: `"kg"`}, refused(`card: question wear: column mass: unit "kg", want "solMass"`)},
+		{fault{name: "a card that changes while it is read", check: "describe", level: Fail, says: "twice"}, refused("card: it is not the same when asked for twice")},
+		{fault{name: "a card that the host refuses", check: "card", level: Fail, says: "preset"}, refused("card: parameter x: preset 3 outside 0 .. 1")},
 		{fault{name: "slow to start", check: "start", level: Warn, says: "4.0 s"}, func(s *Subject, c *clock) {
 			s.Open = func(context.Context) (Process, error) {
 				c.pass(4 * time.Second)
@@ -110,6 +117,30 @@ func TestProcessFaults(t *testing.T) {
 			x.change(&s, c)
 			expect(t, judged(t, s), x.fault)
 		})
+	}
+}
+
+// refused is a law whose card has a fault that only shows on its way here.
+func refused(text string) func(*Subject, *clock) {
+	return func(s *Subject, _ *clock) {
+		s.Open = func(context.Context) (Process, error) {
+			return nil, fmt.Errorf("opening: %w", &rpc.CardError{Name: "./it", Faults: []error{errors.New(text)}})
+		}
+	}
+}
+
+// What is left of a process is seen: our own is there, and so is a folder.
+func TestRemains(t *testing.T) {
+	here := t.TempDir()
+	if got := remains(os.Getpid(), here); len(got) != 2 {
+		t.Errorf("of a process that runs: %v", got)
+	}
+	c := exec.Command(os.Args[0], "-test.run", "^$")
+	if err := c.Run(); err != nil {
+		t.Fatal(err)
+	}
+	if got := remains(c.ProcessState.Pid(), here+"/gone"); len(got) != 0 {
+		t.Errorf("of a process that has ended: %v", got)
 	}
 }
 
