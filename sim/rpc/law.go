@@ -35,6 +35,7 @@ type Law struct {
 var (
 	_ law.Law     = (*Law)(nil)
 	_ law.Outside = (*Law)(nil)
+	_ law.Batcher = (*Law)(nil)
 )
 
 // Describe returns the card as it was when the law was opened.
@@ -42,6 +43,9 @@ func (l *Law) Describe() law.Card { return l.card }
 
 // Runtime is what the law runs on, in its own words.
 func (l *Law) Runtime() string { return l.runtime }
+
+// Rows is how many rows go into a call.
+func (l *Law) Rows() int { return l.start.Rows }
 
 // Label is what the person called it.
 func (l *Law) Label() string { return l.start.Name }
