@@ -49,6 +49,9 @@ func (a *asked) Answer(question string, in law.Batch) (law.Batch, error) {
 	return a.Law.Answer(question, in)
 }
 
+// Rows passes on how many rows the law likes at a time.
+func (a *asked) Rows() int { return a.Law.(law.Batcher).Rows() }
+
 // outside starts a built-in law outside the program, with so many rows in a
 // call.
 func outside(t *testing.T, l law.Law, rows int) *asked {
