@@ -55,28 +55,36 @@ func startChild(ctx context.Context, s Start, folder string, log *logger, errs *
 	done := make(chan error, 1)
 	go func() { done <- c.connect() }()
 	var err error
+	settled := false
 	late := time.NewTimer(s.Starting + time.Second)
 	defer late.Stop()
 	select {
 	case err = <-done:
+		settled = true
 	case <-ctx.Done():
 		err = ctx.Err()
 	case <-late.C:
 		err = errors.New("timeout while waiting for plugin to start")
 	}
-	if err != nil { // it may not even have got as far as a process
+	if !settled { // it may not even have got as far as a process
 		select {
 		case c.process = <-made:
-		case failed := <-done:
-			return nil, startFault(failed, s, "")
+		case <-done:
 		}
-	} else {
-		c.process = <-made
+	}
+	if c.process == nil {
+		select {
+		case c.process = <-made:
+		default:
+			return nil, startFault(err, s, "")
+		}
+	}
+	if err == nil {
 		return c, nil
 	}
 	state := ""
-	if c.process.number() != 0 {
-		state = c.process.state(300 * time.Millisecond) // it may be ending by itself just now
+	if c.process.number() != 0 && ctx.Err() == nil {
+		state = c.process.state(time.Second) // it may be ending by itself just now
 	}
 	_ = c.end(s.Ending, true)
 	return nil, startFault(err, s, state)

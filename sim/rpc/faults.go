@@ -18,6 +18,9 @@ import (
 
 // startFault says in the words of this program why a law did not start.
 func startFault(err error, s Start, state string) error {
+	if len(s.Args) == 0 {
+		return err
+	}
 	text := err.Error()
 	program := s.Args[0]
 	switch {
@@ -28,7 +31,7 @@ func startFault(err error, s Start, state string) error {
 	case errors.Is(err, exec.ErrNotFound):
 		return fmt.Errorf("no program %q on the PATH", program)
 	case errors.Is(err, fs.ErrNotExist):
-		if strings.HasPrefix(text, "chdir ") {
+		if _, missing := os.Stat(s.Dir); s.Dir != "" && missing != nil {
 			return fmt.Errorf("no folder %s", s.Dir)
 		}
 		found := program
@@ -45,7 +48,7 @@ func startFault(err error, s Start, state string) error {
 	if line, ok := strings.CutPrefix(text, "Unrecognized remote plugin message: "); ok {
 		line, _, silent := strings.Cut(line, "\nFailed to read any lines")
 		if silent {
-			return fmt.Errorf("it is no law: it ended before it said where it listens%s", parenthesis(state))
+			return saidNothing(state)
 		}
 		return fmt.Errorf("it is no law, or prints before it serves one: got %q on its standard output, which belongs to the protocol", shortened(strings.TrimSpace(line)))
 	}
@@ -57,9 +60,21 @@ func startFault(err error, s Start, state string) error {
 	case strings.HasPrefix(text, "timeout while waiting"):
 		return fmt.Errorf("it is no law, or starts too slowly: no word from it within %v", s.Starting)
 	case strings.HasPrefix(text, "plugin exited before"):
-		return fmt.Errorf("it is no law: it ended before it said where it listens%s", parenthesis(state))
+		return saidNothing(state)
+	case strings.HasPrefix(text, "incompatible core API version"), strings.HasPrefix(text, "unsupported plugin protocol"):
+		first, _, _ := strings.Cut(text, "\n")
+		return fmt.Errorf("it speaks another protocol than laws do: %s", first)
 	}
 	return fmt.Errorf("it does not start: %w%s", err, parenthesis(state))
+}
+
+// saidNothing is the fault of a program that ended, or went on without a word
+// by which it could be reached.
+func saidNothing(state string) error {
+	if state == "" {
+		return errors.New("it is no law: before it said where it listens it closed its standard output, or printed there what is no line")
+	}
+	return fmt.Errorf("it is no law: it ended before it said where it listens (%s)", state)
 }
 
 // callFault says in the words of this program why a call failed. It ends a
@@ -74,7 +89,7 @@ func callFault(err error, c *child, within time.Duration) string {
 	state := c.process.state(time.Second)
 	switch {
 	case state == "":
-		return "the connection broke off"
+		return "the connection broke off: " + status.Convert(err).Message()
 	case killed(c.process.cmd.ProcessState):
 		return "its process ended (" + state + "): did it run out of memory?"
 	}

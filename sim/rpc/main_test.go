@@ -20,7 +20,9 @@ func TestMain(m *testing.M) {
 		rpc.Serve(served(name))
 		return
 	}
-	os.Exit(m.Run())
+	code := m.Run()
+	os.RemoveAll(faultyFolder)
+	os.Exit(code)
 }
 
 func served(name string) law.Law {

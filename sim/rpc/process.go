@@ -131,7 +131,23 @@ func (p *process) state(within time.Duration) string {
 	return s.String()
 }
 
-func (p *process) Stdout() io.ReadCloser           { return &greeting{from: p.stdout, log: p.log} }
+func (p *process) Stdout() io.ReadCloser {
+	return &greeting{from: p.stdout, log: p.log, ends: func() { p.awaitEnd(300 * time.Millisecond) }}
+}
+
+// awaitEnd waits for the end of the program, but not for long.
+func (p *process) awaitEnd(within time.Duration) {
+	over := make(chan struct{})
+	go func() {
+		awaitEnd(p.cmd.Process.Pid)
+		close(over)
+	}()
+	select {
+	case <-over:
+	case <-time.After(within):
+	}
+}
+
 func (p *process) Stderr() io.ReadCloser           { return p.stderr }
 func (p *process) Name() string                    { return "stderr" } // go-plugin calls the law's own lines by it
 func (p *process) Diagnose(context.Context) string { return "" }

@@ -12,6 +12,7 @@ type greeting struct {
 	from io.ReadCloser
 	log  io.Writer
 	over bool
+	ends func() // waits a moment for the process to end
 }
 
 func (g *greeting) Read(p []byte) (int, error) {
@@ -26,6 +27,9 @@ func (g *greeting) Read(p []byte) (int, error) {
 		g.over = true
 		_, _ = g.log.Write(p[end+1 : n])
 		n = end + 1
+	}
+	if err != nil && !g.over {
+		g.ends() // it does, most likely, and how is worth knowing: who sees this will kill it
 	}
 	return n, err
 }

@@ -13,7 +13,7 @@ type tail struct {
 }
 
 const (
-	tailKept  = 16 << 10 // bytes
+	tailKept  = 64 << 10 // bytes: what a Go program says when it dies may be long
 	tailShown = 12       // lines
 	lineShown = 400      // bytes
 )
@@ -42,7 +42,41 @@ func (t *tail) String() string {
 			lines = append(lines, line)
 		}
 	}
+	if at := lastPanic(lines); at >= 0 {
+		return strings.Join(lines[at:min(at+tailShown, len(lines))], "\n")
+	}
 	return strings.Join(lines[max(0, len(lines)-tailShown):], "\n")
+}
+
+// lastPanic finds what a Go program died of, which it says before it tells, at
+// length, where it was: -1 if that is not the end of the log.
+func lastPanic(lines []string) int {
+	for i := len(lines) - 1; i >= 0; i-- {
+		l := lines[i]
+		switch {
+		case strings.HasPrefix(l, "panic: "), strings.HasPrefix(l, "fatal error: "):
+			for i > 0 && strings.HasPrefix(lines[i-1], "runtime: ") {
+				i--
+			}
+			if i > 0 && !traced(lines[i-1]) {
+				i-- // what it was about to do
+			}
+			return i
+		case !traced(l):
+			return -1
+		}
+	}
+	return -1
+}
+
+// traced tells whether a line is one of a stack of calls.
+func traced(line string) bool {
+	for _, start := range []string{"\t", "goroutine ", "created by ", "[signal ", "runtime stack:", "runtime: ", "...", "exit status "} {
+		if strings.HasPrefix(line, start) {
+			return true
+		}
+	}
+	return strings.HasSuffix(line, ")") && strings.Contains(line, "(")
 }
 
 func plain(line string) string {
