@@ -32,8 +32,14 @@ func (a *asker) foundChunk(c *columns, first, n int) error {
 	if err != nil {
 		return err
 	}
+	if err := m.mass.Rises("mass", law.Batch{Columns: a.columns}, out); err != nil {
+		return err
+	}
 	copy(c.mass0[first:first+n], out.Columns[0].Values)
 	if out, err = a.ask(m.birth, "birth", r, drawU); err != nil {
+		return err
+	}
+	if err := m.birth.Rises("birth", law.Batch{Columns: a.columns}, out); err != nil {
 		return err
 	}
 	a.kept = append(a.kept[:0], out.Columns[0].Values...)
@@ -65,6 +71,9 @@ func (a *asker) foundMetals(c *columns, r *rows, dates []float64) error {
 	r.other = append(r.other[:0], law.Numbers("log10_date", dates))
 	out, err := a.ask(a.m.metals, "metals", r, drawU)
 	if err != nil {
+		return err
+	}
+	if err := a.m.metals.Rises("metals", law.Batch{Columns: a.columns}, out); err != nil {
 		return err
 	}
 	z := out.Columns[0].Values

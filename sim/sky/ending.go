@@ -73,6 +73,9 @@ func (s *Sky) firstReached(u *law.Use, dates []float64, logHazard float64) (int,
 	if err != nil {
 		return 0, err
 	}
+	if err := u.Rises("end", in, out); err != nil {
+		return 0, err
+	}
 	hazard := out.Columns[0].Values
 	for i := range hazard {
 		if hazard[i] >= logHazard {
