@@ -98,23 +98,27 @@ func (p *Program) printChecked(s *settings, told checkedJSON) {
 	if told.Law != "" && !s.quiet {
 		fmt.Fprintf(p.Out, "%s, version %s, from %s\n%s\n%s\n\n", told.Law, told.Version, told.Path, told.Digest, told.Runtime)
 	}
-	warned, failures := 0, 0
+	count := map[conform.Level]int{}
+	alike := map[[2]string]int{} // by check and question
 	for _, f := range told.Findings {
-		switch f.Level {
-		case conform.Warn:
-			warned++
-		case conform.Fail:
-			failures++
-		default:
-			if s.quiet {
-				continue
-			}
+		count[f.Level]++
+		alike[[2]string{f.Check, f.Question}]++
+	}
+	shown := map[[2]string]bool{}
+	for _, f := range told.Findings {
+		which := [2]string{f.Check, f.Question}
+		if f.Level == conform.Pass && s.quiet || f.Check != "card" && shown[which] {
+			continue
 		}
+		shown[which] = true
 		text := f.Text
 		if f.Question != "" {
 			text = "question " + f.Question + ": " + text
 		}
 		field(p.Out, 0, column, fmt.Sprintf("%-4s  %s", f.Level, f.Check), text)
+		if more := alike[which] - 1; more > 0 && f.Check != "card" {
+			field(p.Out, 0, column, "", fmt.Sprintf("And %d more of this; --json lists them.", more))
+		}
 		if f.Advice != "" {
 			field(p.Out, 0, column, "", "What to do: "+f.Advice+".")
 		}
@@ -126,7 +130,7 @@ func (p *Program) printChecked(s *settings, told checkedJSON) {
 	if !told.Fit {
 		verdict = "not fit to be used in a run"
 	}
-	fmt.Fprintf(p.Out, "\n%s: %s, %s\n", verdict, several(failures, "failure"), several(warned, "warning"))
+	fmt.Fprintf(p.Out, "\n%s: %s, %s\n", verdict, several(count[conform.Fail], "failure"), several(count[conform.Warn], "warning"))
 }
 
 // several is a number of things in words.

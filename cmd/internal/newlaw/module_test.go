@@ -90,3 +90,13 @@ func sumsFor(sums string, modules []string) string {
 	}
 	return b.String()
 }
+
+// The folder's go.mod files name the Go that the program's does.
+func TestGoVersionIsCurrent(t *testing.T) {
+	version := regexp.MustCompile(`(?m)^go \S+$`).FindString(read(t, filepath.Join(root, "go.mod")))
+	for _, name := range []string{"go.mod.tmpl", "wane_go.mod.tmpl"} {
+		if text := read(t, filepath.Join("templates", "go", name)); version == "" || !strings.Contains(text, "\n"+version+"\n") {
+			t.Errorf("%s: want the line %q", name, version)
+		}
+	}
+}

@@ -2,11 +2,14 @@ package conform
 
 import (
 	"context"
+	"errors"
 	"fmt"
+	"strings"
 	"time"
 
 	"wane/sim/law"
 	"wane/sim/law/lawtest"
+	"wane/sim/rpc"
 )
 
 // Level tells how a check went.
@@ -128,9 +131,11 @@ func (j *judge) all() {
 	}()
 	j.byHand()
 	if j.begin("speed") && j.speed(p) {
-		j.rules(p)
+		lives := j.rules(p)
 		j.units(p)
-		j.fresh(p)
+		if lives {
+			j.fresh(p)
+		}
 	}
 	j.crashes(p)
 	if j.begin("end") {
@@ -139,24 +144,54 @@ func (j *judge) all() {
 	}
 }
 
-// rules are those that any law must hold.
-func (j *judge) rules(p Process) {
+// rules are those that any law must hold. It says no if the law has ended for
+// good over one of them.
+func (j *judge) rules(p Process) bool {
 	watch := lawtest.Watch(func(check string) bool {
-		if check == "answer" { // whose finding may be about chances
-			return j.begin("answer") && j.begin("chances")
+		if stopped(p) != nil {
+			return false
 		}
-		if check == "rows" {
+		switch check {
+		case "answer": // whose finding may be about chances
+			return j.begin("answer") && j.begin("chances")
+		case "rows":
 			return j.begin("rows") && j.begin("order")
 		}
 		return j.begin(check)
 	})
-	for _, f := range lawtest.Check(p, watch, lawtest.Among(j.Among...)) {
+	findings := lawtest.Check(p, watch, lawtest.Among(j.Among...))
+	end, told := stopped(p), false
+	for _, f := range findings {
+		if end != nil && strings.Contains(f.Detail, end.Error()) {
+			if told {
+				continue // it answered no more
+			}
+			told = true
+		} else if told {
+			continue
+		}
 		level := Fail
 		if f.Doubt {
 			level = Warn
 		}
 		j.found(f.Check, f.Question, level, "%s", f.Detail)
 	}
+	return end == nil
+}
+
+// stopped is why the law answers no more, nil while it does.
+func stopped(p Process) error {
+	questions := p.Describe().Questions
+	if len(questions) == 0 {
+		return nil
+	}
+	q := questions[0].Name
+	_, err := p.Answer(q, lawtest.Rows(p, q, 1))
+	var end *rpc.StoppedError
+	if errors.As(err, &end) {
+		return end
+	}
+	return nil
 }
 
 // inOrder lists the findings by check, with a pass for each check that found

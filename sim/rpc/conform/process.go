@@ -188,7 +188,7 @@ func (j *judge) crashes(p Process) {
 		if l, ok := p.(law.Outside); ok {
 			log = "; its log: " + strings.TrimSpace(l.Log())
 		}
-		j.found("crash", "", Fail, "it crashed and was started again, %d times%s", n, log)
+		j.found("crash", "", Fail, "it crashed or hung and was started again, %d times%s", n, log)
 	}
 }
 

@@ -7,6 +7,8 @@ import (
 	"os"
 	"os/exec"
 	"slices"
+	"strings"
+	"sync/atomic"
 	"testing"
 	"time"
 
@@ -117,6 +119,41 @@ func TestProcessFaults(t *testing.T) {
 			x.change(&s, c)
 			expect(t, judged(t, s), x.fault)
 		})
+	}
+}
+
+// mortal ends for good over a row of next to no mass.
+type mortal struct {
+	law.Law
+	dead *atomic.Bool
+}
+
+func (m mortal) Answer(question string, in law.Batch) (law.Batch, error) {
+	if mass := in.Values("mass"); len(mass) > 0 && slices.Min(mass) < 1e-100 {
+		m.dead.Store(true)
+	}
+	if m.dead.Load() {
+		return law.Batch{}, &rpc.StoppedError{Batch: 7, Rows: 351, Restarts: 2, Reason: "no answer within 5s"}
+	}
+	return m.Law.Answer(question, in)
+}
+
+// What comes after a law's end is no finding.
+func TestEndedForGood(t *testing.T) {
+	var begun []string
+	s := running(mortal{builtin(t, "evaporation/black-body"), new(atomic.Bool)})
+	s.Begins = func(check string) { begun = append(begun, check) }
+	failures := 0
+	for _, f := range judged(t, s) {
+		if f.Level == Pass {
+			continue
+		}
+		if failures++; f.Check != "domain" || !strings.Contains(f.Text, "no answer within 5s") {
+			t.Errorf("%+v", f)
+		}
+	}
+	if failures != 1 || slices.Contains(begun, "parameter") || slices.Contains(begun, "fresh") || !slices.Contains(begun, "end") {
+		t.Errorf("%d failures, checks begun: %v", failures, begun)
 	}
 }
 
