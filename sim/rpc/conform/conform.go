@@ -147,6 +147,12 @@ func (j *judge) all() {
 // rules are those that any law must hold. It says no if the law has ended for
 // good over one of them.
 func (j *judge) rules(p Process) bool {
+	if end := stopped(p); end != nil { // while it was timed
+		if j.begin("answer") {
+			j.found("answer", "", Fail, "%v", end)
+		}
+		return false
+	}
 	watch := lawtest.Watch(func(check string) bool {
 		if stopped(p) != nil {
 			return false

@@ -185,7 +185,7 @@ func (j *judge) crashes(p Process) {
 	}
 	if n := r.Restarts(); n > 0 {
 		log := ""
-		if l, ok := p.(law.Outside); ok {
+		if l, ok := p.(law.Outside); ok && l.Log() != "" {
 			log = "; its log: " + strings.TrimSpace(l.Log())
 		}
 		j.found("crash", "", Fail, "it crashed or hung and was started again, %d times%s", n, log)
