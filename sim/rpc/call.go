@@ -35,15 +35,15 @@ type StoppedError struct {
 }
 
 func (e *StoppedError) Error() string {
-	times := "once"
+	again := "it had been started again once before"
 	switch e.Restarts {
 	case 0:
-		times = "not"
+		again = "it was not started again"
 	case 1:
 	default:
-		times = fmt.Sprintf("%d times", e.Restarts)
+		again = fmt.Sprintf("it had been started again %d times before", e.Restarts)
 	}
-	return fmt.Sprintf("batch %d of %d rows: %s; it had been started again %s before%s", e.Batch, e.Rows, e.Reason, times, logged(e.Log))
+	return fmt.Sprintf("batch %d of %d rows: %s; %s%s", e.Batch, e.Rows, e.Reason, again, logged(e.Log))
 }
 
 // ask has rows from .. to answered into out. A process that is lost on the way
@@ -154,10 +154,11 @@ func (l *Law) startAgain() error {
 		return err
 	}
 	l.child = c
-	card, err := c.describe(l.ctx, l.start.Describing)
+	card, err := c.describe(l.ctx, l.start.Describing, l.features())
 	if err != nil {
 		return err
 	}
+	c.converses(card.Direct, l.folder.path, l.start.InFlight)
 	if !bytes.Equal(canonical(card), l.described) {
 		return errors.New("its card is not what it was")
 	}

@@ -4,7 +4,6 @@ import (
 	"bytes"
 	"context"
 	"errors"
-	"math"
 	"os"
 	"os/exec"
 	"path/filepath"
@@ -14,6 +13,7 @@ import (
 	"testing"
 	"time"
 
+	"wane/plugins"
 	"wane/sim/law"
 	"wane/sim/law/lawtest"
 	"wane/sim/rpc"
@@ -182,4 +182,13 @@ func holes(n int) law.Batch {
 	return law.Batch{Rows: n, Columns: []law.Column{law.Numbers("mass", m)}, Kinds: law.KindWords}
 }
 
-var never = math.Inf(1)
+// exists tells whether there is a built-in law.
+func exists(id string) bool {
+	laws, err := plugins.Builtin()
+	if err != nil {
+		return false
+	}
+	process, name, _ := strings.Cut(id, "/")
+	_, ok := laws.Find(process, name)
+	return ok
+}

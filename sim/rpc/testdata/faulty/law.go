@@ -192,10 +192,12 @@ var changes = map[string]func(f *faulty, n int, out law.Batch){
 			codes[0] = 77
 		}
 	},
-	"falls": func(f *faulty, _ int, out law.Batch) {
+	"falls": func(f *faulty, _ int, out law.Batch) { // from 10 on
 		values := out.Values(f.more[0])
-		for i := range values {
-			values[i] = -values[i]
+		for i, v := range values {
+			if v > 10 {
+				values[i] = 20 - v
+			}
 		}
 	},
 	// An answer that hangs on the rows before.
