@@ -154,11 +154,10 @@ func (l *Law) startAgain() error {
 		return err
 	}
 	l.child = c
-	card, err := c.describe(l.ctx, l.start.Describing, l.features())
+	card, err := c.describe(l.ctx, l.start.Describing)
 	if err != nil {
 		return err
 	}
-	c.converses(card.Direct, l.folder.path, l.start.InFlight)
 	if !bytes.Equal(canonical(card), l.described) {
 		return errors.New("its card is not what it was")
 	}
