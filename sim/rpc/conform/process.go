@@ -16,7 +16,7 @@ import (
 
 // Bounds on time. A run starts a law once, and waits for it to end once.
 const (
-	startSlow  = 3 * time.Second
+	startSlow  = 6 * time.Second
 	handLimit  = 5 * time.Second
 	endLimit   = time.Second
 	slow       = 10e-6  // seconds a row from which on a run is felt to wait
@@ -193,9 +193,13 @@ func (j *judge) crashes(p Process) {
 }
 
 func (j *judge) end(p Process) {
-	from := j.now()
-	err := p.Close()
-	took := j.now().Sub(from)
+	took, err := j.closing(p)
+	if err == nil && took > endLimit { // the machine may have been busy: once more
+		if again, opening := j.Open(j.ctx); opening == nil {
+			second, failure := j.closing(again)
+			took, err = min(took, second), failure
+		}
+	}
 	switch {
 	case err != nil:
 		j.found("end", "", Fail, "%v", err)
@@ -208,4 +212,10 @@ func (j *judge) end(p Process) {
 	for _, left := range j.Left(p) {
 		j.found("end", "", Fail, "left behind: %s", left)
 	}
+}
+
+func (j *judge) closing(p Process) (time.Duration, error) {
+	from := j.now()
+	err := p.Close()
+	return j.now().Sub(from), err
 }

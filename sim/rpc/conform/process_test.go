@@ -46,9 +46,9 @@ func TestProcessFaults(t *testing.T) {
 		{fault{name: "a column in another unit", check: "units", level: Fail, says: `"kg"`}, refused(`card: question wear: column mass: unit "kg", want "solMass"`)},
 		{fault{name: "a card that changes while it is read", check: "describe", level: Fail, says: "twice"}, refused("card: it is not the same when asked for twice")},
 		{fault{name: "a card that the host refuses", check: "card", level: Fail, says: "preset"}, refused("card: parameter x: preset 3 outside 0 .. 1")},
-		{fault{name: "slow to start", check: "start", level: Warn, says: "4.0 s"}, func(s *Subject, c *clock) {
+		{fault{name: "slow to start", check: "start", level: Warn, says: "7.0 s"}, func(s *Subject, c *clock) {
 			s.Open = func(context.Context) (Process, error) {
-				c.pass(4 * time.Second)
+				c.pass(7 * time.Second)
 				return process{Law: quick, clock: c}, nil
 			}
 		}},
