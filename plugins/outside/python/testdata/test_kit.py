@@ -2,6 +2,8 @@
 
 import os
 import signal
+import socket
+import struct
 import subprocess
 import sys
 import tempfile
@@ -220,6 +222,27 @@ class Serving(unittest.TestCase):
                 r = c.answer(question="heat", rows=1, columns=[np.array([3.0]).tobytes(), b"\x06"], parameters=[1.0], kinds=kinds)
                 self.assertEqual(np.frombuffer(r.columns[0], "<f8")[0], want)
 
+    def test_direct(self):
+        with Child() as c:
+            self.assertEqual(c.describe().direct, "")
+            card = c.call("wane.law.v1.Law", "Describe", pb.DescribeRequest(contract=1, features=["direct"]), pb.Card.FromString)
+            self.assertEqual(os.path.dirname(card.direct), c.folder.name)
+            with socket.socket(socket.AF_UNIX, socket.SOCK_STREAM) as s, socket.socket(socket.AF_UNIX, socket.SOCK_STREAM) as other:
+                s.connect(card.direct)
+                other.connect(card.direct)
+                for n in 0, 1, 3, 200_000, 3:
+                    mass = np.arange(n, dtype="<f8") + 0.5
+                    r = exchange(s, pb.Batch(seq=n, question="wear", rows=n, columns=[mass.tobytes()], parameters=[2.0]))
+                    self.assertEqual((r.seq, r.rows, r.error), (n, n, ""))
+                    np.testing.assert_array_equal(np.frombuffer(r.columns[0], "<f8"), 2 * mass)
+                r = exchange(other, pb.Batch(seq=5, question="wear", rows=1, columns=[b"short"], parameters=[2.0]))
+                self.assertEqual((r.seq, r.error), (5, "question wear: column mass: 5 bytes for 1 rows"))
+                r = exchange(other, pb.Batch(question="wear", rows=1, columns=[np.array([-1.0]).tobytes()], parameters=[2.0]))
+                self.assertIn("ValueError: bad physics", r.error)
+            c.shut_down()
+            self.assertEqual(c.process.wait(10), 0)
+            self.assertFalse(os.path.exists(card.direct))
+
     def test_exception_is_told(self):
         with Child() as c:
             self.assertEqual(c.wear([1, -1]).error, 'ValueError: bad physics\n  law.py:13, in wear: raise ValueError("bad physics")')
@@ -278,6 +301,14 @@ class Serving(unittest.TestCase):
         self.assertEqual(said.returncode, 1)
         self.assertIn("ValueError: bad physics\n  law.py:13", said.stderr)
         child.folder.cleanup()
+
+
+def exchange(connection, batch):
+    """Sends a batch over a law's own socket and returns the result."""
+    data = batch.SerializeToString()
+    connection.sendall(struct.pack("<I", len(data)) + data)
+    with connection.makefile("rb") as f:
+        return pb.Result.FromString(f.read(struct.unpack("<I", f.read(4))[0]))
 
 
 def alive(pid):

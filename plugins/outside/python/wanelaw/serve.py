@@ -8,6 +8,7 @@ import tempfile
 import threading
 import traceback
 
+from .direct import FEATURE, Direct
 from .law import Law, LawError
 from .words import is_words
 
@@ -74,13 +75,28 @@ def _run(law, message, grpc, wire):
     def describe(request, _):
         names = {"kind": "kinds", "place": "places", "origin": "origins", "composition": "compositions"}
         law.lists = {names[w.name]: list(w.words) for w in request.words if w.name in names and w.words}
-        return message
+        card = wire.pb.Card()
+        card.CopyFrom(message)
+        if FEATURE in request.features:
+            card.direct = direct.open()
+        return card
 
-    def answer(batch, context):
+    def answer_call(batch, context):
         try:
             columns = wire.read_columns(law, batch)
         except ValueError as e:
             context.abort(grpc.StatusCode.INVALID_ARGUMENT, str(e))
+        return answer(batch, columns)
+
+    def answer_direct(data):
+        batch = wire.pb.Batch.FromString(data)
+        try:
+            result = answer(batch, wire.read_columns(law, batch))
+        except ValueError as e:
+            result = wire.refusal(batch, str(e))
+        return result.SerializeToString()
+
+    def answer(batch, columns):
         try:
             return wire.result(batch, law.answer(batch.question, batch.rows, columns, batch.parameters, list(batch.kinds)))
         except LawError as e:
@@ -93,12 +109,13 @@ def _run(law, message, grpc, wire):
         return b""
 
     unary, handlers = grpc.unary_unary_rpc_method_handler, grpc.method_handlers_generic_handler
+    direct = Direct(answer_direct)
     server = grpc.server(futures.ThreadPoolExecutor(max_workers=4), options=[
         ("grpc.max_receive_message_length", _BIG), ("grpc.max_send_message_length", _BIG), ("grpc.so_reuseport", 0)])
     server.add_generic_rpc_handlers((
         handlers("wane.law.v1.Law", {
             "Describe": unary(describe, wire.pb.DescribeRequest.FromString, wire.pb.Card.SerializeToString),
-            "Answer": unary(answer, wire.pb.Batch.FromString, wire.pb.Result.SerializeToString)}),
+            "Answer": unary(answer_call, wire.pb.Batch.FromString, wire.pb.Result.SerializeToString)}),
         handlers("grpc.health.v1.Health", {"Check": unary(lambda _, __: b"\x08\x01")}),  # status: SERVING
         handlers("plugin.GRPCController", {"Shutdown": unary(shutdown)})))
     path, own = _socket()
@@ -113,7 +130,7 @@ def _run(law, message, grpc, wire):
         server.stop(0.2).wait()
     except OSError:
         pass  # the host is gone
-    for remove, name in [(os.unlink, path)] + ([(os.rmdir, own)] if own else []):
+    for remove, name in [(os.unlink, path)] + ([(os.unlink, direct.path)] if direct.path else []) + ([(os.rmdir, own)] if own else []):
         try:
             remove(name)
         except OSError:
