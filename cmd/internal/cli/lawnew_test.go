@@ -7,6 +7,8 @@ import (
 	"slices"
 	"strings"
 	"testing"
+
+	"wane/sim/law"
 )
 
 func TestLawNew(t *testing.T) {
@@ -56,5 +58,40 @@ func TestLawNewRefuses(t *testing.T) {
 	left, err := os.ReadDir(".")
 	if err != nil || len(left) != 1 {
 		t.Errorf("left behind: %v, %v", left, err)
+	}
+}
+
+// The commands on the page of a new law do what they say, for every process:
+// it is shown, asked, and takes part in a galaxy.
+func TestNewLawsRun(t *testing.T) {
+	needsPython(t)
+	for _, process := range law.Processes {
+		if process.Name != "evaporation" && os.Getenv("WANE_REQUIRE") != "1" {
+			continue // they take a minute
+		}
+		t.Run(process.Name, func(t *testing.T) {
+			page, err := os.ReadFile(filepath.Join(newFolder(t, process.Name+"/my-own", "python"), "README.md"))
+			if err != nil {
+				t.Fatal(err)
+			}
+			tried := 0
+			for line := range strings.Lines(string(page)) {
+				command, ok := strings.CutPrefix(strings.TrimSpace(line), "wane ")
+				if !ok || !strings.HasPrefix(line, "    ") || strings.HasPrefix(command, "law check") { // that is tried beside the templates
+					continue
+				}
+				words := strings.Fields(command)
+				if words[0] == "run" {
+					words = append(words, "--objects", "1e4", "--realisations", "1")
+				}
+				tried++
+				if code, out, errs := typed(t, words...); code != ExitOK || out == "" {
+					t.Errorf("wane %s: exit code %d\n%s", strings.Join(words, " "), code, errs)
+				}
+			}
+			if tried < 2 {
+				t.Errorf("only %d commands on the page", tried)
+			}
+		})
 	}
 }

@@ -10,7 +10,7 @@ func dynamics(p law.Process) sketch {
 			Domain:     "a central hole that swallows whole; every object alike",
 			Questions:  []law.Question{{Name: "divert", Words: []string{"ejection"}}},
 			Parameters: []law.Parameter{{Name: "share", Doc: "share that falls in", Low: 0, High: 0.2, Preset: 0.05}},
-		}, example: example{why: "the preset", question: "divert", column: "share_ejection", want: 0.05, ask: "mass=1Msun"}}
+		}, example: example{why: "the preset", question: "divert", column: "share_ejection", want: 0.05, ask: "share=0.05"}}
 	}
 	return sketch{file: "ejection", card: law.Card{
 		Summary: "every object is thrown out with the same chance in every year; the galaxy keeps its size",
