@@ -47,8 +47,13 @@ func (l *loaded) close() {
 // would have been: each was asked the same once more.
 func (l *loaded) healed(w io.Writer) {
 	for _, o := range l.outside {
-		if n := o.Restarts(); n > 0 {
-			fmt.Fprintf(w, "wane: warning: law %s (%s) ended in the run and was started again: %d times\n", o.Path, o.id(), n)
+		n := o.Restarts()
+		times := "once"
+		if n > 1 {
+			times = fmt.Sprintf("%d times", n)
+		}
+		if n > 0 {
+			fmt.Fprintf(w, "wane: warning: law %s (%s) ended in the run and was started again, %s\n", o.Path, o.id(), times)
 		}
 	}
 }

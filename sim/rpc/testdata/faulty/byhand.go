@@ -18,6 +18,7 @@ import (
 type handmade struct {
 	hello  string // the line of the handshake; %s: where it listens
 	deaf   bool   // does not end when told to
+	hangs  bool   // over every answer
 	card   func(*wire.Card)
 	result func(*wire.Result)
 	answer func(*wire.Result) ([]byte, error) // instead of the message
@@ -32,6 +33,7 @@ var byHand = map[string]handmade{
 	"core-protocol-7": {hello: "7|1|unix|%s|grpc"},
 	"netrpc":          {hello: "1|1|unix|%s|netrpc"},
 	"deaf":            {hello: greeting, deaf: true},
+	"deaf-hang":       {hello: greeting, deaf: true, hangs: true},
 	"newer": {hello: greeting, card: func(c *wire.Card) {
 		c.Contract, c.Features = 2, []string{"shared-columns", "tides"}
 	}},
@@ -79,6 +81,10 @@ func serveByHand(f *faulty, h handmade) {
 			return f.wireCard(h), nil
 		})},
 		{MethodName: "Answer", Handler: handler(func(b *wire.Batch) (any, error) {
+			if h.hangs {
+				f.begins()
+				time.Sleep(forever)
+			}
 			result, err := f.wireAnswer(b)
 			if err != nil {
 				return nil, err

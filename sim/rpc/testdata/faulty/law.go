@@ -6,6 +6,7 @@ import (
 	"math"
 	"os"
 	"os/exec"
+	"path/filepath"
 	"slices"
 	"strconv"
 	"sync/atomic"
@@ -18,9 +19,10 @@ import (
 // faulty is a law with a fault of its card or its answers.
 type faulty struct {
 	law.Law
-	fault string
-	more  []string
-	start int // which one this is
+	fault  string
+	more   []string
+	folder string
+	start  int // which one this is
 
 	described, asked atomic.Int64
 }
@@ -74,6 +76,7 @@ func (f *faulty) Answer(question string, in law.Batch) (law.Batch, error) {
 	// word:N:TIMES happens at question N of the first TIMES starts; none: of all.
 	at, times := f.number0(0), f.number0(1)
 	if act, ok := acts[f.fault]; ok && n >= max(1, at) && (times == 0 || f.start <= times) {
+		f.begins()
 		act()
 	}
 	if f.fault == "mirror" { // quantiles fall
@@ -86,7 +89,26 @@ func (f *faulty) Answer(question string, in law.Batch) (law.Batch, error) {
 	if change, ok := changes[f.fault]; ok {
 		change(f, n, out)
 	}
+	if f.fault == "replaces" && n == 3 && f.start == 1 {
+		f.replace()
+	}
 	return out, nil
+}
+
+// replace puts another file into the place of one, as an installation does:
+// replaces:FILE:what-then.
+func (f *faulty) replace() {
+	data, err := os.ReadFile(f.more[0])
+	if err == nil {
+		err = os.WriteFile(filepath.Join(f.folder, "new"), append(data, '\n'), 0o755)
+	}
+	if err == nil {
+		err = os.Rename(filepath.Join(f.folder, "new"), f.more[0])
+	}
+	if err != nil {
+		panic(err)
+	}
+	acts[f.more[1]]()
 }
 
 func (f *faulty) number0(i int) int {
@@ -98,6 +120,7 @@ func (f *faulty) number0(i int) int {
 
 // acts are faults of a process in the middle of an answer.
 var acts = map[string]func(){
+	"nothing": func() {},
 	"crash": func() {
 		fmt.Fprintln(os.Stderr, "a table has a hole in it")
 		os.Exit(3)
@@ -143,8 +166,8 @@ var acts = map[string]func(){
 		fmt.Println("a word on standard output")
 	},
 	"flood": func() {
-		_, _ = os.Stderr.Write(bytes.Repeat([]byte("and "), 1<<20))
-		for range 20_000 {
+		_, _ = os.Stderr.Write(bytes.Repeat([]byte("and "), 1<<18))
+		for range 2000 {
 			fmt.Fprintln(os.Stderr, "a line in a flood")
 		}
 	},

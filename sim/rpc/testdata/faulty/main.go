@@ -4,7 +4,8 @@
 //	faulty FAULT process/name FOLDER
 //
 // FAULT is a word and what it needs, with colons between ("crash:2:1"). In
-// FOLDER it counts how often it was started.
+// FOLDER it counts how often it was started, and makes a file "now" when the
+// fault begins.
 package main
 
 import (
@@ -27,8 +28,9 @@ func main() {
 	}
 	words := strings.Split(os.Args[1], ":")
 	word, more := words[0], words[1:]
-	f := &faulty{Law: builtin(os.Args[2]), fault: word, more: more, start: started(os.Args[3])}
+	f := &faulty{Law: builtin(os.Args[2]), fault: word, more: more, folder: os.Args[3], start: started(os.Args[3])}
 	if fault, ok := beforeServing[word]; ok {
+		f.begins()
 		fault(f)
 		return
 	}
@@ -68,6 +70,13 @@ func started(folder string) int {
 		fmt.Fprintln(f, os.Getpid())
 		f.Close()
 		return n
+	}
+}
+
+// begins tells who waits for it that the fault begins.
+func (f *faulty) begins() {
+	if err := os.WriteFile(filepath.Join(f.folder, "now"), nil, 0o600); err != nil {
+		panic(err)
 	}
 }
 
