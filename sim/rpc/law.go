@@ -50,11 +50,15 @@ func (l *Law) Rows() int { return l.start.Rows }
 // Label is what the person called it.
 func (l *Law) Label() string { return l.start.Name }
 
-// Log is the end of what the law wrote to its standard error.
-func (l *Law) Log() string { return l.errs.String() }
+// Log is the end of what the law wrote to its standard error. It is asked for
+// when something went wrong, and waits a moment for what is still on its way.
+func (l *Law) Log() string {
+	l.errs.settle()
+	return l.errs.String()
+}
 
 // Stderr is Log.
-func (l *Law) Stderr() string { return l.errs.String() }
+func (l *Law) Stderr() string { return l.Log() }
 
 // Restarts is how often the law had to be started again.
 func (l *Law) Restarts() int {

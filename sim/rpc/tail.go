@@ -4,12 +4,15 @@ import (
 	"encoding/json"
 	"strings"
 	"sync"
+	"time"
 )
 
 // tail keeps the end of what a process writes to its log.
 type tail struct {
 	mu   sync.Mutex
 	text []byte
+
+	written int // bytes in all
 }
 
 const (
@@ -22,12 +25,29 @@ func (t *tail) Write(p []byte) (int, error) {
 	t.mu.Lock()
 	defer t.mu.Unlock()
 	n := len(p)
+	t.written += n
 	p = p[max(0, n-tailKept):]
 	t.text = append(t.text, p...)
 	if len(t.text) > 2*tailKept {
 		t.text = append(t.text[:0], t.text[len(t.text)-tailKept:]...)
 	}
 	return n, nil
+}
+
+// settle returns once nothing more comes for a while, or after a while longer.
+func (t *tail) settle() {
+	length := func() int {
+		t.mu.Lock()
+		defer t.mu.Unlock()
+		return t.written
+	}
+	for range 10 {
+		before := length()
+		time.Sleep(20 * time.Millisecond)
+		if length() == before {
+			return
+		}
+	}
 }
 
 // String is the last lines. Lines that the machinery of the protocol writes
