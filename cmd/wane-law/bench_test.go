@@ -23,17 +23,17 @@ func BenchmarkAnswer(b *testing.B) {
 			b.Fatal(err)
 		}
 		inside, _ := reg.Find(id[0], id[1])
-		out, err := rpc.Open(context.Background(), rpc.Start{Name: built, Args: []string{built, id[0] + "/" + id[1]}})
-		if err != nil {
-			b.Fatal(err)
-		}
+		start := rpc.Start{Name: built, Args: []string{built, id[0] + "/" + id[1]}}
+		out := opened(b, start)
+		start.OnlyCalls = true
+		calls := opened(b, start)
 		question := inside.Describe().Questions[0].Name
 		for _, rows := range []int{64, 1000, 16384, 100000} {
 			in := lawtest.Rows(inside, question, rows)
 			for _, side := range []struct {
 				name string
 				law  law.Law
-			}{{"inside", inside}, {"outside", out}} {
+			}{{"inside", inside}, {"outside", out}, {"outside, grpc", calls}} {
 				b.Run(fmt.Sprintf("%s/%s/rows=%d/%s", id[0], question, rows, side.name), func(b *testing.B) {
 					var arena law.Arena
 					b.ReportAllocs()
@@ -47,10 +47,21 @@ func BenchmarkAnswer(b *testing.B) {
 				})
 			}
 		}
-		if err := out.Close(); err != nil {
-			b.Fatal(err)
-		}
 	}
+}
+
+func opened(b *testing.B, s rpc.Start) *rpc.Law {
+	b.Helper()
+	l, err := rpc.Open(context.Background(), s)
+	if err != nil {
+		b.Fatal(err)
+	}
+	b.Cleanup(func() {
+		if err := l.Close(); err != nil {
+			b.Error(err)
+		}
+	})
+	return l
 }
 
 // BenchmarkLanternReach runs the reference galaxy with no law outside, with
@@ -64,12 +75,7 @@ func BenchmarkLanternReach(b *testing.B) {
 		for _, l := range laws {
 			card := l.Describe()
 			if defaults[card.Process] == card.Name && outside(card) {
-				out, err := rpc.Open(context.Background(), rpc.Start{Name: built, Args: []string{built, card.Process + "/" + card.Name}})
-				if err != nil {
-					b.Fatal(err)
-				}
-				defer out.Close()
-				l = out
+				l = opened(b, rpc.Start{Name: built, Args: []string{built, card.Process + "/" + card.Name}})
 			}
 			mixed = append(mixed, l)
 		}

@@ -154,10 +154,11 @@ func (l *Law) startAgain() error {
 		return err
 	}
 	l.child = c
-	card, err := c.describe(l.ctx, l.start.Describing)
+	card, err := c.describe(l.ctx, l.start.Describing, l.features())
 	if err != nil {
 		return err
 	}
+	c.converses(card.Direct, l.folder.path, l.start.InFlight)
 	if !bytes.Equal(canonical(card), l.described) {
 		return errors.New("its card is not what it was")
 	}

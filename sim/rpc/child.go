@@ -20,6 +20,9 @@ type child struct {
 	client  *plugin.Client
 	process *process
 	conn    *grpc.ClientConn
+
+	direct string      // its own socket, if it has one
+	idle   chan *frame // connections to that
 }
 
 // startChild returns a child that is ready for questions, or the reason why
@@ -104,15 +107,18 @@ func (c *child) connect() error {
 }
 
 // describe asks for the card.
-func (c *child) describe(ctx context.Context, within time.Duration) (*wire.Card, error) {
+func (c *child) describe(ctx context.Context, within time.Duration, features []string) (*wire.Card, error) {
 	ctx, cancel := context.WithTimeout(ctx, within)
 	defer cancel()
 	card := new(wire.Card)
-	return card, c.conn.Invoke(ctx, describeMethod, describeRequest(), card)
+	return card, c.conn.Invoke(ctx, describeMethod, describeRequest(features), card)
 }
 
 // answer sends a batch and gives its answer to read.
 func (c *child) answer(ctx context.Context, within time.Duration, batch *encoded, read func([]byte) error) error {
+	if c.direct != "" {
+		return c.answerDirect(ctx, within, batch, read)
+	}
 	ctx, cancel := context.WithTimeout(ctx, within)
 	defer cancel()
 	var m received
@@ -138,6 +144,7 @@ func (c *child) end(within time.Duration, force bool) error {
 	}
 	gone := make(chan struct{})
 	go func() {
+		c.hangUp()
 		c.client.Kill()
 		close(gone)
 	}()

@@ -3,6 +3,7 @@ package rpc
 import (
 	"context"
 	"errors"
+	"runtime"
 
 	"github.com/hashicorp/go-plugin"
 	"google.golang.org/grpc"
@@ -26,7 +27,12 @@ const (
 const Contract = 1
 
 // Features lists what this program offers beyond the contract.
-func Features() []string { return nil }
+func Features() []string {
+	if runtime.GOOS == "windows" {
+		return nil
+	}
+	return []string{direct}
+}
 
 func handshake() plugin.HandshakeConfig {
 	return plugin.HandshakeConfig{ProtocolVersion: protocolVersion, MagicCookieKey: cookieKey, MagicCookieValue: cookieValue}

@@ -62,6 +62,7 @@ func (l *Law) open() error {
 		return err
 	}
 	card, faults := cardFromWire(first)
+	c.converses(first.Direct, l.folder.path, l.start.InFlight)
 	if l.described = canonical(first); !bytes.Equal(l.described, canonical(again)) {
 		faults = append(faults, errors.New("card: it is not the same when asked for twice"))
 	}
@@ -74,7 +75,7 @@ func (l *Law) open() error {
 
 // card1 asks a child for its card once.
 func (l *Law) card1(c *child) (*wire.Card, error) {
-	card, err := c.describe(l.ctx, l.start.Describing)
+	card, err := c.describe(l.ctx, l.start.Describing, l.features())
 	if err == nil {
 		return card, nil
 	}
@@ -85,7 +86,10 @@ func (l *Law) card1(c *child) (*wire.Card, error) {
 	return nil, l.explain(fmt.Errorf("law %s: asked for its card: %s", l.start.Name, what))
 }
 
+// canonical is a card as bytes, but for what is another at each start.
 func canonical(card *wire.Card) []byte {
+	card = proto.CloneOf(card)
+	card.Direct = ""
 	b, err := proto.MarshalOptions{Deterministic: true}.Marshal(card)
 	if err != nil { // only text that is not UTF-8, which cannot have come in
 		return nil
@@ -94,11 +98,18 @@ func canonical(card *wire.Card) []byte {
 }
 
 // describeRequest says what this host speaks, and its lists of words.
-func describeRequest() *wire.DescribeRequest {
-	return &wire.DescribeRequest{Contract: Contract, Features: Features(), Words: []*wire.WordList{
+func describeRequest(features []string) *wire.DescribeRequest {
+	return &wire.DescribeRequest{Contract: Contract, Features: features, Words: []*wire.WordList{
 		{Name: "kind", Words: law.KindWords}, {Name: "place", Words: law.PlaceWords},
 		{Name: "origin", Words: law.OriginWords}, {Name: "composition", Words: law.CompositionWords},
 	}}
+}
+
+func (l *Law) features() []string {
+	if l.start.OnlyCalls {
+		return nil
+	}
+	return Features()
 }
 
 // explain adds the end of the law's log to an error.

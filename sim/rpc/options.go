@@ -26,6 +26,9 @@ type Options struct {
 	InFlight    int           // calls at once: 2
 	MaxRestarts int           // in all: 2; below zero: none
 
+	// OnlyCalls keeps to grpc where the law offers a socket of its own.
+	OnlyCalls bool
+
 	// BeforeRestart, if given, may refuse to start the law again, because its
 	// files are no longer what they were.
 	BeforeRestart func() error

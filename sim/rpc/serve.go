@@ -6,6 +6,7 @@ import (
 	"os"
 	"runtime"
 	"runtime/debug"
+	"slices"
 	"strings"
 	"sync"
 
@@ -57,7 +58,9 @@ type server struct {
 	law    law.Law
 	card   law.Card
 	stderr *os.File
-	direct sync.Once
+	log    sync.Once
+	open   sync.Once
+	socket string
 	arenas sync.Pool
 }
 
@@ -66,10 +69,11 @@ type server struct {
 func (s *server) service() *grpc.ServiceDesc {
 	return &grpc.ServiceDesc{ServiceName: serviceName, HandlerType: (*any)(nil), Metadata: "law.proto", Methods: []grpc.MethodDesc{
 		{MethodName: "Describe", Handler: func(_ any, _ context.Context, read func(any) error, _ grpc.UnaryServerInterceptor) (any, error) {
-			if err := read(new(wire.DescribeRequest)); err != nil {
+			request := new(wire.DescribeRequest)
+			if err := read(request); err != nil {
 				return nil, err
 			}
-			return s.describe(), nil
+			return s.describe(slices.Contains(request.Features, direct)), nil
 		}},
 		{MethodName: "Answer", Handler: func(_ any, _ context.Context, read func(any) error, _ grpc.UnaryServerInterceptor) (any, error) {
 			var m received
@@ -77,19 +81,30 @@ func (s *server) service() *grpc.ServiceDesc {
 				return nil, err
 			}
 			defer m.buffer.Free()
-			return s.answer(m.buffer.ReadOnlyData())
+			_, result, err := s.answer(m.buffer.ReadOnlyData())
+			if err != nil {
+				return nil, status.Error(codes.InvalidArgument, err.Error())
+			}
+			return result, nil
 		}},
 	}}
 }
 
-func (s *server) describe() *wire.Card {
+func (s *server) describe(offered bool) *wire.Card {
 	// go-plugin has put pipes of its own into their places by now, and what is
 	// in a pipe is lost when the process dies: the log is where it matters.
-	s.direct.Do(func() { os.Stdout, os.Stderr = s.stderr, s.stderr })
-	return cardToWire(s.law.Describe(), ownRuntime())
+	s.log.Do(func() { os.Stdout, os.Stderr = s.stderr, s.stderr })
+	card := cardToWire(s.law.Describe(), ownRuntime())
+	if offered {
+		s.open.Do(func() { s.socket = s.serveDirect() })
+		card.Direct = s.socket
+	}
+	return card
 }
 
-func (s *server) answer(message []byte) (*encoded, error) {
+// answer reads a batch and encodes its answer. An error means that the batch is
+// not one for this law.
+func (s *server) answer(message []byte) (uint64, *encoded, error) {
 	arena, _ := s.arenas.Get().(*law.Arena)
 	if arena == nil {
 		arena = new(law.Arena)
@@ -98,13 +113,13 @@ func (s *server) answer(message []byte) (*encoded, error) {
 	defer arena.Reset()
 	seq, question, in, err := readBatch(message, &s.card, arena)
 	if err != nil {
-		return nil, status.Error(codes.InvalidArgument, err.Error())
+		return seq, nil, err
 	}
 	out, err := s.ask(question, in)
 	if err != nil {
-		return encodeError(seq, err.Error()), nil
+		return seq, encodeError(seq, err.Error()), nil
 	}
-	return encodeResult(seq, out), nil
+	return seq, encodeResult(seq, out), nil
 }
 
 // ask makes an error of a panic: a law that stumbles over one batch is not

@@ -300,32 +300,38 @@ func (x *Result) GetError() string {
 }
 
 type Card struct {
-	state         protoimpl.MessageState `protogen:"open.v1"`
-	Contract      uint32                 `protobuf:"varint,1,opt,name=contract,proto3" json:"contract,omitempty"` // the contract the law was written for
-	Features      []string               `protobuf:"bytes,2,rep,name=features,proto3" json:"features,omitempty"`  // what it needs of the host beyond that
-	Process       string                 `protobuf:"bytes,3,opt,name=process,proto3" json:"process,omitempty"`
-	Name          string                 `protobuf:"bytes,4,opt,name=name,proto3" json:"name,omitempty"`
-	Version       string                 `protobuf:"bytes,5,opt,name=version,proto3" json:"version,omitempty"`
-	Summary       string                 `protobuf:"bytes,6,opt,name=summary,proto3" json:"summary,omitempty"`
-	Formula       string                 `protobuf:"bytes,7,opt,name=formula,proto3" json:"formula,omitempty"`
-	Domain        string                 `protobuf:"bytes,8,opt,name=domain,proto3" json:"domain,omitempty"`
-	Sources       []string               `protobuf:"bytes,9,rep,name=sources,proto3" json:"sources,omitempty"`
-	Notes         []string               `protobuf:"bytes,10,rep,name=notes,proto3" json:"notes,omitempty"`
-	Accepts       *Accepts               `protobuf:"bytes,11,opt,name=accepts,proto3" json:"accepts,omitempty"`
-	Questions     []*Question            `protobuf:"bytes,12,rep,name=questions,proto3" json:"questions,omitempty"`
-	Parameters    []*Parameter           `protobuf:"bytes,13,rep,name=parameters,proto3" json:"parameters,omitempty"`
-	Thresholds    []*Threshold           `protobuf:"bytes,14,rep,name=thresholds,proto3" json:"thresholds,omitempty"`
-	Wears         string                 `protobuf:"bytes,15,opt,name=wears,proto3" json:"wears,omitempty"`
-	Clocks        []*Clock               `protobuf:"bytes,16,rep,name=clocks,proto3" json:"clocks,omitempty"`
-	Frame         bool                   `protobuf:"varint,17,opt,name=frame,proto3" json:"frame,omitempty"`
-	StopOutcome   string                 `protobuf:"bytes,18,opt,name=stop_outcome,json=stopOutcome,proto3" json:"stop_outcome,omitempty"`
-	StopFate      string                 `protobuf:"bytes,19,opt,name=stop_fate,json=stopFate,proto3" json:"stop_fate,omitempty"`
-	Outcomes      []*Outcome             `protobuf:"bytes,20,rep,name=outcomes,proto3" json:"outcomes,omitempty"`
-	Effect        string                 `protobuf:"bytes,21,opt,name=effect,proto3" json:"effect,omitempty"`
-	Kinds         []*Kind                `protobuf:"bytes,22,rep,name=kinds,proto3" json:"kinds,omitempty"`
-	Idle          bool                   `protobuf:"varint,23,opt,name=idle,proto3" json:"idle,omitempty"`
-	Tolerance     float64                `protobuf:"fixed64,24,opt,name=tolerance,proto3" json:"tolerance,omitempty"`
-	Runtime       string                 `protobuf:"bytes,25,opt,name=runtime,proto3" json:"runtime,omitempty"` // what it runs on: "go1.26.8 amd64", "Python 3.11.2, numpy 1.24.2"
+	state       protoimpl.MessageState `protogen:"open.v1"`
+	Contract    uint32                 `protobuf:"varint,1,opt,name=contract,proto3" json:"contract,omitempty"` // the contract the law was written for
+	Features    []string               `protobuf:"bytes,2,rep,name=features,proto3" json:"features,omitempty"`  // what it needs of the host beyond that
+	Process     string                 `protobuf:"bytes,3,opt,name=process,proto3" json:"process,omitempty"`
+	Name        string                 `protobuf:"bytes,4,opt,name=name,proto3" json:"name,omitempty"`
+	Version     string                 `protobuf:"bytes,5,opt,name=version,proto3" json:"version,omitempty"`
+	Summary     string                 `protobuf:"bytes,6,opt,name=summary,proto3" json:"summary,omitempty"`
+	Formula     string                 `protobuf:"bytes,7,opt,name=formula,proto3" json:"formula,omitempty"`
+	Domain      string                 `protobuf:"bytes,8,opt,name=domain,proto3" json:"domain,omitempty"`
+	Sources     []string               `protobuf:"bytes,9,rep,name=sources,proto3" json:"sources,omitempty"`
+	Notes       []string               `protobuf:"bytes,10,rep,name=notes,proto3" json:"notes,omitempty"`
+	Accepts     *Accepts               `protobuf:"bytes,11,opt,name=accepts,proto3" json:"accepts,omitempty"`
+	Questions   []*Question            `protobuf:"bytes,12,rep,name=questions,proto3" json:"questions,omitempty"`
+	Parameters  []*Parameter           `protobuf:"bytes,13,rep,name=parameters,proto3" json:"parameters,omitempty"`
+	Thresholds  []*Threshold           `protobuf:"bytes,14,rep,name=thresholds,proto3" json:"thresholds,omitempty"`
+	Wears       string                 `protobuf:"bytes,15,opt,name=wears,proto3" json:"wears,omitempty"`
+	Clocks      []*Clock               `protobuf:"bytes,16,rep,name=clocks,proto3" json:"clocks,omitempty"`
+	Frame       bool                   `protobuf:"varint,17,opt,name=frame,proto3" json:"frame,omitempty"`
+	StopOutcome string                 `protobuf:"bytes,18,opt,name=stop_outcome,json=stopOutcome,proto3" json:"stop_outcome,omitempty"`
+	StopFate    string                 `protobuf:"bytes,19,opt,name=stop_fate,json=stopFate,proto3" json:"stop_fate,omitempty"`
+	Outcomes    []*Outcome             `protobuf:"bytes,20,rep,name=outcomes,proto3" json:"outcomes,omitempty"`
+	Effect      string                 `protobuf:"bytes,21,opt,name=effect,proto3" json:"effect,omitempty"`
+	Kinds       []*Kind                `protobuf:"bytes,22,rep,name=kinds,proto3" json:"kinds,omitempty"`
+	Idle        bool                   `protobuf:"varint,23,opt,name=idle,proto3" json:"idle,omitempty"`
+	Tolerance   float64                `protobuf:"fixed64,24,opt,name=tolerance,proto3" json:"tolerance,omitempty"`
+	Runtime     string                 `protobuf:"bytes,25,opt,name=runtime,proto3" json:"runtime,omitempty"` // what it runs on: "go1.26.8 amd64", "Python 3.11.2, numpy 1.24.2"
+	// If the host offers the feature "direct": a unix stream socket in the folder
+	// for sockets, at which the law answers as well, without the machinery of
+	// calls. There a Batch is sent, then its Result comes, each after its
+	// length in 4 bytes, little-endian. A connection carries one batch at a time;
+	// the host opens a few.
+	Direct        string `protobuf:"bytes,26,opt,name=direct,proto3" json:"direct,omitempty"`
 	unknownFields protoimpl.UnknownFields
 	sizeCache     protoimpl.SizeCache
 }
@@ -531,6 +537,13 @@ func (x *Card) GetTolerance() float64 {
 func (x *Card) GetRuntime() string {
 	if x != nil {
 		return x.Runtime
+	}
+	return ""
+}
+
+func (x *Card) GetDirect() string {
+	if x != nil {
+		return x.Direct
 	}
 	return ""
 }
@@ -1173,7 +1186,7 @@ const file_law_proto_rawDesc = "" +
 	"\x04rows\x18\x02 \x01(\x04R\x04rows\x12\x14\n" +
 	"\x05names\x18\x03 \x03(\tR\x05names\x12\x18\n" +
 	"\acolumns\x18\x04 \x03(\fR\acolumns\x12\x14\n" +
-	"\x05error\x18\x05 \x01(\tR\x05error\"\xae\x06\n" +
+	"\x05error\x18\x05 \x01(\tR\x05error\"\xc6\x06\n" +
 	"\x04Card\x12\x1a\n" +
 	"\bcontract\x18\x01 \x01(\rR\bcontract\x12\x1a\n" +
 	"\bfeatures\x18\x02 \x03(\tR\bfeatures\x12\x18\n" +
@@ -1204,7 +1217,8 @@ const file_law_proto_rawDesc = "" +
 	"\x05kinds\x18\x16 \x03(\v2\x11.wane.law.v1.KindR\x05kinds\x12\x12\n" +
 	"\x04idle\x18\x17 \x01(\bR\x04idle\x12\x1c\n" +
 	"\ttolerance\x18\x18 \x01(\x01R\ttolerance\x12\x18\n" +
-	"\aruntime\x18\x19 \x01(\tR\aruntime\"0\n" +
+	"\aruntime\x18\x19 \x01(\tR\aruntime\x12\x16\n" +
+	"\x06direct\x18\x1a \x01(\tR\x06direct\"0\n" +
 	"\x06Column\x12\x12\n" +
 	"\x04name\x18\x01 \x01(\tR\x04name\x12\x12\n" +
 	"\x04unit\x18\x02 \x01(\tR\x04unit\"a\n" +
