@@ -29,7 +29,7 @@ sim/table                : sim/num sim/law
 sim/rpc/conform          : sim/law sim/law/lawtest sim/scenario/quantity sim/rpc sim/rpc/folder os os/exec syscall
 sim/rpc/folder           : sim/law sim/rpc os os/exec github.com/pelletier/go-toml/v2/...
 sim/rpc/wire             : unsafe google.golang.org/protobuf/...
-sim/rpc                  : sim/law os os/exec log syscall github.com/hashicorp/... github.com/rs/zerolog google.golang.org/... golang.org/x/sys/unix
+sim/rpc                  : sim/law os os/exec net log syscall github.com/hashicorp/... github.com/rs/zerolog google.golang.org/... golang.org/x/sys/unix
 sim/scenario/...         : sim/num sim/draw sim/physics/... sim/law sim/sky sim/galaxy sim/engine sim/fade sim/scenario sim/scenario/quantity github.com/pelletier/go-toml/v2/...
 sim/ensemble             : sim/num sim/draw sim/physics/... sim/law sim/sky sim/galaxy sim/engine sim/fade gonum.org/v1/gonum/...
 sim                      : sim/... github.com/rs/zerolog
@@ -56,7 +56,7 @@ plugins                  : plugins/... sim/... testdata/... os os/exec math/rand
 plugins/outside/...      : sim/... plugins plugins/outside/python scenarios testdata/... os os/exec math/rand/v2
 plugins/...              : sim/law/lawtest sim/draw sim/sky testdata/... os os/exec math/rand/v2
 scenarios                : sim/... plugins os
-sim/rpc/...              : sim/... plugins testdata/... os os/exec syscall math/rand/v2
+sim/rpc/...              : sim/... plugins plugins/outside/python testdata/... os os/exec syscall math/rand/v2
 sim/...                  : sim/law/lawtest plugins plugins/... scenarios testdata/... sim/engine/reference os os/exec flag math/rand/v2
 testdata/...             : os
 cmd/...                  : scenarios plugins plugins/... testdata/... sim/... os os/exec math/rand/v2 flag

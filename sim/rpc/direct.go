@@ -22,13 +22,18 @@ const direct = "direct"
 
 // frame reads and writes messages on one connection, each after its length.
 type frame struct {
-	conn   net.Conn
+	conn   connection
 	buffer []byte
+}
+
+type connection interface {
+	io.ReadWriteCloser
+	SetDeadline(time.Time) error
 }
 
 const frameHead = 4 // bytes of the length
 
-func newFrame(conn net.Conn) *frame {
+func newFrame(conn connection) *frame {
 	if u, ok := conn.(*net.UnixConn); ok {
 		_ = u.SetWriteBuffer(window) // as much as the system allows: a batch should go out in one piece
 	}
@@ -79,7 +84,7 @@ func (s *server) serveDirect() string {
 	if dir == "" {
 		return ""
 	}
-	at, err := net.Listen("unix", filepath.Join(dir, direct))
+	at, err := net.Listen("unix", filepath.Join(dir, fmt.Sprintf("%s-%d", direct, os.Getpid())))
 	if err != nil {
 		fmt.Fprintln(s.stderr, err) // grpc is still there
 		return ""

@@ -4,15 +4,35 @@ import (
 	"bytes"
 	"encoding/binary"
 	"io"
-	"net"
 	"path/filepath"
 	"strings"
 	"testing"
+	"time"
 )
+
+// pipe is one end of a connection in memory.
+type pipe struct {
+	*io.PipeReader
+	to *io.PipeWriter
+}
+
+func (p pipe) Write(b []byte) (int, error) { return p.to.Write(b) }
+func (p pipe) SetDeadline(time.Time) error { return nil }
+
+func (p pipe) Close() error {
+	p.to.Close()
+	return p.PipeReader.Close()
+}
+
+func pipes() (here, there pipe) {
+	r1, w1 := io.Pipe()
+	r2, w2 := io.Pipe()
+	return pipe{r1, w2}, pipe{r2, w1}
+}
 
 // TestFrames sends messages of all sizes through a connection and back.
 func TestFrames(t *testing.T) {
-	here, there := net.Pipe()
+	here, there := pipes()
 	defer here.Close()
 	go func() {
 		f := newFrame(there)
@@ -50,7 +70,7 @@ func TestWrongFrames(t *testing.T) {
 		"cut short": {[]byte{1, 0}, io.ErrUnexpectedEOF.Error()},
 		"nothing":   {nil, io.EOF.Error()},
 	} {
-		here, there := net.Pipe()
+		here, there := pipes()
 		go func() {
 			_, _ = there.Write(x.bytes)
 			there.Close()
