@@ -59,7 +59,7 @@ func TestFaultsNamed(t *testing.T) {
 		words []string
 	}{
 		{"crash", 0, []string{"batch 1 of 5 rows: its process ended (exit status 3); it had been started again 2 times before; its log:", "a table has a hole in it"}},
-		{"crash:2", 3, []string{"batch 4 of 5 rows: its process ended (exit status 3); it had been started again 2 times before; its log:", "a table has a hole in it"}},
+		{"crash:2", 2, []string{"batch 4 of 5 rows: its process ended (exit status 3); it had been started again 2 times before; its log:", "a table has a hole in it"}},
 		{"exit-0", 0, []string{"its process ended (exit status 0)", "good night"}},
 		{"fatal", 0, []string{"its process ended (exit status 2)", "panic: lost in the tables"}},
 		{"killed", 0, []string{"its process ended (signal: killed): did it run out of memory?", "eating"}},

@@ -1,10 +1,13 @@
 package rpc_test
 
 import (
+	"bytes"
 	"context"
 	"errors"
 	"os"
+	"os/exec"
 	"path/filepath"
+	"strings"
 	"testing"
 	"time"
 
@@ -108,7 +111,11 @@ func TestFaultsOfDescribing(t *testing.T) {
 		}},
 		{"no-contract", []string{"card: no contract number, want 1"}},
 		{"no-card", []string{"card: no contract number", `unknown process ""`, "name, version and summary must be given", "no source"}},
-		{"bad-units", []string{`question wear: column mass: unit "kg", want "solMass"`, `kind ember: composition "cheese", want one of`}},
+		{"all-wrong", []string{
+			`needs the feature "tides"`, `question wear: column mass: unit "kg", want "solMass"`, `kind ember: composition "cheese", want one of`,
+			"parameter k: no citation", "parameter k: preset 4 outside 0 .. 3", `accepts: limit evaporating.k: unknown process "evaporating"`,
+			`question wear: unknown column "colour"`, `outcome "Tea Time": want a word`,
+		}},
 		{"bad-card", []string{
 			"no source: name the publication", "parameter k: preset 4 outside 0 .. 3", "parameter tau: no citation",
 			`question wear: unknown column "colour"`, `question "flutter" is not one that process evaporation is asked`,
@@ -124,6 +131,21 @@ func TestFaultsOfDescribing(t *testing.T) {
 			refused(t, s, soon, x.words...)
 		})
 	}
+}
+
+// A law that a person starts by hand says what it is, and ends.
+func TestFaultsByHand(t *testing.T) {
+	leavesNothing(t)
+	s := faulty(t, "serves", hole)
+	within(t, soon, func() {
+		c := exec.Command(s.Args[0], s.Args[1:]...)
+		var out, said bytes.Buffer
+		c.Env, c.Stdout, c.Stderr = s.Env, &out, &said
+		err := c.Run()
+		if c.ProcessState.ExitCode() != 1 || out.Len() > 0 || !strings.Contains(said.String(), "evaporation/black-body is a law that wane starts when it needs it") {
+			t.Errorf("%v, prints %q, says %q", err, out.String(), said.String())
+		}
+	})
 }
 
 // The faults of a card are there one by one, too.

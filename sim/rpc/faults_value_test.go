@@ -88,3 +88,28 @@ func TestFaultsOfCurves(t *testing.T) {
 		says(t, use.Rises(x.question, in, out), "law ./my-burden ("+x.id+"): ", x.risen)
 	}
 }
+
+// An answer that hangs on other rows, or on what was asked before, is named as
+// soon as a question is answered for the first time.
+func TestFaultsOfPurity(t *testing.T) {
+	leavesNothing(t)
+	for fault, words := range map[string][]string{
+		"by-order": {"question wear: row 5 (mass 6 solMass): log10_rate: got -", ", but -", " when asked again with other rows, want the same for the same row"},
+		"by-count": {"question wear: row 5 (mass 6 solMass): log10_rate: got -", " when asked again with other rows"},
+		"serves":   nil,
+	} {
+		l, err := rpc.Open(context.Background(), faulty(t, fault, hole))
+		if err != nil {
+			t.Fatal(err)
+		}
+		defer l.Close()
+		_, err = law.NewUse(l).Ask("wear", holes(10))
+		if words == nil {
+			if err != nil {
+				t.Error(err)
+			}
+			continue
+		}
+		says(t, err, append([]string{"law ./my-burden (evaporation/black-body): "}, words...)...)
+	}
+}

@@ -24,6 +24,7 @@ type Law struct {
 	slots chan struct{} // one for each call in flight
 	seq   atomic.Uint64
 	times durations
+	tried sync.Map // by question, the most rows of a batch that was asked again
 
 	mu       sync.Mutex // holds what follows
 	child    *child
@@ -123,6 +124,9 @@ func (l *Law) Answer(question string, in law.Batch) (law.Batch, error) {
 		err = l.ask(question, in, columns, 0, in.Rows)
 	} else {
 		err = l.askParts(question, in, columns, parts)
+	}
+	if err == nil {
+		err = l.again(question, in, columns)
 	}
 	if err != nil {
 		return law.Batch{}, err

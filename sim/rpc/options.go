@@ -29,6 +29,10 @@ type Options struct {
 	// OnlyCalls keeps to grpc where the law offers a socket of its own.
 	OnlyCalls bool
 
+	// AskOnce leaves it to others to find out whether the law is pure: else a
+	// few rows of the first batches are asked again.
+	AskOnce bool
+
 	// BeforeRestart, if given, may refuse to start the law again, because its
 	// files are no longer what they were.
 	BeforeRestart func() error

@@ -54,6 +54,8 @@ func TestFaultsInRuns(t *testing.T) {
 		{"mirror", "star-formation/exponential", ExitFailed, []string{"question birth, row 1 (u ", "want a quantile"}},
 		{"falls:log10_hazard", "vacuum-decay/steady", ExitFailed, []string{"law MINE (vacuum-decay/steady): question end, row ", "want a hazard that never falls"}},
 		{"value:log10_rate_ejection:+Inf:0", "ejection/contracting", ExitFailed, []string{"law MINE (ejection/contracting): question rate, row 0 (", "got +Inf, want a number or -Inf (zero)"}},
+		{"by-order", "lifetime/table", ExitFailed, []string{"law MINE (lifetime/table): question live: row ", "when asked again with other rows, want the same for the same row"}},
+		{"by-count", "star-formation/exponential", ExitFailed, []string{"question birth: row ", "when asked again with other rows"}},
 	} {
 		t.Run(x.id+"/"+x.fault, func(t *testing.T) {
 			t.Parallel()
@@ -94,7 +96,7 @@ func TestFaultsHealedInRuns(t *testing.T) {
 	args := slices.Clip(append(strings.Fields(lamp), "--json", "--workers", "2"))
 	want := wane(t, rpc.Options{}, append(args, "--law", "evaporation=page")...)
 	want.mustSay(t, ExitOK, soon)
-	for _, fault := range []string{"none", "crash:3:1", "crash:2:2", "exit-0:3:1", "killed:1:1", "hang:2:1", "stop:2:1", "flood:2", "print:2"} {
+	for _, fault := range []string{"none", "deaf", "offspring", "crash:3:1", "crash:2:2", "exit-0:3:1", "killed:1:1", "hang:2:1", "stop:2:1", "flood:2", "print:2"} {
 		t.Run(fault, func(t *testing.T) {
 			t.Parallel()
 			mine := newBadLaw(t, fault, "evaporation/page")

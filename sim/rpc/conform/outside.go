@@ -49,7 +49,7 @@ func (o *Outside) Subject() Subject {
 			return f.Build(ctx, o.Log)
 		},
 		Open: func(ctx context.Context) (Process, error) {
-			opened, err := folder.Open(ctx, o.Path, folder.Options{Log: o.Log})
+			opened, err := folder.Open(ctx, o.Path, folder.Options{Log: o.Log, Limits: rpc.Options{AskOnce: true}})
 			if err != nil {
 				return nil, err
 			}

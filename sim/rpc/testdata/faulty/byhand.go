@@ -39,9 +39,15 @@ var byHand = map[string]handmade{
 	}},
 	"no-contract": {hello: greeting, card: func(c *wire.Card) { c.Contract = 0 }},
 	"no-card":     {hello: greeting, card: func(c *wire.Card) { *c = wire.Card{} }}, //nolint:govet // a new one
-	"bad-units": {hello: greeting, card: func(c *wire.Card) {
+	"all-wrong": {hello: greeting, card: func(c *wire.Card) {
 		c.Questions[0].Inputs[0].Unit = "kg"
+		c.Questions[0].Inputs = append(c.Questions[0].Inputs, &wire.Column{Name: "colour"})
 		c.Kinds = append(c.Kinds, &wire.Kind{Name: "ember", Composition: "cheese"})
+		c.Thresholds[0].Outcome = "Tea Time"
+		c.Accepts.Low = &wire.Limit{Parameter: "evaporating.k"}
+		c.Accepts.Column = "mass"
+		c.Parameters = append(c.Parameters, &wire.Parameter{Name: "k", High: 3, Preset: 4})
+		c.Features = []string{"tides"}
 	}},
 	"seq":     {hello: greeting, result: func(r *wire.Result) { r.Seq += 7 }},
 	"rows":    {hello: greeting, result: func(r *wire.Result) { r.Rows++ }},

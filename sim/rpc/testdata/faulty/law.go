@@ -9,6 +9,7 @@ import (
 	"path/filepath"
 	"slices"
 	"strconv"
+	"sync"
 	"sync/atomic"
 	"syscall"
 	"time"
@@ -25,6 +26,9 @@ type faulty struct {
 	start  int // which one this is
 
 	described, asked atomic.Int64
+
+	mu  sync.Mutex
+	bad string // the object whose value is wrong
 }
 
 func (f *faulty) Describe() law.Card {
@@ -87,7 +91,7 @@ func (f *faulty) Answer(question string, in law.Batch) (law.Batch, error) {
 		return out, err
 	}
 	if change, ok := changes[f.fault]; ok {
-		change(f, n, out)
+		change(f, n, in, out)
 	}
 	if f.fault == "replaces" && n == 3 && f.start == 1 {
 		f.replace()
@@ -188,19 +192,29 @@ var (
 func init() { spinning.Store(true) }
 
 // changes are faults of the numbers themselves.
-var changes = map[string]func(f *faulty, n int, out law.Batch){
-	// value:COLUMN:NUMBER:ROW
-	"value": func(f *faulty, _ int, out law.Batch) {
+var changes = map[string]func(f *faulty, n int, in, out law.Batch){
+	// value:COLUMN:NUMBER:ROW, the row of the first answer that has the column;
+	// and wherever the same is asked, for that is another fault.
+	"value": func(f *faulty, _ int, in, out law.Batch) {
 		v, err := strconv.ParseFloat(f.more[1], 64)
 		if err != nil {
 			panic(err)
 		}
-		if values := out.Values(f.more[0]); f.number(2) < len(values) {
-			values[f.number(2)] = v
+		values := out.Values(f.more[0])
+		f.mu.Lock()
+		if f.bad == "" && f.number(2) < len(values) {
+			f.bad = in.Object(f.number(2))
+		}
+		bad := f.bad
+		f.mu.Unlock()
+		for i := range values {
+			if in.Object(i) == bad {
+				values[i] = v
+			}
 		}
 	},
 	// scale:COLUMN:FACTOR
-	"scale": func(f *faulty, _ int, out law.Batch) {
+	"scale": func(f *faulty, _ int, _, out law.Batch) {
 		by, err := strconv.ParseFloat(f.more[1], 64)
 		if err != nil {
 			panic(err)
@@ -210,12 +224,13 @@ var changes = map[string]func(f *faulty, n int, out law.Batch){
 			values[i] *= by
 		}
 	},
-	"word": func(f *faulty, _ int, out law.Batch) {
-		if codes := out.Words(f.more[0]); codes != nil {
-			codes[0] = 77
+	"word": func(f *faulty, _ int, _, out law.Batch) {
+		codes := out.Words(f.more[0])
+		for i := range codes {
+			codes[i] = 77
 		}
 	},
-	"falls": func(f *faulty, _ int, out law.Batch) { // from 10 on
+	"falls": func(f *faulty, _ int, _, out law.Batch) { // from 10 on
 		values := out.Values(f.more[0])
 		for i, v := range values {
 			if v > 10 {
@@ -224,14 +239,14 @@ var changes = map[string]func(f *faulty, n int, out law.Batch){
 		}
 	},
 	// An answer that hangs on the rows before.
-	"by-order": func(f *faulty, _ int, out law.Batch) {
+	"by-order": func(f *faulty, _ int, _, out law.Batch) {
 		values := out.Columns[0].Values
 		for i := range values {
 			values[i] += 1e-9 * math.Abs(values[i]) * float64(i)
 		}
 	},
 	// An answer that hangs on how often it was asked.
-	"by-count": func(f *faulty, n int, out law.Batch) {
+	"by-count": func(f *faulty, n int, _, out law.Batch) {
 		values := out.Columns[0].Values
 		for i := range values {
 			values[i] += 1e-9 * math.Abs(values[i]) * float64(n)
