@@ -24,7 +24,7 @@ type logger struct {
 func newLogger(w io.Writer, name string) *logger {
 	to := zerolog.Nop()
 	if w != nil {
-		to = zerolog.New(w).Level(zerolog.DebugLevel).With().Timestamp().Str("law", name).Logger()
+		to = zerolog.New(zerolog.SyncWriter(w)).Level(zerolog.DebugLevel).With().Timestamp().Str("law", name).Logger()
 	}
 	return &logger{to: to, limit: &limit{tokens: burst}}
 }
