@@ -35,11 +35,7 @@ func Run(ctx context.Context, sc *scenario.Scenario, reg *law.Registry, opt Opti
 	}
 	done, err := ensemble.Each(ctx, sc.Realisations, opt.Workers, model.NewWorkspace,
 		func(w *engine.Workspace, r int) (*engine.Outcome, error) {
-			o, err := w.Run(ctx, uint64(r))
-			if err != nil && ctx.Err() == nil {
-				return nil, fmt.Errorf("realisation %d: %w", r, err)
-			}
-			return o, err
+			return w.Run(ctx, uint64(r))
 		}, opt.Progress)
 	if err != nil {
 		return nil, err

@@ -44,7 +44,7 @@ func TestFaultsInRuns(t *testing.T) {
 		{"killed", "evaporation/page", ExitFailed, []string{"its process ended (signal: killed): did it run out of memory?", "eating"}},
 		{"hang", "evaporation/page", ExitFailed, []string{"no answer within 1s", "thinking"}},
 		{"panic", "evaporation/page", ExitFailed, []string{"law MINE (evaporation/page): question ", ": panic: runtime error: index out of range", "at law.go:"}},
-		{"seq", "evaporation/page", ExitFailed, []string{"an answer to batch 8, want one to batch 1", "made by hand"}},
+		{"seq", "evaporation/page", ExitFailed, []string{"an answer to batch ", ", want one to batch ", "made by hand"}},
 		{"short", "evaporation/page", ExitFailed, []string{"rows, want ", "rows of 8 bytes"}},
 		{"value:log10_temperature:NaN:0", "evaporation/page", ExitFailed, []string{"law MINE (evaporation/page): question heat, row 0 (mass ", " solMass): log10_temperature: got NaN, want a number or -Inf (zero)"}},
 		{"value:wait:-Inf:0", "lifetime/table", ExitFailed, []string{"law MINE (lifetime/table): question live, row 0 (mass ", "wait: got -Inf, want a number or +Inf (never)"}},

@@ -21,6 +21,8 @@ type handmade struct {
 	hangs  bool   // over every answer
 	card   func(*wire.Card)
 	result func(*wire.Result)
+	direct func(net.Conn)                     // at a socket of its own
+	socket string                             // which may lie elsewhere
 	answer func(*wire.Result) ([]byte, error) // instead of the message
 }
 
@@ -84,7 +86,9 @@ func serveByHand(f *faulty, h handmade) {
 	server := grpc.NewServer(grpc.ForceServerCodecV2(newCodec()))
 	server.RegisterService(&grpc.ServiceDesc{ServiceName: "wane.law.v1.Law", HandlerType: (*any)(nil), Methods: []grpc.MethodDesc{
 		{MethodName: "Describe", Handler: handler(func(*wire.DescribeRequest) (any, error) {
-			return f.wireCard(h), nil
+			card := f.wireCard(h)
+			card.Direct = h.listen(dir)
+			return card, nil
 		})},
 		{MethodName: "Answer", Handler: handler(func(b *wire.Batch) (any, error) {
 			if h.hangs {
