@@ -185,9 +185,9 @@ func (w *Workspace) resolve(t float64) error {
 			}
 		}
 		if after > before*(1+1e-12) {
-			return &law.Fault{Law: u.ID(), Question: "meet", Row: p, Column: "mass_1",
+			return u.Signed(&law.Fault{Question: "meet", Row: p, Column: "mass_1",
 				Object: fmt.Sprintf("%s and %s", w.words(pr.seeker), w.words(pr.partner)),
-				Got:    num1(after) + " Msun in all", Want: "no more than " + num1(before) + " Msun"}
+				Got:    num1(after) + " Msun in all", Want: "no more than " + num1(before) + " Msun"})
 		}
 		w.books.met(w.m, gas, before-after)
 		w.books.count(cause)

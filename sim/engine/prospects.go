@@ -204,8 +204,8 @@ func (a *asker) turned(u *law.Use, r *rows, since func(int) float64) error {
 		}
 		o := u.Card.Outcomes[w]
 		if mass[i]+gas[i] > s.mass[i]*(1+1e-12) {
-			return &law.Fault{Law: u.ID(), Question: "foretell", Row: i, Column: "mass", Object: s.describe(i, a.m),
-				Got: num1(mass[i]) + " Msun left and " + num1(gas[i]) + " Msun of gas", Want: "no more than it had"}
+			return u.Signed(&law.Fault{Question: "foretell", Row: i, Column: "mass", Object: s.describe(i, a.m),
+				Got: num1(mass[i]) + " Msun left and " + num1(gas[i]) + " Msun of gas", Want: "no more than it had"})
 		}
 		kind := uint8(law.NoWord)
 		if o.Becomes != law.Gone {

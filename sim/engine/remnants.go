@@ -40,10 +40,24 @@ func (a *asker) remnantsOf(c *columns, r *rows, u *law.Use, id func(int) int) er
 	stars.kind = a.kinds
 	out, err = a.ask(u, "remain", stars, drawSize)
 	stars.kind = asStars
+	if err == nil && !readsAny(u, "remain", "mass") { // then nobody has seen yet what it makes of the star's
+		err = a.lighter(u, stars, out.Columns[0].Values)
+	}
 	if err != nil {
 		return err
 	}
 	return a.keepRemnants(c, r, u, stars.n, pick, id, out, &causes)
+}
+
+// lighter returns a fault if a star leaves more than it weighed.
+func (a *asker) lighter(u *law.Use, stars *rows, left []float64) error {
+	for i, m := range left {
+		if m > stars.mass[i]*(1+1e-12) {
+			return u.Signed(&law.Fault{Question: "remain", Row: i, Column: "mass", Object: stars.describe(i, a.m),
+				Got: num1(m) + " Msun left", Want: "no more than it had"})
+		}
+	}
+	return nil
 }
 
 // keepRemnants puts kinds, masses and causes of death into the columns.

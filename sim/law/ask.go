@@ -57,18 +57,18 @@ func (u *Use) Ask(question string, in Batch) (Batch, error) {
 		return Batch{}, fmt.Errorf("law %s: question %s: %w", u.label(), question, err)
 	}
 	if f := u.check(question, want, in, out); f != nil {
-		u.sign(f)
-		return Batch{}, f
+		return Batch{}, u.Signed(f)
 	}
 	return out, nil
 }
 
-// sign puts the law's name, and the log of an outside one, into a fault.
-func (u *Use) sign(f *Fault) {
+// Signed puts the law's name, and the log of an outside one, into a fault.
+func (u *Use) Signed(f *Fault) *Fault {
 	f.Law = u.label()
 	if o, ok := u.Law.(Outside); ok {
 		f.Log = o.Log()
 	}
+	return f
 }
 
 // label names the law in faults: an outside one by what the person called it,

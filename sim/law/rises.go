@@ -32,10 +32,8 @@ func (u *Use) Rises(question string, in, out Batch) error {
 	if row < 0 {
 		return nil
 	}
-	f := u.rowFault(question, out.Columns[0].Name, row, in,
-		fmt.Sprintf("%v, and %v in row %d (%s)", values[row], values[row-1], row-1, in.Object(row-1)), want)
-	u.sign(f)
-	return f
+	return u.Signed(u.rowFault(question, out.Columns[0].Name, row, in,
+		fmt.Sprintf("%v, and %v in row %d (%s)", values[row], values[row-1], row-1, in.Object(row-1)), want))
 }
 
 // turned returns the first row whose value lies on the other side of the value

@@ -49,6 +49,7 @@ func TestFaultsInRuns(t *testing.T) {
 		{"value:log10_temperature:NaN:0", "evaporation/page", ExitFailed, []string{"law MINE (evaporation/page): question heat, row 0 (mass ", " solMass): log10_temperature: got NaN, want a number or -Inf (zero)"}},
 		{"value:wait:-Inf:0", "lifetime/table", ExitFailed, []string{"law MINE (lifetime/table): question live, row 0 (mass ", "wait: got -Inf, want a number or +Inf (never)"}},
 		{"scale:mass:9", "remnant/cummings", ExitFailed, []string{"law MINE (remnant/cummings): question remain, row ", " solMass, want no more than the ", " solMass there was"}},
+		{"heavy", "remnant/cummings", ExitFailed, []string{"law MINE (remnant/cummings): question remain, row ", " (star, ", " Msun): mass: got 900 Msun left, want no more than it had"}},
 		{"value:mass:-1:0", "mass-function/kroupa", ExitFailed, []string{"question mass, row 0 (u ", "mass: got -1, want a finite number > 0"}},
 		{"mirror", "mass-function/kroupa", ExitFailed, []string{"law MINE (mass-function/kroupa): question mass, row 1 (u ", "want a quantile, which never falls as u rises"}},
 		{"mirror", "star-formation/exponential", ExitFailed, []string{"question birth, row 1 (u ", "want a quantile"}},

@@ -55,8 +55,12 @@ func (f *faulty) Describe() law.Card {
 		card.Summary += fmt.Sprintf(" (start %d)", f.start)
 	case "bad-card":
 		badCard(&card)
-	case "renamed":
-		card.Name = f.more[0]
+	case "heavy": // remnants of one mass, whatever the star's
+		for i, q := range card.Questions {
+			if q.Name == "remain" {
+				card.Questions[i].Inputs = []string{"u"}
+			}
+		}
 	}
 	return card
 }
@@ -82,6 +86,13 @@ func (f *faulty) Answer(question string, in law.Batch) (law.Batch, error) {
 	if act, ok := acts[f.fault]; ok && n >= max(1, at) && (times == 0 || f.start <= times) {
 		f.begins()
 		act()
+	}
+	if f.fault == "heavy" && question == "remain" {
+		mass, composition := in.NewValues(), in.NewWords()
+		for i := range mass {
+			mass[i], composition[i] = 900, law.CarbonOxygen
+		}
+		return in.Answer(law.Numbers("mass", mass), law.Codes("composition", composition)), nil
 	}
 	if f.fault == "mirror" { // quantiles fall
 		in = mirrored(in)
