@@ -47,12 +47,23 @@ func (l *Law) again(question string, in law.Batch, first []law.Column) error {
 				a, b = v, w
 			}
 			if a != b {
-				return &AnswerError{Reason: fmt.Sprintf("row %d (%s): %s: got %v, but %v when asked again with other rows, want the same for the same row",
-					row, in.Object(row), c.Name, a, b), Log: l.Log()}
+				return l.stop(&AnswerError{Reason: fmt.Sprintf("row %d (%s): %s: got %v, but %v when asked again with other rows, want the same for the same row",
+					row, in.Object(row), c.Name, a, b), Log: l.Log()})
 			}
 		}
 	}
 	return nil
+}
+
+// stop makes a fault the last word of the law: no other run of the same galaxy
+// shall build on its answers.
+func (l *Law) stop(fault error) error {
+	l.mu.Lock()
+	defer l.mu.Unlock()
+	if l.stopped == nil {
+		l.stopped = fault
+	}
+	return l.stopped
 }
 
 // same tells whether two answers are as equal as the law says they are.

@@ -111,5 +111,8 @@ func TestFaultsOfPurity(t *testing.T) {
 			continue
 		}
 		says(t, err, append([]string{"law ./my-burden (evaporation/black-body): "}, words...)...)
+		if _, later := law.NewUse(l).Ask("heat", holes(2)); later == nil {
+			t.Errorf("%s: the law is asked on", fault)
+		}
 	}
 }
