@@ -3,6 +3,7 @@ package cli
 import (
 	"bytes"
 	"encoding/json"
+	"fmt"
 	"os"
 	"path/filepath"
 	"slices"
@@ -143,6 +144,27 @@ func TestFaultsOfReplacedFiles(t *testing.T) {
 			}
 		}
 	}
+}
+
+// The program itself is a file of the law, too.
+func TestFaultsOfReplacedProgram(t *testing.T) {
+	mine := newBadLaw(t, "serves", "evaporation/page")
+	data, err := os.ReadFile(program(t, "faulty"))
+	if err == nil {
+		err = os.WriteFile(filepath.Join(mine.path, "law"), data, 0o755)
+	}
+	if err == nil {
+		start := fmt.Sprintf("start = [\"./law\", \"replaces:law:killed\", \"evaporation/page\", %q]\n", mine.state)
+		err = os.WriteFile(filepath.Join(mine.path, "law.toml"), []byte(start), 0o644)
+	}
+	if err != nil {
+		t.Fatal(err)
+	}
+	h := wane(t, rpc.Options{}, append(strings.Fields(lamp), "--law", "evaporation="+mine.path)...)
+	_, digest, _ := strings.Cut(h.said, mine.path+", ")
+	digest, _, _ = strings.Cut(digest, "\n")
+	h.mustSay(t, ExitFailed, soon, "its process ended (signal: killed)", "starting it again: law "+mine.path+" has changed: its digest was "+digest+" and is sha256:")
+	mine.gone(t, 0)
 }
 
 // A process has one law.
