@@ -1,3 +1,5 @@
+//go:build linux
+
 package rpc_test
 
 import (
@@ -107,7 +109,7 @@ func TestFaultsOfTheLaw(t *testing.T) {
 	l := open(t, faulty(t, "panic", hole))
 	use := law.NewUse(l)
 	_, err := use.Ask("wear", holes(5))
-	says(t, err, "law ./my-burden (evaporation/black-body): question wear: panic: runtime error: index out of range [4] with length 0 at law.go:")
+	says(t, err, "law ./my-burden (evaporation/black-body): question wear: panic: runtime error: index out of range [4] with length 0 at acts.go:")
 	if log := l.Log(); l.Restarts() != 0 || l.PID() == 0 || len(log) == 0 {
 		t.Errorf("started again %d times, log %q", l.Restarts(), log)
 	}

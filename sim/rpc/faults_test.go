@@ -1,3 +1,5 @@
+//go:build linux
+
 package rpc_test
 
 import (
@@ -20,7 +22,8 @@ import (
 )
 
 // The tests of faults start real processes that misbehave: testdata/faulty,
-// which is a built-in law but for one fault.
+// which is a built-in law but for one fault. What is left of them is looked
+// for in /proc, so that they run on Linux alone.
 
 // faultyProgram is built once, into a folder that TestMain removes.
 var faultyProgram = sync.OnceValues(func() (string, error) {
@@ -35,8 +38,6 @@ var faultyProgram = sync.OnceValues(func() (string, error) {
 	}
 	return program, nil
 })
-
-var faultyFolder string
 
 // hole is the law that most faults are tried on.
 const hole = "evaporation/black-body"

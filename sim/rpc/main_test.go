@@ -15,6 +15,9 @@ import (
 // as an outside law.
 const childLaw = "WANE_TEST_LAW"
 
+// faultyFolder is what the tests of faults build.
+var faultyFolder string
+
 func TestMain(m *testing.M) {
 	if name := os.Getenv(childLaw); name != "" {
 		rpc.Serve(served(name))

@@ -1,3 +1,5 @@
+//go:build linux
+
 package cli
 
 import (
@@ -44,7 +46,7 @@ func TestFaultsInRuns(t *testing.T) {
 		{"exit-0:2", "evaporation/page", ExitFailed, []string{"its process ended (exit status 0)", "good night"}},
 		{"killed", "evaporation/page", ExitFailed, []string{"its process ended (signal: killed): did it run out of memory?", "eating"}},
 		{"hang", "evaporation/page", ExitFailed, []string{"no answer within 1s", "thinking"}},
-		{"panic", "evaporation/page", ExitFailed, []string{"law MINE (evaporation/page): question ", ": panic: runtime error: index out of range", "at law.go:"}},
+		{"panic", "evaporation/page", ExitFailed, []string{"law MINE (evaporation/page): question ", ": panic: runtime error: index out of range", "at acts.go:"}},
 		{"seq", "evaporation/page", ExitFailed, []string{"an answer to batch ", ", want one to batch ", "made by hand"}},
 		{"short", "evaporation/page", ExitFailed, []string{"rows, want ", "rows of 8 bytes"}},
 		{"value:log10_temperature:NaN:0", "evaporation/page", ExitFailed, []string{"law MINE (evaporation/page): question heat, row 0 (mass ", " solMass): log10_temperature: got NaN, want a number or -Inf (zero)"}},

@@ -1,3 +1,5 @@
+//go:build linux
+
 package cli
 
 import (
@@ -19,6 +21,7 @@ import (
 
 // The tests of faults run wane with laws that are real processes with a fault:
 // the program in sim/rpc/testdata/faulty, which is a built-in law but for it.
+// What is left of them is looked for in /proc, so that they run on Linux alone.
 
 var programsFolder string
 

@@ -40,7 +40,7 @@ var byHand = map[string]handmade{
 		c.Contract, c.Features = 2, []string{"shared-columns", "tides"}
 	}},
 	"no-contract": {hello: greeting, card: func(c *wire.Card) { c.Contract = 0 }},
-	"no-card":     {hello: greeting, card: func(c *wire.Card) { *c = wire.Card{} }}, //nolint:govet // a new one
+	"no-card":     {hello: greeting, card: func(c *wire.Card) { *c = wire.Card{} }},
 	"all-wrong": {hello: greeting, card: func(c *wire.Card) {
 		c.Questions[0].Inputs[0].Unit = "kg"
 		c.Questions[0].Inputs = append(c.Questions[0].Inputs, &wire.Column{Name: "colour"})
@@ -69,7 +69,7 @@ var byHand = map[string]handmade{
 	"huge":    {hello: greeting, answer: func(*wire.Result) ([]byte, error) { return make([]byte, 80<<20), nil }},
 }
 
-// bytesCodec sends bytes as they are, and messages as usual.
+// reply is a message that is bytes already.
 type reply struct{ bytes []byte }
 
 func serveByHand(f *faulty, h handmade) {

@@ -1,17 +1,11 @@
 package main
 
 import (
-	"bytes"
 	"fmt"
-	"math"
 	"os"
-	"os/exec"
 	"path/filepath"
-	"slices"
-	"strconv"
 	"sync"
 	"sync/atomic"
-	"syscall"
 	"time"
 
 	"wane/sim/law"
@@ -131,151 +125,4 @@ func (f *faulty) number0(i int) int {
 		return 0
 	}
 	return f.number(i)
-}
-
-// acts are faults of a process in the middle of an answer.
-var acts = map[string]func(){
-	"nothing": func() {},
-	"crash": func() {
-		fmt.Fprintln(os.Stderr, "a table has a hole in it")
-		os.Exit(3)
-	},
-	"exit-0": func() {
-		fmt.Fprintln(os.Stderr, "good night")
-		os.Exit(0)
-	},
-	"fatal": func() { // a panic that nobody can catch
-		go func() { panic("lost in the tables") }()
-		time.Sleep(forever)
-	},
-	"panic": func() { var table []float64; fmt.Fprintln(os.Stderr, table[len(os.Args)]) },
-	"hang":  func() { fmt.Fprintln(os.Stderr, "thinking"); time.Sleep(forever) },
-	"spin": func() {
-		fmt.Fprintln(os.Stderr, "spinning")
-		for spinning.Load() {
-		}
-	},
-	"stop": func() {
-		fmt.Fprintln(os.Stderr, "stopping")
-		_ = syscall.Kill(os.Getpid(), syscall.SIGSTOP)
-		time.Sleep(10 * time.Millisecond)
-	},
-	"killed": func() {
-		fmt.Fprintln(os.Stderr, "eating")
-		_ = syscall.Kill(os.Getpid(), syscall.SIGKILL)
-		time.Sleep(forever)
-	},
-	"balloon": func() {
-		fmt.Fprintln(os.Stderr, "eating")
-		limit := syscall.Rlimit{Cur: 3 << 30, Max: 3 << 30}
-		if err := syscall.Setrlimit(syscall.RLIMIT_AS, &limit); err != nil {
-			panic(err)
-		}
-		for size := 1 << 24; ; size *= 2 {
-			eaten = append(eaten, make([]byte, size))
-		}
-	},
-	"print": func() { // past what catches it
-		_, _ = syscall.Write(1, []byte("hello\n"))
-		_, _ = syscall.Write(1, bytes.Repeat([]byte("hello "), 30_000))
-		fmt.Println("a word on standard output")
-	},
-	"flood": func() {
-		_, _ = os.Stderr.Write(bytes.Repeat([]byte("and "), 1<<18))
-		for range 2000 {
-			fmt.Fprintln(os.Stderr, "a line in a flood")
-		}
-	},
-	"offspring": func() {
-		c := exec.Command("sleep", "300")
-		c.Stdout, c.Stderr = os.Stdout, os.Stderr
-		if err := c.Start(); err != nil {
-			panic(err)
-		}
-	},
-}
-
-var (
-	spinning atomic.Bool
-	eaten    [][]byte
-)
-
-func init() { spinning.Store(true) }
-
-// changes are faults of the numbers themselves.
-var changes = map[string]func(f *faulty, n int, in, out law.Batch){
-	// value:COLUMN:NUMBER:ROW, the row of the first answer that has the column;
-	// and wherever the same is asked, for that is another fault.
-	"value": func(f *faulty, _ int, in, out law.Batch) {
-		v, err := strconv.ParseFloat(f.more[1], 64)
-		if err != nil {
-			panic(err)
-		}
-		values := out.Values(f.more[0])
-		f.mu.Lock()
-		if f.bad == "" && f.number(2) < len(values) {
-			f.bad = in.Object(f.number(2))
-		}
-		bad := f.bad
-		f.mu.Unlock()
-		for i := range values {
-			if in.Object(i) == bad {
-				values[i] = v
-			}
-		}
-	},
-	// scale:COLUMN:FACTOR
-	"scale": func(f *faulty, _ int, _, out law.Batch) {
-		by, err := strconv.ParseFloat(f.more[1], 64)
-		if err != nil {
-			panic(err)
-		}
-		values := out.Values(f.more[0])
-		for i := range values {
-			values[i] *= by
-		}
-	},
-	"word": func(f *faulty, _ int, _, out law.Batch) {
-		codes := out.Words(f.more[0])
-		for i := range codes {
-			codes[i] = 77
-		}
-	},
-	"falls": func(f *faulty, _ int, _, out law.Batch) { // from 10 on
-		values := out.Values(f.more[0])
-		for i, v := range values {
-			if v > 10 {
-				values[i] = 20 - v
-			}
-		}
-	},
-	// An answer that hangs on the rows before.
-	"by-order": func(f *faulty, _ int, _, out law.Batch) {
-		values := out.Columns[0].Values
-		for i := range values {
-			values[i] += 1e-9 * math.Abs(values[i]) * float64(i)
-		}
-	},
-	// An answer that hangs on how often it was asked.
-	"by-count": func(f *faulty, n int, _, out law.Batch) {
-		values := out.Columns[0].Values
-		for i := range values {
-			values[i] += 1e-9 * math.Abs(values[i]) * float64(n)
-		}
-	},
-}
-
-func mirrored(in law.Batch) law.Batch {
-	in.Columns = slices.Clone(in.Columns)
-	for i, c := range in.Columns {
-		if c.Name != "u" {
-			continue
-		}
-		u := make([]float64, len(c.Values))
-		for j, v := range c.Values {
-			u[j] = 1 - v
-		}
-		in.Columns[i].Values = u
-	}
-	return in
 }
