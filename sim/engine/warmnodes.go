@@ -11,8 +11,8 @@ import (
 // cross a threshold, on a grid of masses. They only bracket the crossing of a
 // real object, so nothing of a result hangs on them.
 const (
-	nodeSpacing = 0.02 // in ln mass
-	nodeMargin  = 0.01 // dex of age: how far a guess may be off and still serve
+	nodeSpacing = 0.02  // in ln mass
+	nodeMargin  = 0.002 // dex of age: how far a guess may be off and still serve
 )
 
 type nodeKey struct {
