@@ -43,22 +43,29 @@ func (f *feeler) solve(which []int32, end float64) error {
 	if len(which) == 0 {
 		return nil
 	}
-	f.ages = grown(f.ages, len(which))
-	ages := f.ages
-	for k, j := range which {
+	for _, j := range which {
 		s := &f.stays[j]
 		f.low[j] = youngest
 		if s.enter > s.entered {
 			f.low[j] = max(num.Sub10(s.enter, s.entered), youngest)
 		}
-		ages[k] = f.low[j]
 	}
-	g, err := f.excess(ages, which)
+	if err := f.guesses(which); err != nil {
+		return err
+	}
+	open, rest, err := f.before(which, end)
 	if err != nil {
 		return err
 	}
-	var open []int32
-	for k, j := range which {
+	f.ages = grown(f.ages, len(rest))
+	for k, j := range rest {
+		f.ages[k] = f.low[j]
+	}
+	g, err := f.excess(f.ages, rest)
+	if err != nil {
+		return err
+	}
+	for k, j := range rest {
 		f.glow[j] = g[k]
 		if f.warm[j] = g[k] > 0; f.warm[j] {
 			open = append(open, j)
@@ -77,102 +84,94 @@ func (f *feeler) solve(which []int32, end float64) error {
 	return nil
 }
 
+// before looks just before the guesses that lie within their stays. A stay that
+// is warm there was so from the start, since nothing gets warmer in a stay: that
+// is its bracket's lower end. One that is not has an upper end; it is among the
+// rest, whose start is still to be looked at.
+func (f *feeler) before(which []int32, end float64) (open, rest []int32, err error) {
+	var tried []int32
+	f.ages = f.ages[:0]
+	for _, j := range which {
+		f.high[j] = never
+		if a := f.guess[j] - nodeMargin; a > f.low[j] && a < f.lastAge(j, end) {
+			tried, f.ages = append(tried, j), append(f.ages, a)
+		} else {
+			rest = append(rest, j)
+		}
+	}
+	if len(tried) == 0 {
+		return nil, rest, nil
+	}
+	ages := f.ages
+	g, err := f.excess(ages, tried)
+	if err != nil {
+		return nil, nil, err
+	}
+	for k, j := range tried {
+		if g[k] > 0 {
+			f.low[j], f.glow[j], f.warm[j] = ages[k], g[k], true
+			open = append(open, j)
+		} else {
+			f.high[j], f.ghigh[j] = ages[k], g[k]
+			rest = append(rest, j)
+		}
+	}
+	return open, rest, nil
+}
+
+// lastAge is the log10 age at which a stay, or the run, ends.
+func (f *feeler) lastAge(j int32, end float64) float64 {
+	s := &f.stays[j]
+	l := min(s.leave, end, forever)
+	if s.entered > l-unseen {
+		l = num.Sub10(l, s.entered)
+	}
+	return l
+}
+
 // bracket brings a crossing between low and high: by the guess of the nodes
 // first, by the end of the stay where that fails. It returns the stays that
 // have one.
 func (f *feeler) bracket(open []int32, end float64) ([]int32, error) {
-	if len(open) == 0 {
-		return nil, nil
-	}
-	last := func(s *stay) float64 {
-		l := min(s.leave, end, forever)
-		if s.entered > l-unseen {
-			l = num.Sub10(l, s.entered)
-		}
-		return l
-	}
-	guess, err := f.guesses(open)
-	if err != nil {
-		return nil, err
-	}
-	f.tops = grown(f.tops, len(open))
-	tops := f.tops
-	for k, j := range open {
-		tops[k] = max(last(&f.stays[j]), f.low[j])
-		if guess != nil && guess[k]+nodeMargin < tops[k] {
-			tops[k] = max(guess[k]+nodeMargin, f.low[j])
-		}
-	}
-	g, err := f.excess(tops, open)
-	if err != nil {
-		return nil, err
-	}
-	var have, missed []int32
-	for k, j := range open {
-		switch {
-		case g[k] <= 0:
-			f.high[j], f.ghigh[j] = tops[k], g[k]
+	var have, asked []int32
+	f.tops = f.tops[:0]
+	for _, j := range open {
+		if f.high[j] < never {
 			have = append(have, j)
-		default:
-			if f.low[j] < tops[k] {
-				f.low[j], f.glow[j] = tops[k], g[k]
+			continue
+		}
+		top := max(f.lastAge(j, end), f.low[j])
+		if guess := f.guess[j] + nodeMargin; guess < top {
+			top = max(guess, f.low[j])
+		}
+		asked, f.tops = append(asked, j), append(f.tops, top)
+	}
+	for again := false; len(asked) > 0; again = true {
+		g, err := f.excess(f.tops, asked)
+		if err != nil {
+			return nil, err
+		}
+		var missed []int32
+		for k, j := range asked {
+			top := f.tops[k]
+			if g[k] <= 0 {
+				f.high[j], f.ghigh[j] = top, g[k]
+				have = append(have, j)
+				continue
 			}
-			missed = append(missed, j)
+			if f.low[j] < top {
+				f.low[j], f.glow[j] = top, g[k]
+			}
+			if !again && top < f.lastAge(j, end) {
+				missed = append(missed, j)
+			}
 		}
-	}
-	if err := f.raise(have, guess, open); err != nil {
-		return nil, err
-	}
-	if guess == nil || len(missed) == 0 {
-		return have, nil
-	}
-	tops = tops[:0]
-	for _, j := range missed {
-		tops = append(tops, max(last(&f.stays[j]), f.low[j]))
-	}
-	if g, err = f.excess(tops, missed); err != nil {
-		return nil, err
-	}
-	for k, j := range missed {
-		if g[k] <= 0 {
-			f.high[j], f.ghigh[j] = tops[k], g[k]
-			have = append(have, j)
+		asked, f.tops = missed, f.tops[:0]
+		for _, j := range missed {
+			f.tops = append(f.tops, max(f.lastAge(j, end), f.low[j]))
 		}
 	}
 	return have, nil
-}
-
-// raise moves the lower ends of brackets up to just below the guess.
-func (f *feeler) raise(have []int32, guess []float64, open []int32) error {
-	if guess == nil {
-		return nil
-	}
-	var which []int32
-	var ages []float64
-	k := 0
-	for _, j := range have {
-		for open[k] != j {
-			k++
-		}
-		if g := guess[k] - nodeMargin; g > f.low[j] && g < f.high[j] {
-			which, ages = append(which, j), append(ages, g)
-		}
-	}
-	if len(which) == 0 {
-		return nil
-	}
-	g, err := f.excess(ages, which)
-	if err != nil {
-		return err
-	}
-	for k, j := range which {
-		if g[k] > 0 {
-			f.low[j], f.glow[j] = ages[k], g[k]
-		} else {
-			f.high[j], f.ghigh[j] = ages[k], g[k]
-		}
-	}
-	return nil
 }
 
 const (

@@ -28,6 +28,7 @@ type feeler struct {
 	warm        []bool
 	low, high   []float64 // log10 ages of the bracket
 	glow, ghigh []float64
+	guess       []float64 // of the log10 age of the crossing; never: none
 	side        []int8
 	ages, tops  []float64
 }
@@ -68,7 +69,7 @@ func (f *feeler) resize(n int) {
 		f.all, f.part = newRows(n), newRows(n)
 	}
 	f.all.resize(n)
-	for _, x := range []*[]float64{&f.steady, &f.goal, &f.cross, &f.low, &f.high, &f.glow, &f.ghigh} {
+	for _, x := range []*[]float64{&f.steady, &f.goal, &f.cross, &f.low, &f.high, &f.glow, &f.ghigh, &f.guess} {
 		*x = grown(*x, n)
 	}
 	f.dark, f.warm, f.side = grown(f.dark, n), grown(f.warm, n), grown(f.side, n)

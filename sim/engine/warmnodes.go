@@ -31,19 +31,21 @@ func (w *Workspace) nodeAges(x *galaxy.Warmth) map[nodeKey]float64 {
 	return w.warmNodes[*x]
 }
 
-// guesses returns the log10 ages at which the chosen stays would cross if
-// nothing but their own heat counted, by interpolation between nodes; nil when
-// the threshold is none of their own heat or hangs on more than mass.
-func (f *feeler) guesses(which []int32) ([]float64, error) {
+// guesses sets the log10 ages at which the chosen stays would cross if nothing
+// but their own heat counted, by interpolation between nodes; never when the
+// threshold is none of their own heat or hangs on more than mass.
+func (f *feeler) guesses(which []int32) error {
 	if f.x.Unit == "floor" || f.bare || f.w.m.coolsByMetals {
-		return nil, nil
+		for _, j := range which {
+			f.guess[j] = never
+		}
+		return nil
 	}
 	table := f.w.nodeAges(f.x)
 	var missing []nodeKey
-	at := make([]float64, len(which))
-	for k, j := range which {
-		at[k] = num.Log(f.all.mass[j]) / nodeSpacing
-		i := int32(math.Floor(at[k]))
+	for _, j := range which {
+		f.guess[j] = num.Log(f.all.mass[j]) / nodeSpacing
+		i := int32(math.Floor(f.guess[j]))
 		for _, index := range [2]int32{i, i + 1} {
 			key := nodeKey{f.all.kind[j], f.all.comp[j], index}
 			if _, ok := table[key]; !ok {
@@ -53,20 +55,19 @@ func (f *feeler) guesses(which []int32) ([]float64, error) {
 		}
 	}
 	if err := f.fillNodes(table, missing); err != nil {
-		return nil, err
+		return err
 	}
-	for k, j := range which {
-		i := math.Floor(at[k])
+	for _, j := range which {
+		at := f.guess[j]
+		i := math.Floor(at)
 		key := nodeKey{f.all.kind[j], f.all.comp[j], int32(i)}
 		a := table[key]
 		key.index++
-		b := table[key]
-		at[k] = a + (b-a)*(at[k]-i)
-		if at[k] != at[k] {
-			at[k] = never
+		if f.guess[j] = a + (table[key]-a)*(at-i); f.guess[j] != f.guess[j] {
+			f.guess[j] = never
 		}
 	}
-	return at, nil
+	return nil
 }
 
 // fillNodes solves the missing nodes: stays that begin at date 0 and last for
