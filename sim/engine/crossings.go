@@ -1,8 +1,6 @@
 package engine
 
 import (
-	"math"
-
 	"wane/sim/galaxy"
 	"wane/sim/num"
 )
@@ -53,6 +51,11 @@ func (f *feeler) solve(which []int32, end float64) error {
 	if err := f.guesses(which); err != nil {
 		return err
 	}
+	found, which, err := f.near(which, end)
+	if err != nil {
+		return err
+	}
+	f.settle(found)
 	open, rest, err := f.before(which, end)
 	if err != nil {
 		return err
@@ -77,11 +80,16 @@ func (f *feeler) solve(which []int32, end float64) error {
 	if err := f.roots(open); err != nil {
 		return err
 	}
-	for _, j := range open {
+	f.settle(open)
+	return nil
+}
+
+// settle makes dates of the ages at which stays cross.
+func (f *feeler) settle(found []int32) {
+	for _, j := range found {
 		s := &f.stays[j]
 		f.cross[j] = min(max(later(s.entered, f.high[j]), s.enter), s.leave)
 	}
-	return nil
 }
 
 // before looks just before the guesses that lie within their stays. A stay that
@@ -172,60 +180,4 @@ func (f *feeler) bracket(open []int32, end float64) ([]int32, error) {
 		}
 	}
 	return have, nil
-}
-
-const (
-	youngest = 0.0   // log10 yr: nothing cools within a year of its birth
-	forever  = 1e4   // log10 yr: as far as cooling is followed
-	coolTol  = 2e-13 // of log10 age
-)
-
-// roots narrows the brackets [low, high] (log10 ages) to the crossing by the
-// Illinois variant of regula falsi, all stays side by side, with a bisection
-// where that is slow. The answer is in high.
-func (f *feeler) roots(open []int32) error {
-	open = append([]int32(nil), open...)
-	low, high, glow, ghigh := f.low, f.high, f.glow, f.ghigh
-	side := f.side[:len(low)]
-	clear(side)
-	f.ages = grown(f.ages, len(open))
-	ages := f.ages
-	for try := 0; len(open) > 0 && try < 200; try++ {
-		for k, j := range open {
-			x := (low[j]*ghigh[j] - high[j]*glow[j]) / (ghigh[j] - glow[j])
-			if try%4 == 3 || !(x > low[j] && x < high[j]) {
-				x = 0.5 * (low[j] + high[j])
-			}
-			ages[k] = x
-		}
-		g, err := f.excess(ages[:len(open)], open)
-		if err != nil {
-			return err
-		}
-		still := open[:0]
-		for k, j := range open {
-			// How far the zero can be from here, by the slope of the bracket.
-			off := math.Abs(g[k]) * (high[j] - low[j]) / (glow[j] - ghigh[j])
-			if g[k] > 0 {
-				low[j], glow[j] = ages[k], g[k]
-				if side[j] == 1 {
-					ghigh[j] *= 0.5
-				}
-				side[j] = 1
-			} else {
-				high[j], ghigh[j] = ages[k], g[k]
-				if side[j] == -1 {
-					glow[j] *= 0.5
-				}
-				side[j] = -1
-			}
-			if off < coolTol || high[j]-low[j] < coolTol {
-				high[j] = ages[k]
-				continue
-			}
-			still = append(still, j)
-		}
-		open = still
-	}
-	return nil
 }

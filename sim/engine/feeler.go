@@ -29,7 +29,8 @@ type feeler struct {
 	low, high   []float64 // log10 ages of the bracket
 	glow, ghigh []float64
 	guess       []float64 // of the log10 age of the crossing; never: none
-	side        []int8
+	slope       []float64 // of the excess there; 0: unknown
+	probes      []probe
 	ages, tops  []float64
 }
 
@@ -69,10 +70,10 @@ func (f *feeler) resize(n int) {
 		f.all, f.part = newRows(n), newRows(n)
 	}
 	f.all.resize(n)
-	for _, x := range []*[]float64{&f.steady, &f.goal, &f.cross, &f.low, &f.high, &f.glow, &f.ghigh, &f.guess} {
+	for _, x := range []*[]float64{&f.steady, &f.goal, &f.cross, &f.low, &f.high, &f.glow, &f.ghigh, &f.guess, &f.slope} {
 		*x = grown(*x, n)
 	}
-	f.dark, f.warm, f.side = grown(f.dark, n), grown(f.warm, n), grown(f.side, n)
+	f.dark, f.warm, f.probes = grown(f.dark, n), grown(f.warm, n), grown(f.probes, n)
 	clear(f.steady)
 	clear(f.warm)
 	fill(f.cross, never)

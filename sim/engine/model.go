@@ -62,7 +62,7 @@ type Model struct {
 	wornBy                          [256]int8 // by kind: the wearing law, -1: none; good in a simple run
 	wornInPart                      bool      // a law speaks for part of a kind only
 	stagesDraw                      bool      // a law of what objects become reads a draw
-	batch                           int       // rows to ask about at a time
+	batch, rounds                   int       // rows to ask about at a time; where questions come in rounds
 	coolsByMetals                   bool
 	voices                          map[*law.Use]*voice
 	deathsMatter                    bool // a declared value changes when a star dies

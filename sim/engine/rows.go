@@ -9,8 +9,13 @@ import (
 // time, too, unless one wants more of them.
 const chunk = 4096
 
-// mostRows is the most that are asked about at a time.
-const mostRows = 16 * chunk
+// mostRows is the most that are asked about at a time. Dates of cooling are
+// found in rounds of questions, the later ones about few objects: there a law
+// that wants many rows gets several times as many.
+const (
+	mostRows = 16 * chunk
+	inRounds = 4
+)
 
 // compileBatch finds how many rows to ask about at a time, a multiple of
 // chunk. No answer depends on it.
@@ -20,6 +25,10 @@ func (m *Model) compileBatch() {
 		if b, ok := u.Law.(law.Batcher); ok && !u.Card.Idle {
 			m.batch = max(m.batch, min((b.Rows()+chunk-1)/chunk*chunk, mostRows))
 		}
+	}
+	m.rounds = m.batch
+	if m.batch > chunk {
+		m.rounds *= inRounds
 	}
 }
 

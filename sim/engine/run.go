@@ -43,7 +43,7 @@ type Workspace struct {
 	spared        [maxClocks]map[uint32]float64 // of those that nothing can hit at present
 	stayed        []stay
 	feel          feeler
-	warmNodes     map[galaxy.Warmth]map[nodeKey]float64
+	warmNodes     map[galaxy.Warmth][]nodeLine
 	rho           [maxClocks][maxClocks]float64
 	broken        [maxClocks][maxClocks]bool
 	checked       int

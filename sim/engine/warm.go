@@ -34,7 +34,7 @@ func (w *Workspace) tallyWarm(end float64) error {
 func (w *Workspace) tallyOne(p int, pop *population, end float64) error {
 	stays := w.stays(pop, end)
 	for first, last := 0, 0; first < len(stays); first = last {
-		last = min(first+w.m.batch, len(stays))
+		last = min(first+w.m.rounds, len(stays))
 		for last < len(stays) && stays[last].follows {
 			last++ // the stays of one object are looked at together
 		}

@@ -61,7 +61,7 @@ func (l *Law) ask(question string, in law.Batch, out []law.Column, from, to int)
 	if slices.Equal(kinds, law.KindWords) {
 		kinds = nil
 	}
-	batch := encodeBatch(seq, question, in, from, to, kinds)
+	batch := encodeBatch(&l.memory, seq, question, in, from, to, kinds)
 	batch.kept = true
 	defer batch.buffer.Free()
 	read := func(message []byte) error {

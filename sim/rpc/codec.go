@@ -66,15 +66,15 @@ func (c codec) Unmarshal(data mem.BufferSlice, v any) error {
 }
 
 // message starts a message of at most size bytes in borrowed memory.
-func message(size int) *[]byte {
-	b := mem.DefaultBufferPool().Get(size)
+func message(from mem.BufferPool, size int) *[]byte {
+	b := from.Get(size)
 	*b = (*b)[:0]
 	return b
 }
 
-func finished(b *[]byte, text []byte) *encoded {
+func finished(from mem.BufferPool, b *[]byte, text []byte) *encoded {
 	*b = text
-	return &encoded{buffer: mem.NewBuffer(b, mem.DefaultBufferPool())}
+	return &encoded{buffer: mem.NewBuffer(b, from)}
 }
 
 // columnsSize bounds the bytes of columns on the wire.
@@ -88,7 +88,7 @@ func columnsSize(columns []law.Column) int {
 
 // encodeBatch writes rows from .. to of a batch. No kinds stand for the
 // standard list.
-func encodeBatch(seq uint64, question string, in law.Batch, from, to int, kinds []string) *encoded {
+func encodeBatch(memory mem.BufferPool, seq uint64, question string, in law.Batch, from, to int, kinds []string) *encoded {
 	size := 64 + len(question) + columnsSize(in.Columns)*(to-from)/max(in.Rows, 1) + 16*len(in.Columns)*2 + 8*len(in.Parameters)
 	for i := range in.Columns {
 		size += len(in.Columns[i].Name)
@@ -96,7 +96,7 @@ func encodeBatch(seq uint64, question string, in law.Batch, from, to int, kinds 
 	for _, k := range kinds {
 		size += 8 + len(k)
 	}
-	buffer := message(size)
+	buffer := message(memory, size)
 	b := appendUint(*buffer, batchSeq, seq)
 	b = appendString(b, batchQuestion, question)
 	b = appendUint(b, batchRows, uint64(to-from))
@@ -109,11 +109,11 @@ func encodeBatch(seq uint64, question string, in law.Batch, from, to int, kinds 
 	for _, k := range kinds {
 		b = appendString(b, batchKinds, k)
 	}
-	return finished(buffer, b)
+	return finished(memory, buffer, b)
 }
 
-func encodeResult(seq uint64, out law.Batch) *encoded {
-	buffer := message(64 + columnsSize(out.Columns) + 16*len(out.Columns))
+func encodeResult(memory mem.BufferPool, seq uint64, out law.Batch) *encoded {
+	buffer := message(memory, 64+columnsSize(out.Columns)+16*len(out.Columns))
 	b := appendUint(*buffer, resultSeq, seq)
 	b = appendUint(b, resultRows, uint64(out.Rows))
 	for i := range out.Columns {
@@ -123,14 +123,14 @@ func encodeResult(seq uint64, out law.Batch) *encoded {
 		c := &out.Columns[i]
 		b = appendColumn(b, resultColumns, c, 0, max(len(c.Values), len(c.Words)))
 	}
-	return finished(buffer, b)
+	return finished(memory, buffer, b)
 }
 
-func encodeError(seq uint64, reason string) *encoded {
-	buffer := message(64 + len(reason))
+func encodeError(memory mem.BufferPool, seq uint64, reason string) *encoded {
+	buffer := message(memory, 64+len(reason))
 	b := appendUint(*buffer, resultSeq, seq)
 	b = appendString(b, resultError, reason)
-	return finished(buffer, b)
+	return finished(memory, buffer, b)
 }
 
 func appendUint(b []byte, field protowire.Number, v uint64) []byte {

@@ -46,7 +46,7 @@ func TestBatchBytes(t *testing.T) {
 		in := law.Batch{Rows: rows, Parameters: parameters, Columns: []law.Column{
 			law.Numbers("mass", mass), law.Codes("kind", kind), law.Numbers("radius", radius),
 		}}
-		got := encodeBatch(seq, "heat", in, from, to, kinds)
+		got := encodeBatch(new(shelf), seq, "heat", in, from, to, kinds)
 		defer got.buffer.Free()
 		want, err := proto.MarshalOptions{Deterministic: true}.Marshal(&wire.Batch{
 			Seq: seq, Question: "heat", Rows: uint64(to - from), Parameters: parameters, Kinds: kinds,
@@ -79,7 +79,7 @@ func TestResultBytes(t *testing.T) {
 		rows := rapid.IntRange(0, 40).Draw(t, "rows")
 		mass := anyBits(rows).Draw(t, "mass")
 		composition := rapid.SliceOfN(rapid.Byte(), rows, rows).Draw(t, "composition")
-		got := encodeResult(7, law.Batch{Rows: rows, Columns: []law.Column{law.Codes("composition", composition), law.Numbers("mass", mass)}})
+		got := encodeResult(new(shelf), 7, law.Batch{Rows: rows, Columns: []law.Column{law.Codes("composition", composition), law.Numbers("mass", mass)}})
 		defer got.buffer.Free()
 		want, err := proto.MarshalOptions{Deterministic: true}.Marshal(&wire.Result{
 			Seq: 7, Rows: uint64(rows), Names: []string{"composition", "mass"}, Columns: [][]byte{composition, raw(mass)},
@@ -163,7 +163,7 @@ func TestCodec(t *testing.T) {
 	if err := c.Unmarshal(data, &card); err != nil || card.Name != "page" {
 		t.Fatal(card.Name, err)
 	}
-	batch := encodeBatch(1, "mass", law.Batch{Rows: 2000, Columns: []law.Column{law.Numbers("u", make([]float64, 2000))}}, 0, 2000, nil)
+	batch := encodeBatch(new(shelf), 1, "mass", law.Batch{Rows: 2000, Columns: []law.Column{law.Numbers("u", make([]float64, 2000))}}, 0, 2000, nil)
 	batch.kept = true
 	var first []byte
 	for range 2 {

@@ -111,7 +111,7 @@ func (s *server) converse(f *frame) {
 		}
 		seq, result, err := s.answer(message)
 		if err != nil {
-			result = encodeError(seq, err.Error())
+			result = encodeError(&s.memory, seq, err.Error())
 		}
 		err = f.write(result.buffer.ReadOnlyData())
 		result.buffer.Free()

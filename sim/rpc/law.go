@@ -21,10 +21,11 @@ type Law struct {
 	described []byte // the card as it came
 	runtime   string
 
-	slots chan struct{} // one for each call in flight
-	seq   atomic.Uint64
-	times durations
-	tried sync.Map // by question, the most rows of a batch that was asked again
+	slots  chan struct{} // one for each call in flight
+	seq    atomic.Uint64
+	times  durations
+	memory shelf    // of batches
+	tried  sync.Map // by question, the most rows of a batch that was asked again
 
 	mu       sync.Mutex // holds what follows
 	child    *child

@@ -68,6 +68,7 @@ type server struct {
 	open    sync.Once
 	socket  string
 	arenas  sync.Pool
+	memory  shelf
 }
 
 // service is what protoc would generate for law.proto, but that the messages
@@ -123,9 +124,9 @@ func (s *server) answer(message []byte) (uint64, *encoded, error) {
 	}
 	out, err := s.ask(question, in)
 	if err != nil {
-		return seq, encodeError(seq, err.Error()), nil
+		return seq, encodeError(&s.memory, seq, err.Error()), nil
 	}
-	return seq, encodeResult(seq, out), nil
+	return seq, encodeResult(&s.memory, seq, out), nil
 }
 
 // ask makes an error of a panic: a law that stumbles over one batch is not
