@@ -3,6 +3,7 @@ package scenarios_test
 import (
 	"io/fs"
 	"math"
+	"slices"
 	"strings"
 	"testing"
 	"testing/fstest"
@@ -64,28 +65,28 @@ func TestValid(t *testing.T) {
 	}
 }
 
-// Each head comment gives the question, the sources and the cost, in lines
-// that fit a page.
+// Each head comment gives the group, the question, what to look at, the sources
+// and the cost, in lines that fit a page.
 func TestHeads(t *testing.T) {
 	for _, file := range names(t) {
 		data, err := fs.ReadFile(scenarios.FS, file)
 		if err != nil {
 			t.Fatal(err)
 		}
-		head := ""
 		for _, line := range strings.Split(string(data), "\n") {
 			if utf8.RuneCountInString(line) > 100 {
 				t.Errorf("%s: a line of more than 100 columns: %s", file, line)
 			}
-			if !strings.HasPrefix(line, "#") {
-				break
-			}
-			head += line + "\n"
 		}
-		for _, part := range []string{"# Question: ", "# Sources: ", "# Cost: "} {
-			if !strings.Contains(head, part) {
-				t.Errorf("%s: no %q in the head comment", file, part)
-			}
+		head, err := scenarios.ReadHead(scenarios.FS, file)
+		if err != nil {
+			t.Fatal(err)
+		}
+		if head.Question == "" || head.LookAt == "" || head.Sources == "" || head.Cost == "" {
+			t.Errorf("%s: the head comment lacks a part: %+v", file, head)
+		}
+		if !slices.Contains(scenarios.Groups, head.Group) {
+			t.Errorf("%s: group %q is none of scenarios.Groups", file, head.Group)
 		}
 	}
 }

@@ -1,13 +1,13 @@
 package cli
 
 import (
-	"bufio"
-	"bytes"
-	"io/fs"
+	"fmt"
+	"slices"
 	"strings"
 
 	"github.com/spf13/cobra"
 
+	"wane/scenarios"
 	"wane/sim/scenario"
 )
 
@@ -15,15 +15,18 @@ import (
 type scenarioLine struct {
 	Name     string `json:"name"`
 	Title    string `json:"title"`
+	Group    string `json:"group"`
 	Question string `json:"question"`
+	LookAt   string `json:"look_at"`
 	Cost     string `json:"cost"`
 }
 
 func (p *Program) scenarios(s *settings) *cobra.Command {
 	return &cobra.Command{
-		Use:     "scenarios",
-		Short:   "List the scenarios that are built in",
-		Long:    "List the scenarios that are built in, the question each answers, and what it costs to run.",
+		Use:   "scenarios",
+		Short: "List the scenarios that are built in",
+		Long: "List the scenarios that are built in by the question they are about, what each asks, what to look at in its answer, " +
+			"and what it costs to run.",
 		Example: "  wane scenarios\n  wane run little-lamp",
 		Args:    cobra.NoArgs,
 		RunE: func(*cobra.Command, []string) error {
@@ -37,44 +40,35 @@ func (p *Program) scenarios(s *settings) *cobra.Command {
 				if err != nil {
 					return failed(err)
 				}
-				lines = append(lines, scenarioLine{name, sc.Title, sc.Question, cost(p.Embedded, name+".toml")})
+				head, err := scenarios.ReadHead(p.Embedded, name+".toml")
+				if err != nil {
+					return failed(err)
+				}
+				lines = append(lines, scenarioLine{name, sc.Title, head.Group, sc.Question, head.LookAt, head.Cost})
 			}
+			slices.SortStableFunc(lines, func(a, b scenarioLine) int {
+				return slices.Index(scenarios.Groups, a.Group) - slices.Index(scenarios.Groups, b.Group)
+			})
 			if s.json {
 				return printJSON(p.Out, lines)
 			}
-			for _, l := range lines {
-				field(p.Out, 0, 18, l.Name, l.Question)
-				if l.Cost != "" && !s.quiet {
-					field(p.Out, 0, 18, "", "cost: "+l.Cost)
+			for i, l := range lines {
+				if i > 0 && l.Group != lines[i-1].Group {
+					fmt.Fprintln(p.Out)
+				}
+				if i == 0 || l.Group != lines[i-1].Group {
+					fmt.Fprintln(p.Out, l.Group)
+				}
+				field(p.Out, 2, 22, l.Name, l.Question)
+				for _, more := range [2][2]string{{"look at: ", l.LookAt}, {"cost: ", l.Cost}} {
+					if more[1] != "" && !s.quiet {
+						field(p.Out, 2, 22, "", more[0]+more[1])
+					}
 				}
 			}
 			return nil
 		},
 	}
-}
-
-// cost is the paragraph of a scenario's head comment that begins with "cost:".
-func cost(fsys fs.FS, file string) string {
-	data, err := fs.ReadFile(fsys, file)
-	if err != nil {
-		return ""
-	}
-	var found []string
-	for lines := bufio.NewScanner(bytes.NewReader(data)); lines.Scan(); {
-		text, comment := strings.CutPrefix(lines.Text(), "#")
-		text = strings.TrimSpace(text)
-		switch {
-		case !comment:
-			return strings.Join(found, " ")
-		case len(text) >= 5 && strings.EqualFold(text[:5], "cost:"):
-			found = []string{strings.TrimSpace(text[5:])}
-		case len(found) > 0 && (text == "" || strings.Contains(text, ":") && !strings.Contains(strings.SplitN(text, ":", 2)[0], " ")):
-			return strings.Join(found, " ")
-		case len(found) > 0:
-			found = append(found, text)
-		}
-	}
-	return strings.Join(found, " ")
 }
 
 // completeScenario completes the names of embedded scenarios, and files.
