@@ -13,7 +13,8 @@ import (
 // and the populations.
 func (w *Workspace) conclude() (*Outcome, error) {
 	m := w.m
-	o := &Outcome{End: m.Until, StoppedAt: w.stoppedAt, EvaporationStarts: math.NaN(), Fired: map[string]int64{}}
+	o := &Outcome{End: m.Until, StoppedAt: w.stoppedAt, EvaporationStarts: math.NaN(), HeavyStarts: math.NaN(),
+		SkyFloor: math.NaN(), DarkEnergyDecays: never, Fired: map[string]int64{}}
 	if o.End < never {
 		o.EndCause = "until"
 	}
@@ -21,7 +22,11 @@ func (w *Workspace) conclude() (*Outcome, error) {
 		if end, cause := w.sky.End(); end < o.End {
 			o.End, o.EndCause = end, cause
 		}
-		o.EvaporationStarts = w.evaporationStarts()
+		o.EvaporationStarts, o.HeavyStarts = w.evaporationStarts(10), w.evaporationStarts(1e9)
+		o.SkyFloor = w.skyFloor()
+		if s, ok := w.sky.(interface{ Decays() float64 }); ok {
+			o.DarkEnergyDecays = s.Decays()
+		}
 	}
 	if err := w.endCentral(o.End); err != nil {
 		return nil, err
@@ -180,9 +185,9 @@ func (m *Model) lawOf(code uint8) string {
 	return m.Causes[code].Process
 }
 
-// evaporationStarts is the date from which a hole of ten solar masses is
+// evaporationStarts is the date from which a hole of a mass, in solar masses, is
 // warmer than the sky, by the run's own law.
-func (w *Workspace) evaporationStarts() float64 {
+func (w *Workspace) evaporationStarts(mass float64) float64 {
 	for _, u := range w.m.wearing {
 		if u.Card.Process != "evaporation" || !u.Card.Answers("heat") {
 			continue
@@ -190,10 +195,20 @@ func (w *Workspace) evaporationStarts() float64 {
 		r := newRows(1)
 		r.resize(1)
 		r.id[0], r.gen[0], r.kind[0], r.comp[0], r.place[0], r.origin[0] = 0, 0, law.BlackHole, law.Pure, law.Adrift, law.Founded
-		r.mass[0], r.birthMass[0], r.metals[0] = 10, 10, 0
+		r.mass[0], r.birthMass[0], r.metals[0] = mass, mass, 0
 		if s, err := w.ask.starts(u, r, nil, func(int) float64 { return -never }); err == nil && s != nil {
 			return s[0]
 		}
 	}
 	return math.NaN()
+}
+
+// skyFloor is log10 of the temperature that the sky keeps for ever. One that
+// falls as any power of the date is far below the last here by then.
+func (w *Workspace) skyFloor() float64 {
+	const late, coldest = 1e9, -1e6
+	if t := w.sky.LogTemperature(late); t > coldest {
+		return t
+	}
+	return math.Inf(-1)
 }

@@ -10,6 +10,14 @@ type Outcome struct {
 	// EvaporationStarts is the log10 date from which a hole of 10 solar
 	// masses is warmer than the sky; +Inf: never, NaN: no sky.
 	EvaporationStarts float64
+	// SkyFloor is log10 of the temperature, in K, below which the sky never
+	// falls; -Inf: there is none, NaN: no sky.
+	SkyFloor float64
+	// DarkEnergyDecays is the log10 date when dark energy begins to decay at one
+	// stroke; +Inf: it does not.
+	DarkEnergyDecays float64
+	// HeavyStarts is as EvaporationStarts, for a hole of 1e9 solar masses.
+	HeavyStarts float64
 	// StoppedAt is the log10 date at which the ejection law declared the
 	// galaxy over, NaN if it did not.
 	StoppedAt float64

@@ -39,6 +39,7 @@ func notes(outcomes []engine.Outcome, info *Info, populations []Population) []st
 		say("Beyond 10^(10^15) yr only the exponent means anything: half, hundredth and last are one number there (%s).",
 			strings.Join(far, ", "))
 	}
+	out = append(out, skyNotes(outcomes)...)
 	out = append(out, stopNotes(outcomes, populations)...)
 	if len(unsure) > 0 {
 		say("Some realisations ended before the last member went; in medians and ranges they count as later than any date (%s).",

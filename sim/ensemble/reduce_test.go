@@ -28,7 +28,7 @@ func dwarfs() Info {
 }
 
 func outcome(p ...engine.PopulationOutcome) engine.Outcome {
-	return engine.Outcome{Populations: p, End: inf, EvaporationStarts: nan, StoppedAt: nan}
+	return engine.Outcome{Populations: p, End: inf, EvaporationStarts: nan, HeavyStarts: nan, SkyFloor: nan, DarkEnergyDecays: inf, StoppedAt: nan}
 }
 
 func near(t *testing.T, what string, got, want float64) {
@@ -237,5 +237,38 @@ func TestConditionsInWords(t *testing.T) {
 	got = Words(galaxy.Condition{Warmth: &galaxy.Warmth{Quantity: "temperature", Above: true, Value: 2, Unit: "floor"}})
 	if got != "objects hotter than 2 times their own floor" {
 		t.Errorf("got %q", got)
+	}
+}
+
+// TestSkyNotes: what is said of the sky follows from what the realisations saw.
+func TestSkyNotes(t *testing.T) {
+	sky := func(floor, decays, heavy float64) engine.Outcome {
+		return engine.Outcome{End: inf, SkyFloor: floor, DarkEnergyDecays: decays, HeavyStarts: heavy}
+	}
+	ended := func(cause string, end float64) engine.Outcome {
+		return engine.Outcome{End: end, EndCause: cause, SkyFloor: -29.66, DarkEnergyDecays: inf, HeavyStarts: 11.83}
+	}
+	cold := math.Inf(-1)
+	for _, x := range []struct {
+		name     string
+		outcomes []engine.Outcome
+		want     []string
+	}{
+		{"floor", []engine.Outcome{sky(-29.655, inf, 11.83)}, []string{"The horizon keeps the sky at 10^-29.66 K for ever: nothing gets colder than that."}},
+		{"no floor", []engine.Outcome{sky(cold, inf, 35)}, []string{"Nothing keeps the sky warm: it cools without end, and so does all that has no heat of its own."}},
+		{"decays", []engine.Outcome{sky(cold, 11.2, 35), sky(cold, 11.9, 11.83), sky(-29.655, inf, 11.83)}, []string{
+			"Dark energy decays in 2 of 3 realisations at 10^11.55 yr (10^11.20 to 10^11.90): from then on no horizon keeps the sky warm.",
+			"Where it does so early in 1 of 2 realisations, a hole of 1e9 Msun evaporates only from 10^35.00 yr on: without dark energy the sky cools that slowly.",
+			"Where it does so late in 1 of 2 realisations, a hole of 1e9 Msun has begun to evaporate at 10^11.83 yr, before.",
+			"The horizon keeps the sky at 10^-29.66 K for ever in 1 of 3 realisations: nothing gets colder than that.",
+			"Nothing keeps the sky warm in 2 of 3 realisations: it cools without end, and so does all that has no heat of its own.",
+		}},
+		{"decays after the end", []engine.Outcome{{End: 10, EndCause: "rip", SkyFloor: cold, DarkEnergyDecays: 11, HeavyStarts: inf}}, []string{"Space is torn apart, at 10^10.00 yr."}},
+		{"vacuum", []engine.Outcome{ended("vacuum-decay", 524.2), ended("vacuum-decay", 524.8)}, []string{
+			"The vacuum decays, which ends everything, at 10^524.50 yr (10^524.20 to 10^524.80)."}},
+	} {
+		if got := skyNotes(x.outcomes); !slices.Equal(got, x.want) {
+			t.Errorf("%s:\n got  %q\n want %q", x.name, got, x.want)
+		}
 	}
 }
