@@ -29,9 +29,9 @@ import (
 // [law.Processes], the default of each process first.
 func Builtin() (*law.Registry, error) {
 	return law.NewRegistry(
-		expansion.LambdaCDM(),
-		vacuumdecay.None(),
-		darkenergydecay.None(),
+		expansion.LambdaCDM(), expansion.WCDM(), expansion.Phantom(), expansion.DecayingDarkEnergy(), expansion.MatterOnly(), expansion.Open(),
+		vacuumdecay.None(), vacuumdecay.FourVolume(), vacuumdecay.Literal(), vacuumdecay.Other(),
+		darkenergydecay.None(), darkenergydecay.Drawn(), darkenergydecay.Fixed(), darkenergydecay.Recollapse(),
 		massfunction.Kroupa(),
 		starformation.Exponential(),
 		metals.Solar(),

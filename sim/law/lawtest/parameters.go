@@ -25,9 +25,9 @@ func (k *kit) checkParameters() {
 	for i, p := range k.card.Parameters {
 		values := extremes(p)
 		switch {
+		case k.readByHost(p.Name) || k.bounds(p.Name):
 		case len(values) == 0:
 			k.doubt("parameter", "", "%s can only be %v", p.Name, p.Preset)
-		case k.readByHost(p.Name) || k.bounds(p.Name):
 		case !k.changes(p, values, before):
 			k.doubt("parameter", "", "parameter %d, %s, changes nothing between %s and %s",
 				i, p.Name, setting(p, values[0]), setting(p, values[len(values)-1]))
