@@ -7,6 +7,7 @@ import (
 	"wane/plugins/curvature"
 	"wane/plugins/darkenergydecay"
 	"wane/plugins/ejection"
+	"wane/plugins/encounter"
 	"wane/plugins/evaporation"
 	"wane/plugins/expansion"
 	"wane/plugins/infall"
@@ -45,6 +46,7 @@ func Builtin() (*law.Registry, error) {
 		warmth.DarkMatter(), warmth.None(),
 		ejection.Contracting(), ejection.Balanced(),
 		infall.Branching(),
+		encounter.Collisions(), encounter.None(),
 		orbitaldecay.Peters(),
 		nucleondecay.GrandUnified(), nucleondecay.Stable(),
 		evaporation.Page(), evaporation.BlackBody(),
@@ -72,6 +74,7 @@ func Defaults() map[string]string {
 		"warmth":               "dark-matter",
 		"ejection":             "contracting",
 		"infall":               "branching",
+		"encounter":            "collisions",
 		"orbital-decay":        "peters",
 		"nucleon-decay":        "grand-unified",
 		"evaporation":          "page",
