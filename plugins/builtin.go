@@ -48,7 +48,8 @@ func Builtin() (*law.Registry, error) {
 		infall.Branching(),
 		encounter.Collisions(), encounter.None(),
 		orbitaldecay.Peters(),
-		nucleondecay.GrandUnified(), nucleondecay.Stable(),
+		nucleondecay.GrandUnified(), nucleondecay.HigherDimension(), nucleondecay.VirtualHoles(),
+		nucleondecay.Sphaleron(), nucleondecay.Stable(),
 		evaporation.Page(), evaporation.BlackBody(),
 		curvature.None(),
 	)

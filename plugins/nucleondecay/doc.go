@@ -1,5 +1,6 @@
 // Package nucleondecay holds the laws of how nucleons decay, and with them
-// every body of ordinary matter.
+// every body of ordinary matter. The laws differ in the mean life of a
+// nucleon; what follows from it is the same for all.
 package nucleondecay
 
 import "wane/sim/law"

@@ -10,3 +10,9 @@ import (
 func TestKitGrandUnified(t *testing.T) { lawtest.Run(t, nucleondecay.GrandUnified()) }
 
 func TestKitStable(t *testing.T) { lawtest.Run(t, nucleondecay.Stable()) }
+
+func TestKitHigherDimension(t *testing.T) { lawtest.Run(t, nucleondecay.HigherDimension()) }
+
+func TestKitVirtualHoles(t *testing.T) { lawtest.Run(t, nucleondecay.VirtualHoles()) }
+
+func TestKitSphaleron(t *testing.T) { lawtest.Run(t, nucleondecay.Sphaleron()) }

@@ -93,19 +93,3 @@ func Temperature(power, r float64) float64 {
 	r *= 1e3
 	return math.Sqrt(math.Sqrt(power / (4 * math.Pi * r * r * constant.StefanBoltzmann)))
 }
-
-// Log10OperatorLife estimates the life of a nucleon that decays through an
-// operator of dimension n that is suppressed by the energy scale Lambda:
-//
-//	tau = hbar/(m_p c^2) (Lambda/m_p c^2)^(2(n-4))
-//
-// Shapes: scalar to scalar.
-// Units: log10Scale log10 of Lambda in GeV; result log10 of years.
-// Domain: n > 4. Error: a power of the coupling, some decades.
-//
-// Source: Adams & Laughlin 1997, section IV (dimensional estimate).
-func Log10OperatorLife(n, log10Scale float64) float64 {
-	const proton = constant.ProtonMass * constant.C * constant.C // J
-	gev := num.Log10(proton / constant.EV * 1e-9)
-	return num.Log10(constant.HBar/proton/constant.Year) + 2*(n-4)*(log10Scale-gev)
-}

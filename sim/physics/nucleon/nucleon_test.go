@@ -42,6 +42,10 @@ func TestPublished(t *testing.T) {
 			row.Check(t, Log10Wait(number("mass_Msun"), endMass(t, row), number("log10_tau_yr")))
 		case "log10-operator":
 			row.Check(t, Log10OperatorLife(number("dimension"), number("log10_scale_GeV")))
+		case "log10-virtual-hole":
+			row.Check(t, Log10VirtualHoleLife(number("power")))
+		case "log10-tunnel":
+			row.Check(t, Log10TunnelLife(number("inverse_coupling")))
 		default:
 			t.Errorf("%s: unknown quantity %q", row.Where(), q)
 		}
