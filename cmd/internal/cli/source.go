@@ -73,13 +73,18 @@ func (l *loaded) of(process string) *Outside {
 // laws that it or the command line gives by their paths, and prints its
 // warnings. With trust, a scenario file may start what it likes.
 func (p *Program) load(ctx context.Context, s *settings, which string, o scenario.Overrides, trust bool) (*loaded, error) {
-	registry, err := p.Builtin()
-	if err != nil {
-		return nil, failed(err)
-	}
 	fsys, file, err := p.source(which)
 	if err != nil {
 		return nil, bad(err)
+	}
+	return p.loadFrom(ctx, s, fsys, file, o, trust)
+}
+
+// loadFrom is load of a file that is found.
+func (p *Program) loadFrom(ctx context.Context, s *settings, fsys fs.FS, file string, o scenario.Overrides, trust bool) (*loaded, error) {
+	registry, err := p.Builtin()
+	if err != nil {
+		return nil, failed(err)
 	}
 	l := &loaded{registry: registry}
 	l.outside, o.Outside = p.openGiven(ctx, s, scenario.Paths(fsys, file, o), trust)

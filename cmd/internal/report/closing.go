@@ -27,14 +27,14 @@ func (p *page) closing(s *ensemble.Summary) {
 	p.paragraph(ledger(s))
 	if len(s.Inactive) > 0 {
 		p.line("")
-		p.line(p.style.heading("Inactive"))
+		p.line(p.style.Heading("Inactive"))
 		for _, x := range s.Inactive {
 			p.remarks([]string{x.Process + "/" + x.Law + ": " + x.Why})
 		}
 	}
 	if len(s.Laws) > 0 {
 		p.line("")
-		p.line(p.style.heading("Laws"))
+		p.line(p.style.Heading("Laws"))
 		names := make([]string, len(s.Laws))
 		for i, l := range s.Laws {
 			names[i] = l.Process + "/" + l.Name
@@ -55,7 +55,7 @@ func (p *page) outside(s *ensemble.Summary) {
 		}
 		if !head {
 			p.line("")
-			p.line(p.style.heading("Laws outside the program"))
+			p.line(p.style.Heading("Laws outside the program"))
 			head = true
 		}
 		p.remarks([]string{l.Process + "/" + l.Name + ", version " + l.Version + ": " + l.Path + ", " + l.Digest})

@@ -52,7 +52,7 @@ func (p *page) populations(s *ensemble.Summary) {
 		p.stacked(head, rows)
 		return
 	}
-	p.line(p.style.heading(strings.TrimRight(join(head, widths), " ")))
+	p.line(p.style.Heading(strings.TrimRight(join(head, widths), " ")))
 	for _, r := range rows {
 		if columns(r.cells[0][0]) > longestName {
 			p.line(r.cells[0][0])
@@ -82,7 +82,7 @@ func join(cells [5]string, widths [5]int) string {
 // mark.
 func (p *page) stacked(head [5]string, rows []row) {
 	for _, r := range rows {
-		p.line(p.style.heading(r.cells[0][0]))
+		p.line(p.style.Heading(r.cells[0][0]))
 		for i := 1; i < len(head); i++ {
 			if r.cells[0][i] == "" {
 				continue

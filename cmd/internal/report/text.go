@@ -18,7 +18,8 @@ type Style struct {
 	Bold bool // headings in bold, by terminal escapes
 }
 
-func (s Style) heading(text string) string {
+// Heading dresses a heading.
+func (s Style) Heading(text string) string {
 	if !s.Bold {
 		return text
 	}
@@ -63,7 +64,7 @@ func (p *page) header(s *ensemble.Summary) {
 	if s.Scenario != "" {
 		title = s.Scenario + ": how the populations of this galaxy fade"
 	}
-	p.line(p.style.heading(title))
+	p.line(p.style.Heading(title))
 	p.line("")
 	if s.Interrupted {
 		p.entry("INTERRUPTED", fmt.Sprintf("%d of %d realisations were finished; all that follows is of these alone",
