@@ -11,6 +11,7 @@ import (
 	"wane/plugins/evaporation"
 	"wane/plugins/expansion"
 	"wane/plugins/infall"
+	"wane/plugins/iron"
 	"wane/plugins/lifetime"
 	"wane/plugins/massfunction"
 	"wane/plugins/metals"
@@ -20,6 +21,8 @@ import (
 	"wane/plugins/remnant"
 	"wane/plugins/starformation"
 	"wane/plugins/substellarlimit"
+	"wane/plugins/supernova"
+	"wane/plugins/tunnelling"
 	"wane/plugins/vacuumdecay"
 	"wane/plugins/warmth"
 	"wane/plugins/whitedwarfcooling"
@@ -33,7 +36,7 @@ func Builtin() (*law.Registry, error) {
 		expansion.LambdaCDM(), expansion.WCDM(), expansion.Phantom(), expansion.DecayingDarkEnergy(), expansion.MatterOnly(), expansion.Open(),
 		vacuumdecay.None(), vacuumdecay.FourVolume(), vacuumdecay.Literal(), vacuumdecay.Other(),
 		darkenergydecay.None(), darkenergydecay.Drawn(), darkenergydecay.Fixed(), darkenergydecay.Recollapse(),
-		massfunction.Kroupa(),
+		massfunction.Kroupa(), massfunction.Salpeter(), massfunction.Chabrier(), massfunction.ChabrierSystem(),
 		starformation.Exponential(),
 		metals.Solar(),
 		substellarlimit.Fixed(),
@@ -52,6 +55,9 @@ func Builtin() (*law.Registry, error) {
 		nucleondecay.Sphaleron(), nucleondecay.Stable(),
 		evaporation.Page(), evaporation.BlackBody(),
 		curvature.None(),
+		supernova.Anchored(), supernova.ZeroTemperatureLattice(), supernova.None(),
+		iron.Dyson(), iron.None(),
+		tunnelling.WholeStar(), tunnelling.PlanckSpeck(), tunnelling.None(),
 	)
 }
 
@@ -80,5 +86,8 @@ func Defaults() map[string]string {
 		"nucleon-decay":        "grand-unified",
 		"evaporation":          "page",
 		"curvature":            "none",
+		"supernova":            "anchored",
+		"iron":                 "dyson",
+		"tunnelling":           "whole-star",
 	}
 }

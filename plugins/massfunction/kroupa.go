@@ -54,9 +54,5 @@ func (kroupa) Answer(question string, in law.Batch) (law.Batch, error) {
 	if err != nil {
 		return law.Batch{}, fmt.Errorf("massfunction: %w", err)
 	}
-	u, mass := in.Values("u"), in.NewValues()
-	for i := range mass {
-		mass[i] = f.Quantile(u[i])
-	}
-	return in.Answer(law.Numbers("mass", mass)), nil
+	return masses(in, f), nil
 }

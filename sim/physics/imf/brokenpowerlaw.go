@@ -94,7 +94,12 @@ func (b BrokenPowerLaw) Quantile(u float64) float64 {
 		i++
 	}
 	s := b.segments[i]
-	w := (u - s.below) / s.share
+	return s.quantile((u - s.below) / s.share)
+}
+
+// quantile is the mass below which the fraction w of the segment's own objects
+// is born; outside 0 .. 1 the nearer end.
+func (s segment) quantile(w float64) float64 {
 	if !(w > 0) {
 		return s.low
 	}
