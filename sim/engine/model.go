@@ -49,6 +49,8 @@ type Model struct {
 	exposing                        []exposer
 	diverts                         []diverter
 	wearing, turning                []*law.Use
+	soonest                         []float64    // by turning law: log10 of its shortest wait, -Inf if unknown
+	turns                           [256]float64 // by kind: the shortest of those that speak for it, +Inf: none does
 	encounter                       *law.Use
 	cooling                         []*law.Use
 	warm                            *law.Use
@@ -138,6 +140,7 @@ func Compile(s Setup) (*Model, error) {
 	m.compileBatch()
 	m.compileCauses()
 	m.compileSimple()
+	m.compileTurning()
 	m.compileVoices()
 	return m, errors.Join(m.compileClocks(), m.compileThresholds(), m.compilePopulations())
 }

@@ -28,8 +28,8 @@ func (a *asker) prospects(r *rows, since func(int) float64) ([]prospect, error) 
 	if err := a.worn(r, since); err != nil {
 		return nil, err
 	}
-	for _, u := range a.m.turning {
-		if err := a.turned(u, r, since); err != nil {
+	for t, u := range a.m.turning {
+		if err := a.turned(t, u, r, since); err != nil {
 			return nil, err
 		}
 	}
@@ -181,9 +181,27 @@ func (a *asker) above(w int, r, s *rows, pick []int32, cross func(row int, t *th
 	return a.rest, a.pick3
 }
 
-// turned offers each row what a turning law foretells.
-func (a *asker) turned(u *law.Use, r *rows, since func(int) float64) error {
+// stillThere leaves out of the spoken rows s of r those that are gone before
+// turning law t may act.
+func (a *asker) stillThere(t int, r, s *rows, pick []int32) (*rows, []int32) {
+	soonest := a.m.soonest[t]
+	a.pick3 = a.pick3[:0]
+	for i := range s.n {
+		if j := at(pick, i); a.offers[j].date > soonest {
+			a.pick3 = append(a.pick3, int32(j))
+		}
+	}
+	if len(a.pick3) == s.n {
+		return s, pick
+	}
+	a.rest.gather(r, a.pick3, hasAll)
+	return a.rest, a.pick3
+}
+
+// turned offers each row what turning law t foretells.
+func (a *asker) turned(t int, u *law.Use, r *rows, since func(int) float64) error {
 	s, pick := a.spoken(u, r)
+	s, pick = a.stillThere(t, r, s, pick)
 	if s.n == 0 {
 		return nil
 	}

@@ -63,7 +63,7 @@ func (a *asker) lotOf(kind uint8, mass []float64, decades int, metal float64, bo
 			l.untold = true
 		}
 	}
-	if err != nil || l.untold {
+	if err != nil || l.untold || !(l.latest <= a.m.turns[kind]) { // turning may come first
 		return lot{untold: true, expected: never, latest: never}
 	}
 	return l

@@ -3,11 +3,12 @@ package engine
 import "wane/sim/law"
 
 // simpleEnds tells whether every prospect comes from one wearing law with a
-// foretell: no turning, and no two laws wear one kind.
+// foretell: no two laws wear one kind. Turning laws are then asked only about
+// what wearing leaves them.
 func (m *Model) simpleEnds() bool { return m.simple }
 
 func (m *Model) compileSimple() {
-	m.simple = len(m.turning) == 0
+	m.simple = true
 	for k := range m.wornBy {
 		m.wornBy[k] = -1
 	}
@@ -17,6 +18,25 @@ func (m *Model) compileSimple() {
 				m.simple = m.simple && m.wornBy[k] < 0 && u.Card.Answers("foretell")
 				m.wornBy[k] = int8(w)
 				m.wornInPart = m.wornInPart || !all
+			}
+		}
+	}
+}
+
+// compileTurning finds out how soon turning may come at all.
+func (m *Model) compileTurning() {
+	for k := range m.turns {
+		m.turns[k] = never
+	}
+	for _, u := range m.turning {
+		soonest := -never
+		if d, ok := u.Law.(law.Distant); ok {
+			soonest = d.Soonest()
+		}
+		m.soonest = append(m.soonest, soonest)
+		for k := range m.Set.Kinds {
+			if any, _ := u.SpeaksForKind(uint8(k)); any {
+				m.turns[k] = min(m.turns[k], soonest)
 			}
 		}
 	}
@@ -114,10 +134,54 @@ func (a *asker) simpleProspects(c *columns, r *rows, since func(int) float64) er
 			}
 		}
 	}
-	if len(a.linked) == 0 {
-		return nil
+	if err := a.simpleTurns(c, r, since); err != nil || len(a.linked) == 0 {
+		return err
 	}
 	few := newRows(len(a.linked))
 	few.gather(r, a.linked, hasAll)
 	return a.chains(few, append([]prospect(nil), a.links...), func(i int) uint32 { return few.id[i] }, c)
+}
+
+// simpleTurns asks turning laws about the rows that wearing has not ended
+// before any of them may act, and puts what comes first in its place.
+func (a *asker) simpleTurns(c *columns, r *rows, since func(int) float64) error {
+	if len(a.m.turning) == 0 {
+		return nil
+	}
+	first := int(r.first)
+	end, ended := c.end[first:first+r.n], c.ended[first:first+r.n]
+	var late []int32
+	for i, k := range r.kind[:r.n] {
+		if end[i] > a.m.turns[k] {
+			late = append(late, int32(i))
+		}
+	}
+	if len(late) == 0 {
+		return nil
+	}
+	left := newRows(len(late))
+	left.gather(r, late, hasAll)
+	ps, err := a.prospects(left, func(i int) float64 { return since(int(late[i])) })
+	if err != nil {
+		return err
+	}
+	// What wearing has in store for the others stays.
+	kept := 0
+	for i, j := range a.linked {
+		if end[j] > a.m.turns[r.kind[j]] {
+			continue
+		}
+		a.linked[kept], a.links[kept] = j, a.links[i]
+		kept++
+	}
+	a.linked, a.links = a.linked[:kept], a.links[:kept]
+	for i, p := range ps {
+		j := late[i]
+		end[j], ended[j] = p.date, p.cause
+		c.noteGas(left.id[i], 0, p)
+		if p.cause != 0 && p.kind != law.NoWord {
+			a.linked, a.links = append(a.linked, j), append(a.links, p)
+		}
+	}
+	return nil
 }

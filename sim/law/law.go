@@ -20,6 +20,14 @@ type Batcher interface {
 	Rows() int
 }
 
+// Distant is a turning law whose waits are all long, whatever the object and
+// the parameters: the host need not ask it about what is gone before.
+type Distant interface {
+	Law
+	// Soonest is log10 of years: no wait that the law foretells is shorter.
+	Soonest() float64
+}
+
 // Outside is what a law tells besides when it is not part of the program. Its
 // faults are then reported with both.
 type Outside interface {

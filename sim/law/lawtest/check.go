@@ -207,7 +207,15 @@ func (k *kit) ask(question string, in law.Batch) (out law.Batch, err error) {
 			err = fmt.Errorf("panic: %v", r)
 		}
 	}()
-	return k.use.Ask(question, in)
+	out, err = k.use.Ask(question, in)
+	if d, ok := k.law.(law.Distant); ok && err == nil && question == "foretell" {
+		for i, wait := range out.Values("wait") {
+			if !(wait >= d.Soonest()) {
+				return out, fmt.Errorf("row %d (%s): a wait of 10^%v yr, and no wait is shorter than 10^%v yr, the law says", i, in.Object(i), wait, d.Soonest())
+			}
+		}
+	}
+	return out, err
 }
 
 // direct asks the law itself, so that a batch of no rows arrives too.
