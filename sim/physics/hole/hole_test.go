@@ -121,10 +121,40 @@ func TestPublished(t *testing.T) {
 			row.Check(t, Log10Lifetime(mass(), alpha(set)))
 		case "lifetime":
 			row.Check(t, math.Pow(10, Log10Lifetime(mass(), alpha(set)))*constant.Year)
+		case "lifetime-years":
+			row.Check(t, math.Pow(10, Log10Lifetime(mass(), alpha(set))))
+		case "entropy":
+			row.Check(t, Log10Entropy(mass()))
+		case "absorbed-power":
+			row.Check(t, AbsorbedPower(mass(), today))
+		case "absorbed-mass":
+			row.Check(t, AbsorbedPower(mass(), today)/(constant.C*constant.C))
+		case "absorbed-part":
+			row.Check(t, AbsorbedPower(mass(), today)*absorbingSeconds()/(mass()*constant.Sun*constant.C*constant.C))
+		case "absorbed-over-emitted":
+			emitted := math.Pow(10, Log10LossRate(mass(), alpha("photons-gravitons"))) * constant.Sun * constant.C * constant.C / constant.Year
+			row.Check(t, AbsorbedPower(mass(), Temperature(mass()))/emitted)
 		default:
 			t.Errorf("%s: unknown quantity %q", row.Where(), q)
 		}
 	}
+}
+
+// today is the temperature of the relic sky, K (Fixsen 2009).
+const today = 2.7255
+
+// absorbingSeconds is for how long the sky of today would have to last to give
+// a hole what it takes in from now on: the integral of (T/today)^4 dt = a^-4
+// da/(a H), with H0 = 67.66 km/s/Mpc and a share of matter of 0.3111 (Planck
+// Collaboration 2018), in steps of ln a.
+func absorbingSeconds() float64 {
+	const h0, matter, steps, most = 67.66e3 / 3.0856775814913673e22, 0.3111, 4000, 12.0
+	sum := 0.0
+	for i := range steps {
+		x := (float64(i) + 0.5) * most / steps // ln a
+		sum += math.Exp(-4*x) / (h0 * math.Sqrt(matter*math.Exp(-3*x)+1-matter)) * most / steps
+	}
+	return sum
 }
 
 // TestMasslessSetLivesByClosedForm holds the integral to the closed form.

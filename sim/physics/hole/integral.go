@@ -26,35 +26,44 @@ const (
 )
 
 // Log10Lifetime returns how long a hole of mass m lasts while species join as
-// it heats up.
+// it heats up: [Emission.Log10Wait] to mass 0.
+func (e *Emission) Log10Lifetime(m float64) float64 { return e.Log10Wait(m, 0) }
+
+// Log10Wait returns how long a hole takes from mass m to mass end while species
+// join as it heats up.
 //
-//	t = G^2/(hbar c^4) int_0^m x^2 dx / alpha(x)
+//	t = G^2/(hbar c^4) int_end^m x^2 dx / alpha(x)
 //
 // Shapes: scalar to scalar.
-// Units: m in solar masses; result log10 of years.
-// Domain: m > 0; -Inf for m <= 0, +Inf when nothing is ever emitted.
+// Units: masses in solar masses; result log10 of years.
+// Domain: m > end >= 0; -Inf for m <= end, +Inf when nothing is ever emitted.
 // Error: of the quadrature, below 1e-11 relative (measured against mpmath
 // from 1e-25 to 1e12 Msun); of alpha, see [Emission.Alpha]. For a
 // hole above 1e6 times the mass at which the first massive particle joins,
 // late switches change the life by under 1e-17, and the closed form is used.
 //
 // Source: Page 1976, integrated over the life.
-func (e *Emission) Log10Lifetime(m float64) float64 {
+func (e *Emission) Log10Wait(m, end float64) float64 {
 	switch {
-	case !(m > 0):
+	case !(m > end):
 		return math.Inf(-1)
 	case len(e.alpha) == 0, e.always > 0 && m > cold*e.heaviest:
-		return Log10Lifetime(m, e.always)
+		return Log10Wait(m, end, e.always)
 	}
-	// With x = m e^-y the integral is m^3 int_0^inf e^-3y / alpha(m e^-y) dy.
-	sum := 0.0
-	for p := range panels {
-		middle := (float64(p) + 0.5) * panel
+	// With x = m e^-y the integral is m^3 int_0^span e^-3y / alpha(m e^-y) dy.
+	span := float64(panel * panels)
+	if end > 0 {
+		span = math.Min(span, logRatio(m, end))
+	}
+	pieces := math.Ceil(span / panel)
+	width, sum := span/pieces, 0.0
+	for p := range int(pieces) {
+		middle := (float64(p) + 0.5) * width
 		for _, node := range legendre {
 			for _, side := range [2]float64{-1, 1} {
-				y := middle + side*node[0]*panel/2
+				y := middle + side*node[0]*width/2
 				if a := e.Alpha(m * num.Exp(-y)); a > 0 {
-					sum += node[1] * panel / 2 * num.Exp(-3*y) / a
+					sum += node[1] * width / 2 * num.Exp(-3*y) / a
 				} else {
 					return math.Inf(1)
 				}

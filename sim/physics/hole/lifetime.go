@@ -44,12 +44,33 @@ func Log10LossRate(m, alpha float64) float64 {
 //
 // Source: Page 1976; with [BlackBodyAlpha] 5120 pi G^2 m^3/(hbar c^4).
 // Checked by testdata/published/holes.csv.
-func Log10Lifetime(m, alpha float64) float64 {
+func Log10Lifetime(m, alpha float64) float64 { return Log10Wait(m, 0, alpha) }
+
+// Log10Wait returns how long a hole that emits with the same alpha all the
+// while takes from mass m to mass end.
+//
+//	t = G^2 (m^3 - end^3) / (3 alpha hbar c^4)
+//
+// Units, domain, error and source as for [Log10Lifetime]; -Inf for m <= end.
+func Log10Wait(m, end, alpha float64) float64 {
 	switch {
-	case !(m > 0):
+	case !(m > end):
 		return math.Inf(-1)
 	case !(alpha > 0):
 		return math.Inf(1)
 	}
-	return 3*num.Log10(m) - num.Log10(3*alpha*lossUnit)
+	whole := 3*num.Log10(m) - num.Log10(3*alpha*lossUnit)
+	if !(end > 0) {
+		return whole
+	}
+	return whole + num.Log10(-num.Expm1(-3*logRatio(m, end)))
+}
+
+// logRatio is ln(m/end), good to the last digits where the two are close and
+// finite where their ratio is not.
+func logRatio(m, end float64) float64 {
+	if r := (m - end) / end; r < 1 {
+		return num.Log1p(r)
+	}
+	return num.Log(m) - num.Log(end)
 }
