@@ -37,7 +37,7 @@ func Builtin() (*law.Registry, error) {
 		vacuumdecay.None(), vacuumdecay.FourVolume(), vacuumdecay.Literal(), vacuumdecay.Other(),
 		darkenergydecay.None(), darkenergydecay.Drawn(), darkenergydecay.Fixed(), darkenergydecay.Recollapse(),
 		massfunction.Kroupa(), massfunction.Salpeter(), massfunction.Chabrier(), massfunction.ChabrierSystem(),
-		starformation.Exponential(),
+		starformation.Exponential(), starformation.GasLimited(), starformation.EndsAt(), starformation.Burst(),
 		metals.Solar(),
 		substellarlimit.Fixed(),
 		lifetime.Table(),

@@ -24,7 +24,7 @@ func (chabrierSystem) Describe() law.Card {
 		Notes: []string{
 			"Coefficients are quoted from memory.",
 			"A pair then lives, dies and is thrown out as one star of the pair's light (assumption): good where companions stay together, as in a hard binary.",
-			"The two parts as printed meet at 1 solMass to 0.3 % only, and are left so.",
+			"The two parts as printed meet at 1 solMass to 0.2 % only, and are left so.",
 			chabrierStep,
 			"The same for all metals and dates (assumption).",
 		},

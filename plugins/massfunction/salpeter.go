@@ -26,7 +26,7 @@ func (salpeter) Describe() law.Card {
 		Summary: "Salpeter's single power law: ever more light stars down to the lower limit, and no brown dwarfs",
 		Formula: "dN/dm ~ m^-2.35; mass = the exact quantile of u, [low^(1-slope) + u (high^(1-slope) - low^(1-slope))]^(1/(1-slope))",
 		Domain: "0.1 .. 120 solMass; mean 0.353, median 0.167 solMass. Measured from 0.4 to 10 solMass; " +
-			"below 0.5 real stars are fewer than this by a factor that grows to three at 0.1",
+			"below 0.5 real stars are fewer than this by a factor that grows to five at 0.1",
 		Sources: []string{source},
 		Notes: []string{
 			"Everything hangs on the lower limit: with 0.1 solMass there are no brown dwarfs, with 0.01 the median object has 0.017 solMass.",

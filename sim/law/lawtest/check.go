@@ -192,10 +192,17 @@ func (k *kit) inUse(change map[string]float64) (*law.Use, *law.Set) {
 	return u, set
 }
 
-// with is the kit for the same law with one parameter changed.
+// with is the kit for the same law with one parameter more changed.
 func (k *kit) with(parameter string, value float64) *kit {
+	change := map[string]float64{}
+	for i, p := range k.card.Parameters {
+		if now := k.use.Parameters[i]; now != p.Preset {
+			change[p.Name] = now
+		}
+	}
+	change[parameter] = value
 	other := *k
-	other.use, other.set = k.inUse(map[string]float64{parameter: value})
+	other.use, other.set = k.inUse(change)
 	return &other
 }
 

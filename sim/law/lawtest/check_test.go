@@ -29,6 +29,16 @@ func TestFaultlessLawsPass(t *testing.T) {
 	}
 }
 
+// A parameter that works only once another is off its preset is no idle one.
+func TestParameterBesideAnother(t *testing.T) {
+	l := births()
+	l.card.Parameters = append(l.card.Parameters, number("more", 0, 0, 1), number("steepness", 1, 2, 3))
+	l.answer = onlyNumbers("mass", []string{"u"}, func(p, x []float64) float64 {
+		return p[0] * num.Exp(7*x[0]+p[1]*num.Pow(x[0], p[2]))
+	})
+	Run(t, l)
+}
+
 // changed spoils every number of an answer column.
 func changed(column string, f func(in law.Batch, row int, v float64) float64) func(string, law.Batch, law.Batch) law.Batch {
 	return func(_ string, in, out law.Batch) law.Batch {

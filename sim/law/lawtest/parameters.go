@@ -19,7 +19,8 @@ func setting(p law.Parameter, v float64) string {
 }
 
 // checkParameters finds parameters that change nothing: no answer, no
-// threshold, no range of this law or of one that runs beside it.
+// threshold, no range of this law or of one that runs beside it, neither at the
+// presets of the others nor with one of them at an end of its range.
 func (k *kit) checkParameters() {
 	before := k.probe(nil)
 	for i, p := range k.card.Parameters {
@@ -28,11 +29,28 @@ func (k *kit) checkParameters() {
 		case k.readByHost(p.Name) || k.bounds(p.Name):
 		case len(values) == 0:
 			k.doubt("parameter", "", "%s can only be %v", p.Name, p.Preset)
-		case !k.changes(p, values, before):
+		case !k.changes(p, values, before) && !k.changesBesideAnother(p, values):
 			k.doubt("parameter", "", "parameter %d, %s, changes nothing between %s and %s",
 				i, p.Name, setting(p, values[0]), setting(p, values[len(values)-1]))
 		}
 	}
+}
+
+// changesBesideAnother tells whether a parameter changes something once another
+// is not at its preset, as the time of an infall does once there is one.
+func (k *kit) changesBesideAnother(p law.Parameter, values []float64) bool {
+	for _, another := range k.card.Parameters {
+		if another.Name == p.Name {
+			continue
+		}
+		for _, v := range extremes(another) {
+			beside := k.with(another.Name, v)
+			if beside.changes(p, values, beside.probe(nil)) {
+				return true
+			}
+		}
+	}
+	return false
 }
 
 func (k *kit) changes(p law.Parameter, values []float64, before []probe) bool {
