@@ -21,7 +21,7 @@ func inactive(outcomes []engine.Outcome, info *Info) []Inactive {
 		switch {
 		case slices.Contains(info.Idle, l.Process) || l.Name == "none":
 			out = append(out, Inactive{l.Process, l.Name, "it is switched off"})
-		case len(outcomes) == 0 || fired(outcomes, l.Process):
+		case len(outcomes) == 0 || fired(outcomes, l.Process) || process.Role == law.Ending && came(outcomes, l.Process):
 		case process.Role == law.TwoBody:
 			out = append(out, Inactive{l.Process, l.Name, "it speaks of pairs, and a run follows objects one by one"})
 		case why != "":
@@ -54,6 +54,18 @@ func generalReason(r law.Role) string {
 func fired(outcomes []engine.Outcome, process string) bool {
 	for i := range outcomes {
 		if outcomes[i].Fired[process] > 0 {
+			return true
+		}
+	}
+	return false
+}
+
+// came tells whether an ending came in any realisation: it ended everything,
+// or dark energy decayed.
+func came(outcomes []engine.Outcome, process string) bool {
+	for i := range outcomes {
+		o := &outcomes[i]
+		if o.EndCause == process || process == "dark-energy-decay" && o.DarkEnergyDecays < o.End {
 			return true
 		}
 	}

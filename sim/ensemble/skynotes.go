@@ -62,6 +62,8 @@ func skyNotes(outcomes []engine.Outcome) []string {
 			what = "Space is torn apart"
 		case "vacuum-decay":
 			what = "The vacuum decays, which ends everything"
+		case "dark-energy-decay":
+			what = "Dark energy decays, which ends everything"
 		}
 		say("%s%s, at %s.", what, of(len(ends[cause]), n), dates(ends[cause]))
 	}

@@ -13,20 +13,20 @@ import (
 	"wane/sim/sky"
 )
 
-// reference runs testdata/background.py under the system's Python, where
-// Debian puts Astropy.
-func reference(t *testing.T) [][]string {
+// reference runs a script of testdata under the system's Python, where Debian
+// puts Astropy.
+func reference(t *testing.T, script string) [][]string {
 	t.Helper()
 	python := "/usr/bin/python3"
 	if _, err := os.Stat(python); err != nil {
 		python = "python3"
 	}
 	var fault strings.Builder
-	cmd := exec.Command(python, "testdata/background.py")
+	cmd := exec.Command(python, "testdata/"+script)
 	cmd.Stderr = &fault
 	out, err := cmd.Output()
 	if err != nil {
-		said := fmt.Sprintf("%s testdata/background.py: %v\n%s", python, err, fault.String())
+		said := fmt.Sprintf("%s testdata/%s: %v\n%s", python, script, err, fault.String())
 		missing := strings.Contains(said, "ModuleNotFoundError") || strings.Contains(said, "executable file not found")
 		if missing && os.Getenv("WANE_REQUIRE") == "" {
 			t.Skip("needs python3-astropy and python3-scipy: " + said)
@@ -44,7 +44,7 @@ func reference(t *testing.T) [][]string {
 // with Astropy and SciPy, from a = 1/400 to a = 3000. The dates fall anywhere
 // between the nodes of the tables, so this also bounds the interpolation.
 func TestAstropy(t *testing.T) {
-	rows := reference(t)
+	rows := reference(t, "background.py")
 	if len(rows) != 96 {
 		t.Fatalf("%d rows, want 96", len(rows))
 	}

@@ -22,6 +22,10 @@
 //	V4 = 4 pi/3 K3,  K_j = a^(j-3) int a'^3 (eta - eta')^j dt',  eta = int dt/a
 //	dK0/dt = 1 - 3 H K0,  dK1/dt = K0 - 2 H K1,  dK2/dt = 2 K1 - H K2,  dK3/dt = 3 K2
 //
+// In curved space, with k = Ok H0^2, the powers of y = eta - eta' are those of
+// a ball there: S = sinh(sqrt k y)/sqrt k and C = cosh(sqrt k y) make y^2 into
+// S^2, y into S C, y^3 into 3 int S^2 dy, and dK1/dt gains 2 (k/a^2) K2.
+//
 // Assumptions: the horizon's temperature is hbar H/(2 pi k) while space
 // accelerates (0 <= eps < 1), and zero otherwise; it adds to the relic
 // radiation as the fourth power. The relic radiation stays a black body.

@@ -30,11 +30,14 @@ func (m *march) end(s float64, r rates, g, logK3, logEta float64) (bool, error) 
 	}
 	next.logK[3] = logK3
 	next.still = r.ps < resting
+	if r.curvature > 1-alone {
+		next.bent = 1
+	}
 	switch {
 	case next.still && -r.logH-s < longRest:
 		return false, nil
 	case !next.still && eps >= 0:
-		_, _, c2 := powers(eps)
+		_, _, c2 := powers(eps, next.bent)
 		if math.Abs(next.logK[2]+3*r.logH-num.Log10(c2)) > settled {
 			return false, nil
 		}

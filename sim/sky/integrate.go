@@ -52,7 +52,7 @@ func (e *expansion) bigBang() start {
 	}
 	st := start{origin: zero, unit: zero, x: firstLnA, s: num.Log10(t) - e.logH0}
 	eps := 0.5 * (3*om*a + 4*or) / (om*a + or)
-	c0, c1, c2 := powers(eps)
+	c0, c1, c2 := powers(eps, 0)
 	logH := num.Log10(h) + e.logH0
 	st.logK = [4]float64{num.Log10(c0) - logH, num.Log10(c1) - 2*logH, num.Log10(c2) - 3*logH, num.Log10(3*c2/(4*eps)) - 4*logH}
 	st.logEta = num.Log10(2*a/(math.Sqrt(om*a+or)+math.Sqrt(or))) - e.logH0
@@ -97,7 +97,7 @@ func (m *march) equations(s float64, y [4]float64, found density) rates {
 	r := rates{density: found, ps: num.Exp10(found.logH + s), sigma: num.Exp10(s - num.Add10(m.unit, s))}
 	r.d[0] = r.ps
 	r.d[1] = r.sigma*(1-y[1]) - 3*r.ps*y[1]
-	r.d[2] = r.sigma*(y[1]-2*y[2]) - 2*r.ps*y[2]
+	r.d[2] = r.sigma*(y[1]-2*y[2]) - 2*r.ps*y[2] + 2*r.curvature*r.ps*r.ps/r.sigma*y[3]
 	r.d[3] = r.sigma*(2*y[2]-3*y[3]) - r.ps*y[3]
 	return r
 }
@@ -209,7 +209,7 @@ func slaved(ps, g float64) bool { return ps > slavedAt && g > -0.2*ps }
 // doubled many times within the age, they have forgotten everything else.
 // Their slopes follow too; the equations would lose them to cancellation.
 func (m *march) follow(s float64, r rates, g float64) rates {
-	c0, c1, c2 := powers(g / r.ps)
+	c0, c1, c2 := powers(g/r.ps, 0)
 	h := num.Exp10(-r.logH - num.Add10(m.unit, s))
 	m.state[1], m.state[2], m.state[3] = c0*h, c1*h*h, c2*h*h*h
 	for j := 1; j < 4; j++ {

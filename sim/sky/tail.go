@@ -15,13 +15,15 @@ type tail struct {
 	s, x, logH, eps float64
 	logK            [4]float64 // log10 K0..K3, in yr^1..yr^4
 	logEta          float64
-	still           bool // H t << 1: space has come to rest for a while
+	still           bool    // H t << 1: space has come to rest for a while
+	bent            float64 // share of H^2 that curvature has: 1 where it rules, else 0
 }
 
-// powers returns c0..c2 with K_j = c_j / H^(j+1) when eps is constant.
-func powers(eps float64) (c0, c1, c2 float64) {
+// powers returns c0..c2 with K_j = c_j / H^(j+1) when eps and the share of
+// curvature are constant.
+func powers(eps, bent float64) (c0, c1, c2 float64) {
 	c0 = 1 / (3 + eps)
-	c1 = c0 / (2 + 2*eps)
+	c1 = c0 / (2 + 2*eps - 4*bent/(1+3*eps))
 	return c0, c1, 2 * c1 / (1 + 3*eps)
 }
 
@@ -74,11 +76,10 @@ func (t *tail) hubble(s float64) float64 {
 
 // fourVolume returns log10 K3.
 func (t *tail) fourVolume(s float64) float64 {
-	k3 := t.logK[3]
-	if t.eps < 0 { // what the last moments add is next to nothing
-		return num.Add10(k3, num.Log10(3)+t.logK[2]+num.Sub10(math.Min(s, t.rip()), t.s))
+	if t.eps < 0 {
+		return num.Log10(t.ripping(t.grown(s))[3]) - 4*t.logH
 	}
-	from := t.s
+	k3, from := t.logK[3], t.s
 	if t.still {
 		// Space at rest until 1/H has passed, then the power law. The junction
 		// is monotone; log10 K3 is up to 0.5 off around it.
@@ -90,7 +91,7 @@ func (t *tail) fourVolume(s float64) float64 {
 			return k3
 		}
 	}
-	_, _, c2 := powers(t.eps)
+	_, _, c2 := powers(t.eps, t.bent)
 	if t.eps == 0 {
 		return num.Add10(k3, num.Log10(3*c2)-3*t.logH+num.Sub10(s, from))
 	}
@@ -136,9 +137,12 @@ func (t *tail) chain(j int, s float64) float64 {
 	if j == 3 {
 		return t.fourVolume(s)
 	}
-	if t.eps < 0 || t.still {
+	switch {
+	case t.still:
 		return t.logK[j]
+	case t.eps < 0:
+		return num.Log10(t.ripping(t.grown(s))[j]) - float64(j+1)*t.logH
 	}
-	c0, c1, c2 := powers(t.eps)
+	c0, c1, c2 := powers(t.eps, t.bent)
 	return num.Log10([3]float64{c0, c1, c2}[j]) - float64(j+1)*t.hubble(s)
 }

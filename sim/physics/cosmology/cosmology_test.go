@@ -31,6 +31,10 @@ func TestPublished(t *testing.T) {
 			"log10_date_of_relic": func() float64 { return f.LogDateOfRelic(num.Log10(at), 2.7255) },
 			"hole_as_warm_msun":   func() float64 { return hole.Temperature(1) / at },
 			"hole_as_warm_kg":     func() float64 { return hole.Temperature(1) / at * constant.Sun },
+			"age_with_radiation":  func() float64 { return cosmology.Age(h, om, at) / 1e9 },
+			"rip_date":            func() float64 { return cosmology.RipDate(h, om, r.Number(t, "w")) / 1e9 },
+			"log10_vacuum_tau":    func() float64 { return cosmology.LogVacuumTau(at) },
+			"log10_vacuum_wait":   func() float64 { return cosmology.LogVacuumWait(at, f.LogHubbleEnd()) },
 			"rip_wait":            func() float64 { return cosmology.RipWait(h, om, r.Number(t, "w")) / 1e9 },
 		}
 		answer, ok := answers[r.Inputs["quantity"]]
