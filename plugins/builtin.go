@@ -55,7 +55,7 @@ func Builtin() (*law.Registry, error) {
 		nucleondecay.Sphaleron(), nucleondecay.Stable(),
 		evaporation.Page(), evaporation.BlackBody(), evaporation.ThreeNeutrinos(), evaporation.LightestNeutrinoMassless(),
 		evaporation.PageKerr(), evaporation.Remnant(), evaporation.MemoryBurden(), evaporation.ExtraLightSpecies(), evaporation.None(),
-		curvature.None(),
+		curvature.None(), curvature.Falcke(), curvature.FalckeFixedDensity(),
 		supernova.Anchored(), supernova.ZeroTemperatureLattice(), supernova.None(),
 		iron.Dyson(), iron.None(),
 		tunnelling.WholeStar(), tunnelling.PlanckSpeck(), tunnelling.None(),

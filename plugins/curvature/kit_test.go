@@ -8,3 +8,7 @@ import (
 )
 
 func TestKitNone(t *testing.T) { lawtest.Run(t, curvature.None()) }
+
+func TestKitFalcke(t *testing.T) { lawtest.Run(t, curvature.Falcke()) }
+
+func TestKitFalckeFixedDensity(t *testing.T) { lawtest.Run(t, curvature.FalckeFixedDensity()) }

@@ -1,5 +1,3 @@
-// Package curvature holds the laws of how dense matter might radiate itself
-// away without a horizon.
 package curvature
 
 import "wane/sim/law"
@@ -12,7 +10,7 @@ func None() law.Law {
 		Formula: "dM/dt = 0",
 		Domain:  "every body; the effect without a horizon is contested",
 		Sources: []string{"assumption; proposed by Wondrak, van Suijlekom & Falcke 2023, Phys. Rev. Lett. 130, 221502"},
-		Accepts: law.Accepts{Kinds: []string{"white-dwarf", "neutron-star", "brown-dwarf", "relic"}},
+		Accepts: accepts(),
 		Questions: []law.Question{
 			{Name: "wear", Inputs: []string{"mass"}},
 			{Name: "foretell", Inputs: []string{"mass"}},
