@@ -20,6 +20,7 @@ import (
 
 	"wane/cmd/internal/inquiry"
 	"wane/cmd/internal/report"
+	"wane/cmd/internal/verify"
 	"wane/sim/law"
 )
 
@@ -32,6 +33,7 @@ type Program struct {
 	Embedded fs.FS                    // scenarios that need no file
 	Run      RunFunc
 	Open     OpenFunc // of laws outside the program
+	Dates    func() ([]verify.Date, error)
 }
 
 // Main runs the command line and returns the exit code. The first interrupt
@@ -96,7 +98,7 @@ func (p *Program) root() *cobra.Command {
 	root.PersistentFlags().BoolVar(&s.json, "json", false, "print JSON instead of text")
 	root.PersistentFlags().BoolVarP(&s.quiet, "quiet", "q", false, "print the answer only: no progress, no warnings, no remarks")
 	root.SetHelpTemplate(root.HelpTemplate() + exitCodes)
-	root.AddCommand(p.run(s), p.check(s), p.scenarios(s), p.laws(s), p.ask(s), p.law(s), p.schema(s), p.version(s))
+	root.AddCommand(p.run(s), p.check(s), p.scenarios(s), p.laws(s), p.ask(s), p.sky(s), p.law(s), p.verify(s), p.schema(s), p.version(s))
 	for _, c := range append(root.Commands(), root) {
 		c.Long = wrapped(c.Long)
 	}

@@ -17,6 +17,7 @@ const patience = time.Second
 type bar struct {
 	mu          sync.Mutex
 	out         io.Writer // nil: never shown
+	what        string    // is counted
 	begun       time.Time
 	progress    *mpb.Progress
 	line        *mpb.Bar
@@ -25,8 +26,11 @@ type bar struct {
 	timer       *time.Timer
 }
 
-func newBar(w io.Writer, quiet bool) *bar {
-	b := &bar{begun: time.Now()}
+// newBar is a bar that counts realisations.
+func newBar(w io.Writer, quiet bool) *bar { return newBarOf("realisations", w, quiet) }
+
+func newBarOf(what string, w io.Writer, quiet bool) *bar {
+	b := &bar{begun: time.Now(), what: what}
 	if !quiet && isTerminal(w) {
 		b.out = w
 		b.timer = time.AfterFunc(patience, b.show)
@@ -56,7 +60,7 @@ func (b *bar) show() {
 	b.progress = mpb.New(mpb.WithOutput(b.out), mpb.WithWidth(60))
 	b.line = b.progress.New(int64(b.total), mpb.BarStyle().Lbound("[").Filler("=").Tip(">").Padding(" ").Rbound("]"),
 		mpb.BarRemoveOnComplete(),
-		mpb.PrependDecorators(decor.CountersNoUnit("%d of %d realisations ")),
+		mpb.PrependDecorators(decor.CountersNoUnit("%d of %d "+b.what+" ")),
 		mpb.AppendDecorators(decor.NewElapsed(decor.ET_STYLE_GO, b.begun)))
 	b.line.SetCurrent(int64(b.done))
 }

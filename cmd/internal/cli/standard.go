@@ -4,6 +4,7 @@ import (
 	"context"
 	"os"
 
+	"wane/cmd/internal/verify"
 	"wane/plugins"
 	"wane/scenarios"
 	"wane/sim"
@@ -16,7 +17,7 @@ import (
 func Standard() *Program {
 	return &Program{
 		Out: os.Stdout, Err: os.Stderr, Builtin: plugins.Builtin, Defaults: plugins.Defaults,
-		Embedded: scenarios.FS, Run: engine, Open: openFolder,
+		Embedded: scenarios.FS, Run: engine, Open: openFolder, Dates: verify.Dates,
 	}
 }
 
