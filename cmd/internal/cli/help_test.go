@@ -11,7 +11,7 @@ import (
 
 // Help fits the width that answers keep to.
 func TestHelpFits(t *testing.T) {
-	for _, command := range []string{"", "run", "check", "scenarios", "laws", "ask", "law", "law new", "law check", "verify", "schema", "version"} {
+	for _, command := range []string{"", "run", "check", "scenarios", "laws", "ask", "sky", "law", "law new", "law check", "verify", "schema", "version"} {
 		var said strings.Builder
 		p := Standard()
 		p.Out, p.Err = &said, io.Discard
