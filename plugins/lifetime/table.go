@@ -28,10 +28,9 @@ func (table) Describe() law.Card {
 			"Stars under 0.25 solMass burn nearly all their hydrogen and never become giants (Laughlin et al. 1997).",
 			"Rotation and companions are left out.",
 		},
-		Accepts:   law.Accepts{Kinds: []string{"star"}},
-		Questions: []law.Question{{Name: "live", Inputs: []string{"mass"}}},
-		Parameters: []law.Parameter{{Name: "post", Doc: "giant and later phases, as a share of the main sequence, for stars above 0.5 solMass",
-			Low: 0.05, High: 0.15, Preset: 0.10, Citation: "assumption, after Schaller et al. 1992"}},
+		Accepts:    law.Accepts{Kinds: []string{"star"}},
+		Questions:  []law.Question{{Name: "live", Inputs: []string{"mass"}}},
+		Parameters: []law.Parameter{post()},
 	}
 }
 

@@ -6,12 +6,14 @@
 //	t     time, years (log10 of it where a result may leave float64's range)
 //	L, R  luminosity and radius in nominal solar units
 //	T     effective temperature, K
+//	Z     heavy elements, as a fraction of the mass
 //
-// Everything is for single stars of solar composition on the main sequence.
-// Left out: metals (see the laws that read them), binaries, rotation, and how
-// a star brightens while it ages.
+// Everything is for single stars, and but for what takes Z for those of solar
+// composition. Left out: binaries, rotation, and how a star brightens while it
+// ages.
 //
 // Sources: [SchallerEtAl1992] and [LaughlinEtAl1997] for lifetimes,
-// [BurrowsEtAl2001] for the hydrogen-burning limit; textbook power laws for
-// luminosity and radius.
+// [BurrowsEtAl2001] for the hydrogen-burning limit, [AdamsLaughlin1997] for
+// what metals and recycled gas do; textbook power laws for luminosity and
+// radius.
 package stars

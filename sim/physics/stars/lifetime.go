@@ -1,10 +1,6 @@
 package stars
 
-import (
-	"math"
-
-	"wane/sim/num"
-)
+import "wane/sim/num"
 
 // lifetimes is the time on the main sequence at solar composition: mass in
 // solar masses, time in years. 0.8 and above: [SchallerEtAl1992], Z = 0.02.
@@ -92,6 +88,5 @@ func (l *Lifetimes) TurnOff(log10Age float64) float64 {
 // Domain and special cases as for [Lifetimes.MainSequence].
 // Error: the share is an assumption, good to half of itself.
 func (l *Lifetimes) Life(m, share float64) float64 {
-	w := math.Min(math.Max((m-0.25)/(0.5-0.25), 0), 1)
-	return l.MainSequence(m) + num.Log1p(share*w)/num.Ln10
+	return WithGiant(l.MainSequence(m), m, share)
 }
