@@ -15,7 +15,7 @@ func (fullDisk) Write([]byte) (int, error) { return 0, errors.New("no space left
 func TestOutputThatCannotBeWritten(t *testing.T) {
 	for _, command := range []string{
 		"run little-lamp --realisations 1 --objects 50", "check little-lamp", "scenarios", "laws", "laws evaporation/page",
-		"ask evaporation/page mass=1Msun", "schema", "version",
+		"ask evaporation/page mass=1Msun", "sky", "schema", "version",
 	} {
 		for _, form := range []string{"", " --json"} {
 			var said strings.Builder

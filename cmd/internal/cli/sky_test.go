@@ -6,6 +6,9 @@ import (
 	"fmt"
 	"io"
 	"math"
+	"os"
+	"path/filepath"
+	"slices"
 	"strconv"
 	"strings"
 	"testing"
@@ -301,6 +304,57 @@ func TestSkyGrid(t *testing.T) {
 	for i := range want {
 		if math.Abs(got[i]-want[i]) > 1e-14*want[i] {
 			t.Errorf("dates %v, want %v", got, want)
+		}
+	}
+}
+
+// The head of the CSV is ECSV as Astropy reads it: units, special dates, and
+// cells that are missing where everything has ended.
+func TestSkyCSVIsECSV(t *testing.T) {
+	for command, want := range map[string][]float64{
+		"lambda-cdm --at today,1e12yr": {2, 11, 9, 0},
+		// log10 of log10 a is missing before today, and all but the date after the end
+		"phantom --at 1e9yr,1e12yr,1e13yr": {3, 11, 9, 21},
+	} {
+		for _, key := range []string{"today", "end"} {
+			date := skyJSONOf(t, command).Special[key].Log10Date
+			if date == nil {
+				want = append(want, math.Inf(1))
+			} else {
+				want = append(want, *date)
+			}
+		}
+		file := filepath.Join(t.TempDir(), "sky.ecsv")
+		if err := os.WriteFile(file, []byte(printed(t, "sky "+command+" --csv")), 0o644); err != nil {
+			t.Fatal(err)
+		}
+		if got := reference.Python(t, "testdata/ecsv.py", file)[0]; !slices.Equal(got, want) {
+			t.Errorf("wane sky %s: Astropy reads %v, want %v", command, got, want)
+		}
+	}
+}
+
+// A law of expansion from outside the program is taken by its path, and closed
+// however it ends; what was started is said.
+func TestSkyOfLawOutside(t *testing.T) {
+	dir := lawFolder(t)
+	for _, c := range []struct {
+		args, said string
+		code       int
+	}{
+		{"sky " + dir, "law expansion/lambda-cdm, version 1, from " + dir, ExitOK},
+		{"sky lantern-reach --law expansion=" + dir, "from " + dir, ExitOK},
+		{"sky " + dir + " --set expansion.huble=70km/s/Mpc", `did you mean "hubble"`, ExitBadInput},
+		{"sky --law vacuum-decay=" + dir, "a law of process expansion", ExitBadInput},
+		{"sky " + dir + " --law expansion=open", "given twice", ExitBadInput},
+	} {
+		s := &strangers{law: builtin(t, "expansion", "lambda-cdm")}
+		code, out, said := mainOf(s, nil, strings.Fields(c.args)...)
+		if code != c.code || !strings.Contains(said, c.said) || (code == ExitOK) != strings.Contains(out, "10^12.086 yr") {
+			t.Errorf("%s: exit code %d, said %q, printed\n%s", c.args, code, said, out)
+		}
+		if s.open.Load() != 0 {
+			t.Errorf("%s: %d still open", c.args, s.open.Load())
 		}
 	}
 }
