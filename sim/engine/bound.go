@@ -51,6 +51,9 @@ func (w *Workspace) count(i uint32, sign float64) {
 	if !m.deathsMatter {
 		return
 	}
+	if m.encounter != nil {
+		w.meets.count(w, i, sign)
+	}
 	kind := int(w.kindOf(i))
 	e.add(m.slotNumberKind(kind), x)
 	e.add(m.slotMassKind(kind), x*mass)

@@ -27,6 +27,7 @@ func (w *Workspace) exposeAll() error {
 			copy(w.s[1][k][first:], s1[k][:n])
 		}
 	}
+	w.meets.plant(w)
 	for k := range m.Clocks {
 		if m.sums[k] {
 			for i := range c.n {

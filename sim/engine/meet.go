@@ -11,8 +11,7 @@ import (
 // meetings are the encounters of one realisation.
 type meetings struct {
 	s       [2][][]float64 // what is sought of each object, by stage and clock
-	ids     []uint32       // bound and born at the last refresh
-	cum     [][]float64    // running totals of what is sought, by clock
+	trees   []soughtTree   // by clock: of the bound objects as they are
 	pairs   []pair
 	journal []transition
 	stays   []stay // of lives that are in the journal
@@ -30,8 +29,7 @@ type pair struct {
 const maxTries = 4096
 
 func (x *meetings) begin() {
-	x.pairs, x.journal, x.ids = x.pairs[:0], x.journal[:0], x.ids[:0]
-	x.stays = x.stays[:0]
+	x.pairs, x.journal, x.stays = x.pairs[:0], x.journal[:0], x.stays[:0]
 }
 
 func (x *meetings) scale(f float64) {
@@ -80,27 +78,33 @@ func (x *meetings) sought(w *Workspace, k int, i uint32) float64 {
 	}
 }
 
-// recount tabulates, at a refresh, who can be met: all that are bound. Who is
-// not born when it is picked is passed over.
-func (x *meetings) recount(w *Workspace) {
-	x.ids = x.ids[:0]
-	x.cum = grown(x.cum, len(w.m.Clocks))
-	for k := range x.cum {
-		x.cum[k] = x.cum[k][:0]
+// plant readies the trees before the first event: all are bound, and sought as
+// in their first stage. Who is not born when it is picked is passed over.
+func (x *meetings) plant(w *Workspace) {
+	if w.m.encounter == nil {
+		return
 	}
-	for i := range uint32(w.c.n) {
-		if w.c.place[i] == law.Bound {
-			x.ids = append(x.ids, i)
+	if len(x.trees) == 0 {
+		x.trees = make([]soughtTree, len(w.m.Clocks))
+	}
+	for k := range x.trees {
+		if w.m.Clocks[k].Fate == law.FateMeet && w.c.n > 0 {
+			x.trees[k].resize(w.c.n)
+			copy(x.trees[k].levels[0], x.s[0][k])
+			x.trees[k].build()
 		}
 	}
-	for k := range w.m.Clocks {
-		if w.m.Clocks[k].Fate != law.FateMeet {
-			continue
-		}
-		sum := 0.0
-		for _, i := range x.ids {
-			sum += x.sought(w, k, i)
-			x.cum[k] = append(x.cum[k], sum)
+}
+
+// count takes object i, as it is, into the trees (sign +1), or out of them.
+func (x *meetings) count(w *Workspace, i uint32, sign float64) {
+	for k := range x.trees {
+		switch {
+		case w.m.Clocks[k].Fate != law.FateMeet:
+		case sign < 0:
+			x.trees[k].set(i, 0)
+		default:
+			x.trees[k].set(i, x.sought(w, k, i))
 		}
 	}
 }
@@ -117,15 +121,13 @@ func (w *Workspace) bornBy(i uint32) bool {
 // meet lets object i, whose clock k has fired, find a partner.
 func (w *Workspace) meet(k int, i uint32, t float64) error {
 	x := &w.meets
-	cum := x.cum[k]
+	tree := &x.trees[k]
 	gen := w.generationOf(i)
-	if n := len(cum); n > 1 && cum[n-1] > 0 {
+	if total := tree.total(); total > 0 && w.bound > 1 {
 		stream := w.ask.streams[w.m.Clocks[k].Process]
 		for try := range uint32(maxTries) {
-			u := stream.Uniform(uint64(i), gen, drawSeek+try) * cum[n-1]
-			at, _ := slices.BinarySearch(cum, u)
-			j := x.ids[min(at, n-1)]
-			if j == i || w.c.place[j] != law.Bound || !w.bornBy(j) || w.stage[j]&waiting != 0 || x.sought(w, k, j) == 0 {
+			j, ok := tree.pick(stream.Uniform(uint64(i), gen, drawSeek+try) * total)
+			if !ok || j == i || w.stage[j]&waiting != 0 || !w.bornBy(j) {
 				continue
 			}
 			if w.quiet && !w.isActive[j] {

@@ -183,9 +183,6 @@ func (w *Workspace) refresh(t float64) error {
 		return err
 	}
 	w.windowAt = t + window
-	if w.m.encounter != nil {
-		w.meets.recount(w)
-	}
 	if w.quiet {
 		w.past.note(w.base, w.reading, w.env.Rates)
 	}

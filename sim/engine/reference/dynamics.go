@@ -127,12 +127,6 @@ func (g *run) refresh() error {
 		return err
 	}
 	g.windowAt = g.t + window
-	g.table = g.table[:0]
-	for _, o := range g.objects {
-		if g.encounter != nil && o.place == law.Bound && !o.gone {
-			g.table = append(g.table, candidate{o, o.now().sought})
-		}
-	}
 	return g.hole.look(g)
 }
 

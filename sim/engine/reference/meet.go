@@ -13,21 +13,16 @@ type pair struct {
 	date            float64 // log10
 }
 
-// candidate is an object that can be met, and what each clock seeks of it.
-type candidate struct {
-	o      *object
-	sought []float64
-}
-
 const maxTries = 4096
 
-// meet lets an object whose clock k has fired find a partner among those
-// bound at the last refresh; who is not yet born, has left or waits is passed
-// over.
+// meet lets an object whose clock k has fired find a partner among those that
+// are bound; who is not yet born or waits is passed over.
 func (g *run) meet(k int, o *object) error {
 	total := 0.0
-	for _, c := range g.table {
-		total += c.sought[k]
+	for _, c := range g.objects {
+		if c.bound() {
+			total += c.now().sought[k]
+		}
 	}
 	stream := g.stream(g.clocks[k].use.Card.Process)
 	for try := range uint32(maxTries) {
@@ -37,9 +32,12 @@ func (g *run) meet(k int, o *object) error {
 		u := stream.Uniform(o.id, o.generation+uint32(o.at), drawSeek+try) * total
 		sum := 0.0
 		var found *object
-		for _, c := range g.table {
-			if sum += c.sought[k]; sum >= u {
-				found = c.o
+		for _, c := range g.objects {
+			if !c.bound() {
+				continue
+			}
+			if sum += c.now().sought[k]; sum >= u {
+				found = c
 				break
 			}
 		}

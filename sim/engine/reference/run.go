@@ -43,7 +43,6 @@ type run struct {
 	bound     int
 	waiting   int
 	pairs     []pair
-	table     []candidate
 	scheduled events
 	hits      []hits
 	wears     events
@@ -301,7 +300,10 @@ func (h *hits) Pop() any {
 	return last
 }
 
+// bound tells whether an object is in the galaxy, born or not.
+func (o *object) bound() bool { return o.place == law.Bound && !o.gone }
+
 // available: bound, born, and not waiting for what comes of a meeting.
 func (o *object) available() bool {
-	return o.place == law.Bound && !o.gone && !o.waiting && o.at >= 0
+	return o.bound() && !o.waiting && o.at >= 0
 }
