@@ -17,7 +17,8 @@ func (decayingDarkEnergy) Describe() law.Card {
 		Process: "expansion", Name: "decaying-dark-energy", Version: "1",
 		Summary: "flat space, dark energy fades by halves from today on: in the end matter alone, and no horizon keeps anything warm",
 		Formula: "H^2 = H0^2 [Om a^-3 + Or a^-4 + (1 - Om - Or) 2^(-(t-t0)/t_half)], in the end a ~ t^(2/3), relic temperature ~ t^(-2/3)",
-		Domain:  "all dates after the first 1e5 yr; exact once the half-life is given, which no theory does",
+		Domain: "all dates after the first 1e5 yr, half-lives up to 1e16 yr (with longer ones ln a loses its digits before dark energy is gone); " +
+			"exact once the half-life is given, which no theory does",
 		Sources: []string{
 			"assumption: the law of decay; " + planck,
 			"Wang, Y., Kratochvil, J. M., Linde, A. & Shmakova, M. 2004, J. Cosmol. Astropart. Phys. 12, 006 (how soon data allow it to go: 24 Gyr at 95 %)",
@@ -31,7 +32,7 @@ func (decayingDarkEnergy) Describe() law.Card {
 		},
 		Questions: []law.Question{{Name: "density", Inputs: []string{"log10_date", "log10_since"}}},
 		Parameters: today(law.Parameter{Name: "half_life", Unit: "yr", Log10: true, Doc: "time in which dark energy loses half its density",
-			Low: 10, High: 20, Preset: 11, Citation: "assumption; at least 1e10 yr: Kallosh et al. 2003, J. Cosmol. Astropart. Phys. 10, 015"}),
+			Low: 10, High: 16, Preset: 11, Citation: "assumption; at least 1e10 yr: Kallosh et al. 2003, J. Cosmol. Astropart. Phys. 10, 015"}),
 	}
 }
 

@@ -17,7 +17,7 @@ const (
 	slavedAt  = 100   // p above which K0..K2 follow H without delay
 	firstLnA  = -18.4 // ln a at the first node: 1e-8
 	maxNodes  = 40000
-	maxSince  = 100.0 // log10 yr after the origin by which a tail must be found
+	maxSince  = 100.0 // by how many decades after its first 1/H (or a year) a tail must be found
 	tailEvery = 8     // nodes between attempts to end the table
 )
 
@@ -145,9 +145,9 @@ func (e *expansion) integrate(st start) (*piece, error) {
 				return m.p, nil
 			}
 		}
-		if n > maxNodes || s > maxSince {
+		if latest := maxSince + math.Max(st.unit, 0); n > maxNodes || s > latest {
 			return nil, fmt.Errorf("sky: law %s: H is neither constant nor a power law of time by 10^%.4g yr after 10^%.4g yr: "+
-				"want one within 10^%g yr", e.use.ID(), s, math.Max(st.origin, 0), maxSince)
+				"want one within 10^%.4g yr", e.use.ID(), s, math.Max(st.origin, 0), latest)
 		}
 		step := stepLog
 		if !slaved(r.ps, g) {

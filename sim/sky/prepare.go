@@ -3,6 +3,7 @@ package sky
 import (
 	"errors"
 	"fmt"
+	"math"
 
 	"wane/sim/draw"
 	"wane/sim/law"
@@ -128,8 +129,8 @@ func (p *Prepared) decay(s *Sky, date float64) error {
 		return err
 	}
 	old := p.sky.pieces[0]
-	unit := -old.hubble(date)
-	st := start{origin: date, unit: unit, s: unit - 6, x: old.lnA(date), logEta: old.comoving(date)}
+	unit := math.Min(-old.hubble(date), date) // space may be at rest already
+	st := start{origin: date, unit: unit, s: unit - 7, x: old.lnA(date), logEta: old.comoving(date)}
 	for j := range st.logK {
 		st.logK[j] = old.chain(j, date)
 	}

@@ -83,10 +83,7 @@ func (t *tail) fourVolume(s float64) float64 {
 	if t.still {
 		// Space at rest until 1/H has passed, then the power law. The junction
 		// is monotone; log10 K3 is up to 0.5 off around it.
-		d := math.Min(num.Sub10(s, t.s), -t.logH)
-		k3 = num.Add10(k3, num.Log10(3)+t.logK[2]+d)
-		k3 = num.Add10(k3, num.Log10(3)+t.logK[1]+2*d)
-		k3 = num.Add10(num.Add10(k3, t.logK[0]+3*d), 4*d-num.Log10(4))
+		k3 = t.resting(math.Min(num.Sub10(s, t.s), -t.logH))[3]
 		if from = num.Add10(t.s, -t.logH); s <= from {
 			return k3
 		}
@@ -97,6 +94,18 @@ func (t *tail) fourVolume(s float64) float64 {
 	}
 	scale := -4*t.logH + num.Log10(3*c2/(4*t.eps))
 	return num.Add10(k3, num.Sub10(scale+4*t.eps*t.grown(s)/num.Ln10, scale+4*t.eps*t.grown(from)/num.Ln10))
+}
+
+// resting returns log10 of K0..K3 after 10^d years of rest.
+func (t *tail) resting(d float64) [4]float64 {
+	k := t.logK
+	three := num.Log10(3)
+	return [4]float64{
+		num.Add10(k[0], d),
+		num.Sum10(k[1], k[0]+d, 2*d-num.Log10(2)),
+		num.Sum10(k[2], num.Log10(2)+k[1]+d, k[0]+2*d, 3*d-three),
+		num.Sum10(k[3], three+k[2]+d, three+k[1]+2*d, k[0]+3*d, 4*d-num.Log10(4)),
+	}
 }
 
 // comoving returns log10 of the comoving particle horizon, ly.
@@ -138,8 +147,8 @@ func (t *tail) chain(j int, s float64) float64 {
 		return t.fourVolume(s)
 	}
 	switch {
-	case t.still:
-		return t.logK[j]
+	case t.still && s <= num.Add10(t.s, -t.logH):
+		return t.resting(num.Sub10(s, t.s))[j]
 	case t.eps < 0:
 		return num.Log10(t.ripping(t.grown(s))[j]) - float64(j+1)*t.logH
 	}
