@@ -100,6 +100,7 @@ type ways struct {
 	total []int64    // by kind, however they ended
 	ended [2][]int64 // of them, at their settled end: in the galaxy, adrift
 	links float64    // log10 date of the last end of what follows from a change
+	made  [256]bool  // by kind: a turning law made some
 }
 
 func (w *Workspace) waysOfEnding() ways {
@@ -136,11 +137,14 @@ func (w *Workspace) waysOfEnding() ways {
 			x.ended[1][k]++
 		}
 	}
-	for _, links := range c.chain {
+	for i, links := range c.chain {
+		cause := c.ended[i]
 		for _, l := range links {
 			if l.end < never {
 				x.links = max(x.links, l.end)
 			}
+			x.made[l.kind] = x.made[l.kind] || w.books.turns[cause]
+			cause = l.ended
 		}
 	}
 	return x
@@ -161,7 +165,9 @@ func (w *Workspace) realLast(p *population, seen *ways, target float64) float64 
 		l := &w.reach.lots[kind]
 		ended, exits := int64(0), false
 		for place := range uint8(2) {
-			switch w.leavesBy(p, kind, place) {
+			how := w.leavesBy(p, kind, place)
+			linked = linked || seen.made[kind] && how != notIn
+			switch how {
 			case byItsEnd:
 				exits = true
 				ended += seen.ended[place][kind]
