@@ -69,7 +69,7 @@ func (v *skyView) header(w io.Writer, style report.Style) {
 		field(w, 0, column, term, name)
 	}
 	if v.draws {
-		field(w, 0, column, "realisation", fmt.Sprintf("%d of seed %d: what the endings draw is other in others", v.realisation, v.run.Seed))
+		field(w, 0, column, "realisation", fmt.Sprintf("%d of seed %d: what an ending draws differs from one to the next", v.realisation, v.run.Seed))
 	}
 	field(w, 0, column, "dates", "years since the Big Bang")
 	fmt.Fprintln(w)
