@@ -79,7 +79,7 @@ func (p *Program) verifyDates(ctx context.Context, s *settings, dates []verify.D
 	if err != nil {
 		return failed(err)
 	}
-	m := verify.Means{Registry: registry, Defaults: p.Defaults(),
+	m := &verify.Means{Registry: registry, Defaults: p.Defaults(),
 		Run: func(ctx context.Context, sc *scenario.Scenario) (*ensemble.Summary, error) {
 			return p.Run(ctx, sc, registry, 0, nil)
 		}}

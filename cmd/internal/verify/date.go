@@ -41,6 +41,10 @@ var Kinds = []string{
 // Clocks say what a printed time counts from.
 var Clocks = []string{"big-bang", "now", "own"} // own: from when the object became what it is
 
+// EFolding stands for mass over loss rate in place of an answer: the time in
+// which a body falls to 1/e of its mass at the rate it begins with.
+const EFolding = "e-folding"
+
 // Date is one date of the literature, and how ours comes about.
 type Date struct {
 	Name    string `toml:"name"`
@@ -55,7 +59,7 @@ type Date struct {
 	Kind      string   `toml:"kind"`
 	Clock     string   `toml:"clock"`
 
-	// A question: process/name, key=value, and which answer.
+	// A question: process/name, key=value, and which answer, or EFolding.
 	Law      string   `toml:"law"`
 	Question string   `toml:"question"`
 	Given    []string `toml:"given"`

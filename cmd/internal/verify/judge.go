@@ -12,11 +12,29 @@ import (
 	"wane/sim/scenario"
 )
 
-// Means is what rows are worked out with.
+// Means is what rows are worked out with. It remembers runs, so that the rows
+// of one galaxy share one; it is for one goroutine.
 type Means struct {
 	Registry *law.Registry
 	Defaults map[string]string // process to law
 	Run      func(ctx context.Context, sc *scenario.Scenario) (*ensemble.Summary, error)
+
+	runs map[string]*ensemble.Summary // by the digest of the scenario
+}
+
+func (m *Means) run(ctx context.Context, sc *scenario.Scenario) (*ensemble.Summary, error) {
+	if s, done := m.runs[sc.Digest]; done {
+		return s, nil
+	}
+	s, err := m.Run(ctx, sc)
+	if err != nil {
+		return nil, err
+	}
+	if m.runs == nil {
+		m.runs = map[string]*ensemble.Summary{}
+	}
+	m.runs[sc.Digest] = s
+	return s, nil
 }
 
 // Result is a row worked out.
@@ -32,7 +50,7 @@ type Result struct {
 
 // Judge works a row out and holds it against what is recorded. The error is
 // that of ctx, and of nothing else.
-func Judge(ctx context.Context, d Date, m Means) (Result, error) {
+func Judge(ctx context.Context, d Date, m *Means) (Result, error) {
 	ours, err := d.ours(ctx, m)
 	if ctx.Err() != nil {
 		return Result{}, ctx.Err()
@@ -58,7 +76,7 @@ func Judge(ctx context.Context, d Date, m Means) (Result, error) {
 }
 
 // ours is log10 years.
-func (d *Date) ours(ctx context.Context, m Means) (float64, error) {
+func (d *Date) ours(ctx context.Context, m *Means) (float64, error) {
 	if d.Law != "" {
 		return d.asked(m)
 	}
@@ -69,30 +87,45 @@ func (d *Date) ours(ctx context.Context, m Means) (float64, error) {
 	if d.Sky != "" {
 		return d.ofSky(sc, m)
 	}
-	s, err := m.Run(ctx, sc)
+	s, err := m.run(ctx, sc)
 	if err != nil {
 		return 0, err
 	}
 	return d.mark(s)
 }
 
-func (d *Date) asked(m Means) (float64, error) {
+func (d *Date) asked(m *Means) (float64, error) {
 	a, err := inquiry.Ask(inquiry.Inquiry{Registry: m.Registry, Defaults: m.Defaults, ID: d.Law, Question: d.Question, Given: d.Given})
 	if err != nil {
 		return 0, err
 	}
+	if d.Answer == EFolding {
+		mass, found := logOf(a, "mass", "solMass")
+		rate, worn := logOf(a, "loss_rate", "solMass/yr")
+		if !found || !worn {
+			return 0, fmt.Errorf("law %s: want a mass and a loss rate for the time of an e-folding", d.Law)
+		}
+		return mass - rate, nil
+	}
+	t, found := logOf(a, d.Answer, "yr")
+	if !found {
+		return 0, fmt.Errorf("law %s: no %s that is a time in what it answers", d.Law, d.Answer)
+	}
+	return t, nil
+}
+
+// logOf is log10 of the value of a name and unit in an answer.
+func logOf(a *inquiry.Answer, name, unit string) (float64, bool) {
 	for _, v := range append(a.Outputs, a.Inputs...) {
 		switch {
-		case v.Name != d.Answer:
-		case v.Unit != "yr":
-			return 0, fmt.Errorf("%s of law %s is in %q: want a time", d.Answer, d.Law, v.Unit)
+		case v.Name != name || v.Unit != unit || v.Word != "":
 		case v.Log10:
-			return v.Number, nil
+			return v.Number, true
 		default:
-			return num.Log10(v.Number), nil
+			return num.Log10(v.Number), true
 		}
 	}
-	return 0, fmt.Errorf("law %s: no %s in what it answers", d.Law, d.Answer)
+	return 0, false
 }
 
 // mark is a mark of the row's population.

@@ -16,7 +16,7 @@ import (
 const farthest = 1e5
 
 // ofSky is a date of the background of a scenario.
-func (d *Date) ofSky(sc *scenario.Scenario, m Means) (float64, error) {
+func (d *Date) ofSky(sc *scenario.Scenario, m *Means) (float64, error) {
 	set, err := sc.Set(m.Registry)
 	if err != nil {
 		return 0, err
@@ -36,7 +36,7 @@ func (d *Date) ofSky(sc *scenario.Scenario, m Means) (float64, error) {
 	return date, err
 }
 
-func (d *Date) inSky(s *sky.Sky, set *law.Set, m Means) (float64, error) {
+func (d *Date) inSky(s *sky.Sky, set *law.Set, m *Means) (float64, error) {
 	switch d.Sky {
 	case "end": // of everything
 		end, _ := s.End()

@@ -16,13 +16,13 @@ import (
 	"wane/sim/scenario/quantity"
 )
 
-func means(t *testing.T) Means {
+func means(t *testing.T) *Means {
 	t.Helper()
 	registry, err := plugins.Builtin()
 	if err != nil {
 		t.Fatal(err)
 	}
-	return Means{Registry: registry, Defaults: plugins.Defaults(),
+	return &Means{Registry: registry, Defaults: plugins.Defaults(),
 		Run: func(ctx context.Context, sc *scenario.Scenario) (*ensemble.Summary, error) {
 			return sim.Run(ctx, sc, registry, sim.Options{})
 		}}
@@ -196,8 +196,10 @@ func TestJudgeFindsStrays(t *testing.T) {
 		{"a tolerance too small", `tolerance = 0.5`, "tolerance = 0.1", "now: differs, by +0.321"},
 		{"a difference that is another", `verdict = "agrees"`, "verdict = \"agrees\"\ndifference = 0.3", "now by +0.321"},
 		{"a law that is none", "black-body", "green-body", "not known"},
-		{"an answer that is none", `"lifetime"`, `"deathtime"`, "no deathtime"},
-		{"an answer that is no time", `"lifetime"`, `"temperature"`, "want a time"},
+		{"an answer that is none", `"lifetime"`, `"deathtime"`, "no deathtime that is a time"},
+		{"an answer that is no time", `"lifetime"`, `"temperature"`, "no temperature that is a time"},
+		{"an e-folding of what is not worn", "law = \"evaporation/black-body\"\ngiven = [\"mass=1Msun\"]\nanswer = \"lifetime\"",
+			"law = \"lifetime/table\"\ngiven = [\"mass=1Msun\"]\nanswer = \"e-folding\"", "a loss rate"},
 		{"a mass that is none", "1Msun", "1yr", "mass"},
 		{"a scenario that is none", `law = "evaporation/black-body"`, "scenario = \"nowhere\"\npopulation = \"stars\"\nmark = \"last\"", "nowhere"},
 		{"a population that is none", `law = "evaporation/black-body"`, "scenario = \"rest\"\npopulation = \"comets\"\nmark = \"last\"", "comets"},
