@@ -1,11 +1,5 @@
 package remnants
 
-import (
-	"math"
-
-	"wane/sim/num"
-)
-
 // Limits of the white-dwarf relation, solar masses. HeaviestWhiteDwarf and
 // OxygenNeonMass are rounded from models; LightestWhiteDwarf bounds only what
 // the scatter may do. All three are assumptions.
@@ -78,12 +72,7 @@ func CummingsInitial(mf float64) float64 {
 // masses, and ends at 3 sigma are assumptions. Monotone in u.
 // Source: [CummingsEtAl2018] for the mean.
 func WhiteDwarf(m, u, scatter float64) float64 {
-	mean := CummingsMean(m)
-	if m < HeliumLimit {
-		return mean
-	}
-	z := math.Sqrt2 * num.Erfinv((2*u-1)*threeSigma)
-	return math.Min(math.Max(mean+scatter*z, LightestWhiteDwarf), math.Min(m, HeaviestWhiteDwarf))
+	return scattered(CummingsMean(m), m, u, scatter, HeliumLimit)
 }
 
 // threeSigma is erf(3/sqrt2), the share of a Gaussian inside 3 sigma.

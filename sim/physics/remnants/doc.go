@@ -8,6 +8,7 @@
 // star or hole) are probabilities. Metals, rotation and companions are left
 // out: all relations are for single stars of about solar composition.
 //
-// Sources: [CummingsEtAl2018] for white dwarfs, [RaithelEtAl2018] (fits to
-// the explosions of [SukhboldEtAl2016]) for collapse.
+// Sources: [CummingsEtAl2018], [KaliraiEtAl2008] and [SalarisEtAl2009] for
+// white dwarfs, [RaithelEtAl2018] (fits to the explosions of
+// [SukhboldEtAl2016]) for collapse.
 package remnants

@@ -69,10 +69,12 @@ func Hole(m, f float64) float64 {
 
 func holeBelow40(m, f float64) float64 {
 	x := m - 25.97
-	core := -2.049 + 0.4140*m
 	all := 15.52 + x*(-0.3294+x*(-0.02121+x*0.003120))
-	return f*core + (1-f)*all
+	return f*core(m) + (1-f)*all
 }
+
+// core is the mass of the helium core of a star that is about to collapse.
+func core(m float64) float64 { return -2.049 + 0.4140*m }
 
 func holeAbove45(m float64) float64 { return 5.697 + 7.8598e8*num.Pow(m, -4.858) }
 

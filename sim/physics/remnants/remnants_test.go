@@ -42,13 +42,67 @@ func TestPublished(t *testing.T) {
 			row.Check(t, between(CummingsInitial(in("mass_Msun")), Collapse)/stars)
 		case "gain-by-scatter":
 			m := in("mass_Msun")
-			row.Check(t, scattered(kroupa, m)/between(CummingsInitial(m), Collapse))
+			row.Check(t, scatteredShare(kroupa, m)/between(CummingsInitial(m), Collapse))
 		case "share-white-dwarf-above-scattered":
-			row.Check(t, scattered(kroupa, in("mass_Msun")))
+			row.Check(t, scatteredShare(kroupa, in("mass_Msun")))
+		case "white-dwarf-seam":
+			m := in("mass_Msun")
+			row.Check(t, CummingsMean(m)/CummingsMean(math.Nextafter(m, 0)))
+		case "direct-hole":
+			row.Check(t, DirectHole(in("mass_Msun"), in("f")))
+		case "returned":
+			row.Check(t, 1-final(kroupa).all()/kroupa.Mean())
+		case "number-share-white-dwarf":
+			row.Check(t, between(0.075, Collapse))
+		case "number-share-brown-dwarf":
+			row.Check(t, kroupa.NumberBelow(0.075))
+		case "number-share-neutron-star":
+			row.Check(t, weigh(kroupa, NeutronStarChance))
+		case "mass-share-white-dwarf":
+			x := final(kroupa)
+			row.Check(t, x.dwarfs/x.all())
+		case "mass-share-brown-dwarf":
+			x := final(kroupa)
+			row.Check(t, x.brown/x.all())
+		case "mass-share-neutron-star":
+			x := final(kroupa)
+			row.Check(t, x.neutron/x.all())
+		case "mass-share-black-hole":
+			x := final(kroupa)
+			row.Check(t, x.holes/x.all())
+		case "neutron-stars-of-galaxy":
+			row.Check(t, 2e11*weigh(kroupa, NeutronStarChance))
+		case "black-holes-of-galaxy":
+			row.Check(t, 2e11*weigh(kroupa, func(m float64) float64 { return 1 - NeutronStarChance(m) }))
 		default:
 			t.Errorf("%s: unknown quantity %q", row.Where(), quantity)
 		}
 	}
+}
+
+// left is what is left once all stars are dead, solar masses per object.
+type left struct{ brown, dwarfs, neutron, holes float64 }
+
+func (x left) all() float64 { return x.brown + x.dwarfs + x.neutron + x.holes }
+
+// final sums what the objects of a mass function leave: midpoints in steps of
+// number, finer towards the heavy end.
+func final(f imf.BrokenPowerLaw) (x left) {
+	const n = 200000
+	for i := range n {
+		a, b := 1-float64(i)/n, 1-float64(i+1)/n
+		w, m := a*a*a-b*b*b, f.Quantile(1-(a*a*a+b*b*b)/2)
+		switch {
+		case m < 0.075:
+			x.brown += w * m
+		case m < Collapse:
+			x.dwarfs += w * CummingsMean(m)
+		default:
+			x.neutron += w * NeutronStarChance(m) * NeutronStarMean
+			x.holes += w * (1 - NeutronStarChance(m)) * Hole(m, 0.9)
+		}
+	}
+	return x
 }
 
 // weigh sums a chance over the stars that collapse, between the ends of the
@@ -62,9 +116,9 @@ func weigh(f imf.BrokenPowerLaw, chance func(float64) float64) float64 {
 	return sum
 }
 
-// scattered is the share of all objects that end as white dwarfs above a mass
+// scatteredShare is the share of all objects that end as white dwarfs above a mass
 // with the scatter of 0.06, by a midpoint sum over stars and draws.
-func scattered(f imf.BrokenPowerLaw, above float64) float64 {
+func scatteredShare(f imf.BrokenPowerLaw, above float64) float64 {
 	const stars, draws = 800, 800
 	low, high, hits := f.NumberBelow(4), f.NumberBelow(Collapse), 0
 	for i := range stars {
