@@ -38,8 +38,12 @@ func (w *Workspace) coded(t float64) float64 {
 	return -(num.Log10(t) + w.env.unit)
 }
 
-// subtract takes object i as it now is out of the galaxy values.
-func (w *Workspace) subtract(i uint32) { w.count(i, -1) }
+// subtract takes object i as it now is out of the galaxy values, and out of
+// reach of others.
+func (w *Workspace) subtract(i uint32) {
+	w.count(i, -1)
+	w.meets.drop(w, i)
+}
 
 // count adds sign times object i to the galaxy values.
 func (w *Workspace) count(i uint32, sign float64) {
@@ -51,16 +55,13 @@ func (w *Workspace) count(i uint32, sign float64) {
 	if !m.deathsMatter {
 		return
 	}
-	if m.encounter != nil {
-		w.meets.count(w, i, sign)
-	}
 	kind := int(w.kindOf(i))
 	e.add(m.slotNumberKind(kind), x)
 	e.add(m.slotMassKind(kind), x*mass)
 	for k := range m.Clocks {
 		if m.sums[k] {
 			e.add(m.slotSum(k), x*w.sus(k, i))
-			if m.encounter != nil {
+			if m.Clocks[k].Fate == law.FateMeet {
 				e.add(m.slotSought(k), x*w.meets.sought(w, k, i))
 			}
 		}

@@ -4,28 +4,40 @@ import (
 	"slices"
 )
 
+// passage is the pieces of the history in which an object was born and died as
+// a star, the latter only where it has by now.
+type passage struct{ birth, death int }
+
+func (w *Workspace) passageOf(j int, t float64) passage {
+	p := passage{birth: w.past.find(w.c.birth[j])}
+	if w.c.died[j] != 0 && !(w.c.death[j] > t) {
+		p.death = w.past.find(w.c.death[j])
+	}
+	return p
+}
+
 // readingOf is where clock k takes an object that brought e, under the history
 // of the leg, given that it has come to date t unhurt.
-func (w *Workspace) readingOf(k int, j int, e, s0, s1, t float64) float64 {
+func (w *Workspace) readingOf(k, j int, p passage, e, s0, s1, t float64) float64 {
 	c := &w.c
-	b := w.past.at(k, c.birth[j])
+	b := w.past.in(p.birth, k, c.birth[j])
 	if c.died[j] == 0 {
 		return over(b, e, s1)
 	}
 	if c.death[j] > t {
 		return over(b, e, s0)
 	}
-	d := w.past.at(k, c.death[j])
+	d := w.past.in(p.death, k, c.death[j])
 	return over(d, e-s0*(d-b), s1)
 }
 
 // spareOf keeps what is left to an object that nothing can hit at date t.
-func (w *Workspace) spareOf(k int, j int, e, s0, s1, t float64) {
+func (w *Workspace) spareOf(k, j int, p passage, e, s0, s1 float64) {
 	c := &w.c
 	if s1 != 0 || w.stage[j] != 2 || c.died[j] == 0 || s0 == 0 {
 		return
 	}
-	b, d := w.past.at(k, c.birth[j]), w.past.at(k, c.death[j])
+	b, d := w.past.in(p.birth, k, c.birth[j]), w.past.in(p.death, k, c.death[j])
 	w.spare(k, uint32(j), e-s0*(d-b))
 }
 

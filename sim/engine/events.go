@@ -92,6 +92,7 @@ func (w *Workspace) enterStage(i uint32, stage int, t float64) error {
 	if matters {
 		w.count(i, +1)
 	}
+	w.meets.renew(w, i)
 	if !left {
 		for k := range w.m.Clocks {
 			w.respend(k, i, t)

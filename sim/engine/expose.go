@@ -1,5 +1,7 @@
 package engine
 
+import "wane/sim/law"
+
 // exposeAll asks the susceptibilities of both stages of every object and
 // fills the sums. In a compact run nothing is held: see enterQuiet.
 func (w *Workspace) exposeAll() error {
@@ -32,7 +34,7 @@ func (w *Workspace) exposeAll() error {
 		if m.sums[k] {
 			for i := range c.n {
 				w.env.add(m.slotSum(k), m.Weight*w.s[0][k][i])
-				if m.encounter != nil {
+				if m.Clocks[k].Fate == law.FateMeet {
 					w.env.add(m.slotSought(k), m.Weight*w.meets.sought(w, k, uint32(i)))
 				}
 			}

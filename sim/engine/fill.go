@@ -100,21 +100,33 @@ func (w *Workspace) fillOne(f *filling, i int) {
 	}
 }
 
-// boundSlack is what a bound on a ratio of rates allows beyond the present.
-const boundSlack = 1.05
+// What a bound on a ratio of rates allows beyond the present: little at first,
+// more once a bound has been broken, as that of collisions to ejections is
+// again and again while a galaxy contracts. After each such stretch fewer
+// objects are left to fill the clocks with. A ratio that breaks its bound too
+// often gets none.
+const (
+	boundSlack = 1.05
+	moreSlack  = 4
+	mostBreaks = 8
+)
 
 // setBounds chooses the bounds on ratios of rates: the present one with some
 // slack where the ratio falls as the number bound falls, none where it rises
-// or has broken its bound before.
+// or has broken its bounds too often.
 func (w *Workspace) setBounds() {
 	n := len(w.m.Clocks)
+	slack := boundSlack
+	if w.anyBroken {
+		slack = moreSlack
+	}
 	for j := range n {
 		for k := range n {
 			w.rho[j][k] = never
-			if j == k || w.broken[j][k] || w.env.Rates[k] == 0 {
+			if j == k || w.broken[j][k] >= mostBreaks || w.env.Rates[k] == 0 {
 				continue
 			}
-			w.rho[j][k] = w.ratioBound(j, k) * boundSlack
+			w.rho[j][k] = w.ratioBound(j, k) * slack
 			if w.fallsSlower(j, k) {
 				w.rho[j][k] = never
 			}
@@ -161,11 +173,13 @@ func (w *Workspace) proveBounds() error {
 				continue
 			}
 			if w.env.rate0[k] == 0 && w.env.rate0[j] > 0 || w.env.rate0[k] > 0 && w.ratioBound(j, k) > w.rho[j][k] {
-				w.broken[j][k], again = true, true
+				w.broken[j][k]++
+				again = true
 			}
 		}
 	}
 	if again {
+		w.anyBroken = true
 		return w.fillClocks()
 	}
 	return nil

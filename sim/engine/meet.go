@@ -46,6 +46,9 @@ func (x *meetings) grow(w *Workspace) {
 		x.s[stage] = grown(x.s[stage], len(w.m.Clocks))
 		for k := range x.s[stage] {
 			x.s[stage][k] = grown(x.s[stage][k], w.c.n)
+			if w.m.Clocks[k].Fate != law.FateMeet {
+				clear(x.s[stage][k]) // nobody is sought on it
+			}
 		}
 	}
 }
@@ -56,7 +59,9 @@ func (x *meetings) take(w *Workspace, stage, first int, r *rows) {
 		return
 	}
 	for k := range w.m.Clocks {
-		copy(x.s[stage][k][first:first+r.n], w.ask.soughts[k][:r.n])
+		if w.m.Clocks[k].Fate == law.FateMeet {
+			copy(x.s[stage][k][first:first+r.n], w.ask.soughts[k][:r.n])
+		}
 	}
 }
 
@@ -96,15 +101,20 @@ func (x *meetings) plant(w *Workspace) {
 	}
 }
 
-// count takes object i, as it is, into the trees (sign +1), or out of them.
-func (x *meetings) count(w *Workspace, i uint32, sign float64) {
+// renew takes in that object i, which is bound, has changed.
+func (x *meetings) renew(w *Workspace, i uint32) {
 	for k := range x.trees {
-		switch {
-		case w.m.Clocks[k].Fate != law.FateMeet:
-		case sign < 0:
-			x.trees[k].set(i, 0)
-		default:
+		if w.m.Clocks[k].Fate == law.FateMeet {
 			x.trees[k].set(i, x.sought(w, k, i))
+		}
+	}
+}
+
+// drop takes object i out of the trees.
+func (x *meetings) drop(w *Workspace, i uint32) {
+	for k := range x.trees {
+		if w.m.Clocks[k].Fate == law.FateMeet {
+			x.trees[k].set(i, 0)
 		}
 	}
 }
@@ -156,9 +166,10 @@ func (w *Workspace) settleOne(j uint32) {
 	at, _ := slices.BinarySearch(w.active, j)
 	w.active = slices.Insert(w.active, at, j)
 	w.stage[j] = w.stageAt(int(j), w.t)
+	p := w.passageOf(int(j), w.t)
 	for k := range w.m.Clocks {
 		e := w.c.reading[k][j]
-		w.c.reading[k][j] = w.readingOf(k, int(j), e, w.s[0][k][j], w.s[1][k][j], w.t)
+		w.c.reading[k][j] = w.readingOf(k, int(j), p, e, w.s[0][k][j], w.s[1][k][j], w.t)
 	}
 }
 

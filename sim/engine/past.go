@@ -38,8 +38,11 @@ func (x *past) piece(i, k int) (t, reading, rate float64) {
 }
 
 // at is what clock k showed at date t.
-func (x *past) at(k int, t float64) float64 {
-	t0, reading, rate := x.piece(x.find(t), k)
+func (x *past) at(k int, t float64) float64 { return x.in(x.find(t), k, t) }
+
+// in is what clock k showed at date t, which lies in piece i.
+func (x *past) in(i, k int, t float64) float64 {
+	t0, reading, rate := x.piece(i, k)
 	return reading + rate*(t-t0)
 }
 

@@ -40,6 +40,7 @@ func (w *Workspace) rejoin(ids []uint32, t float64) error {
 	}
 	for _, i := range ids {
 		w.count(i, +1)
+		w.meets.renew(w, i)
 		for k := range w.m.Clocks {
 			delete(w.spared[k], i)
 			c.reading[k][i] = over(w.readingAt(k, t), w.exponential(k, i, c.generation[i]), w.sus(k, i))

@@ -45,7 +45,8 @@ type Workspace struct {
 	feel          feeler
 	warmNodes     map[galaxy.Warmth][]nodeLine
 	rho           [maxClocks][maxClocks]float64
-	broken        [maxClocks][maxClocks]bool
+	broken        [maxClocks][maxClocks]uint8 // how often a bound in rho has not held
+	anyBroken     bool
 	checked       int
 	endAt         float64 // date before which no prospect ends a stage
 	endsScheduled bool
@@ -110,7 +111,7 @@ func (w *Workspace) begin() {
 		}
 	}
 	e.Founded(m.Weight * c.founded.value())
-	w.stoppedAt, w.broken = math.NaN(), [maxClocks][maxClocks]bool{}
+	w.stoppedAt, w.broken, w.anyBroken = math.NaN(), [maxClocks][maxClocks]uint8{}, false
 	w.t, w.base, w.bound, w.awaiting, w.events = 0, 0, c.n, 0, 0
 	clear(w.reading)
 	w.windowAt = never

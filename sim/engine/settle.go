@@ -34,6 +34,10 @@ func (w *Workspace) settle(t float64) error {
 			if steady || w.stage[j] == 0 && !w.compact {
 				continue
 			}
+			var p passage
+			if w.stage[j] != 0 {
+				p = w.passageOf(j, t)
+			}
 			for k := range m.Clocks {
 				e := c.reading[k][j]
 				if w.compact {
@@ -41,9 +45,9 @@ func (w *Workspace) settle(t float64) error {
 				}
 				if w.stage[j] != 0 {
 					if m.encounter != nil || c.chain != nil {
-						w.spareOf(k, j, e, s0[k][i], s1[k][i], t)
+						w.spareOf(k, j, p, e, s0[k][i], s1[k][i])
 					}
-					e = w.readingOf(k, j, e, s0[k][i], s1[k][i], t)
+					e = w.readingOf(k, j, p, e, s0[k][i], s1[k][i], t)
 				}
 				c.reading[k][j] = e
 			}

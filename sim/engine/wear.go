@@ -157,6 +157,7 @@ func (w *Workspace) wearStep() error {
 		w.lighten(i, before[j]-r.mass[j])
 		w.setSusceptibilities(i, s, w.ask.soughts, j)
 		w.count(i, +1)
+		w.meets.renew(w, i)
 		for k := range w.m.Clocks {
 			w.respend(k, i, t)
 		}
