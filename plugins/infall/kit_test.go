@@ -8,3 +8,7 @@ import (
 )
 
 func TestKitBranching(t *testing.T) { lawtest.Run(t, infall.Branching()) }
+
+func TestKitLossCone(t *testing.T) { lawtest.Run(t, infall.LossCone()) }
+
+func TestKitNone(t *testing.T) { lawtest.Run(t, infall.None()) }

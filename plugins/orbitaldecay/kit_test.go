@@ -8,3 +8,5 @@ import (
 )
 
 func TestKitPeters(t *testing.T) { lawtest.Run(t, orbitaldecay.Peters()) }
+
+func TestKitDysonEstimate(t *testing.T) { lawtest.Run(t, orbitaldecay.DysonEstimate()) }

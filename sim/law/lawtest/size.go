@@ -37,8 +37,11 @@ var sizes = []size{
 }
 
 // checkSize compares the median of each answer on plausible rows with what its
-// unit lets expect.
+// unit lets expect. A law that never acts has nothing to be of that size.
 func (k *kit) checkSize(q law.Question) {
+	if k.card.Idle {
+		return
+	}
 	rows := k.entries(q, 1000)
 	out, err := k.ask(q.Name, lay(q, rows))
 	if err != nil {

@@ -1,0 +1,9 @@
+package browndwarfcooling
+
+import (
+	"testing"
+
+	"wane/sim/law/lawtest"
+)
+
+func TestNone(t *testing.T) { lawtest.Run(t, None()) }
