@@ -24,10 +24,26 @@ type dateJSON struct {
 	Kind      string      `json:"kind"`
 	Source    string      `json:"source"`
 	Locator   string      `json:"locator"`
-	By        string      `json:"ours_by"`
+	By        howJSON     `json:"ours_by"`
 	Recorded  string      `json:"recorded_verdict"`
 	Expected  *float64    `json:"recorded_difference_dex"`
 	Reason    string      `json:"reason,omitempty"`
+}
+
+// howJSON is how ours comes about: by a question, or by a scenario.
+type howJSON struct {
+	Words      string   `json:"in_words"`
+	Law        string   `json:"law,omitempty"`
+	Question   string   `json:"question,omitempty"`
+	Given      []string `json:"given,omitempty"`
+	Answer     string   `json:"answer,omitempty"`
+	Scenario   string   `json:"scenario,omitempty"`
+	Laws       []string `json:"laws,omitempty"`
+	Set        []string `json:"set,omitempty"`
+	Population string   `json:"population,omitempty"`
+	Mark       string   `json:"mark,omitempty"`
+	Sky        string   `json:"sky,omitempty"`
+	Of         string   `json:"of,omitempty"`
 }
 
 // verifiedJSON is a date worked out.
@@ -50,7 +66,11 @@ type verifiedAllJSON struct {
 func dateOf(d verify.Date) dateJSON {
 	j := dateJSON{
 		Name: d.Name, Topic: d.Topic, What: d.What, Printed: d.Printed, Date: d.LogPrinted(), Counted: counted[d.Clock],
-		Tolerance: d.Tolerance, Kind: d.Kind, Source: d.Source, Locator: d.Locator, By: d.By(),
+		Tolerance: d.Tolerance, Kind: d.Kind, Source: d.Source, Locator: d.Locator,
+		By: howJSON{
+			Words: d.By(), Law: d.Law, Question: d.Question, Given: d.Given, Answer: d.Answer, Scenario: d.Scenario,
+			Laws: d.Laws, Set: d.Set, Population: d.Population, Mark: d.Mark, Sky: d.Sky, Of: d.Of,
+		},
 		Recorded: d.Verdict, Expected: d.Difference, Reason: d.Reason,
 	}
 	if low, high := d.LogSpan(); !math.IsNaN(low) {

@@ -33,8 +33,8 @@ const (
 
 // Kinds say how sure the printed value is.
 var Kinds = []string{
-	"published",   // printed in the source, and looked up
-	"from-memory", // printed in the source, quoted from memory
+	"published",   // printed in the source
+	"from-memory", // printed in the source, or said to be, but quoted from memory
 	"recomputed",  // worked out independently, from the source's formula
 }
 
@@ -214,19 +214,28 @@ func library() fs.FS {
 	return scenario.Layered(own, scenarios.FS)
 }
 
+// skyWords say in words what each date of a sky is.
+var skyWords = map[string]string{
+	"end":            "end of everything",
+	"horizon-shines": "relic radiation as cold as the horizon",
+	"colder":         "sky colder than a hole",
+	"lost":           "crossing of the event horizon",
+	"vacuum":         "one decay to be expected in the past light cone",
+}
+
 // By says in words how ours comes about.
 func (d *Date) By() string {
 	if d.Law != "" {
-		return d.Answer + " of: wane ask " + strings.Join(append([]string{d.Law}, d.Given...), " ")
+		return d.Answer + " in: wane ask " + strings.Join(append([]string{d.Law}, d.Given...), " ")
 	}
-	text := "a mark of a run: " + d.Mark + " of " + d.Population
+	text := d.Mark + " of " + d.Population + " in a run"
 	if d.Sky != "" {
-		text = "the sky: " + d.Sky
+		text = skyWords[d.Sky]
 		if d.Of != "" {
-			text += " of " + d.Of
+			text += ", for " + d.Of
 		}
 	}
-	text += ", scenario " + d.Scenario
+	text += "; scenario " + d.Scenario
 	if with := append(append([]string(nil), d.Laws...), d.Set...); len(with) > 0 {
 		text += " with " + strings.Join(with, ", ")
 	}
