@@ -5,6 +5,7 @@ import (
 	"testing"
 
 	"wane/sim/physics/imf"
+	"wane/sim/physics/stars"
 	"wane/testdata/published"
 )
 
@@ -52,6 +53,25 @@ func TestPublished(t *testing.T) {
 			row.Check(t, DirectHole(in("mass_Msun"), in("f")))
 		case "returned":
 			row.Check(t, 1-final(kroupa).all()/kroupa.Mean())
+		case "returned-chabrier":
+			c := imf.ChabrierSingle()
+			f, err := c.With(0.01, 120, c.Centre, c.Width, c.Slope)
+			if err != nil {
+				t.Fatal(err)
+			}
+			row.Check(t, 1-final(f).all()/f.Mean())
+		case "returned-salpeter":
+			f, err := imf.Salpeter(0.1, 120, imf.SalpeterSlope)
+			if err != nil {
+				t.Fatal(err)
+			}
+			row.Check(t, 1-final(f).all()/f.Mean())
+		case "ever-formed":
+			row.Check(t, galaxyObjects*kroupa.Mean())
+		case "rate-today":
+			row.Check(t, galaxyObjects*kroupa.Mean()/7e9*math.Exp(-(now-1e9)/7e9))
+		case "stars-today":
+			row.Check(t, galaxyObjects*starsToday(kroupa))
 		case "number-share-white-dwarf":
 			row.Check(t, between(0.075, Collapse))
 		case "number-share-brown-dwarf":
@@ -87,7 +107,7 @@ func (x left) all() float64 { return x.brown + x.dwarfs + x.neutron + x.holes }
 
 // final sums what the objects of a mass function leave: midpoints in steps of
 // number, finer towards the heavy end.
-func final(f imf.BrokenPowerLaw) (x left) {
+func final(f interface{ Quantile(u float64) float64 }) (x left) {
 	const n = 200000
 	for i := range n {
 		a, b := 1-float64(i)/n, 1-float64(i+1)/n
@@ -103,6 +123,31 @@ func final(f imf.BrokenPowerLaw) (x left) {
 		}
 	}
 	return x
+}
+
+// The default galaxy: objects, and its age, yr.
+const galaxyObjects, now = 2e11, 13.79e9
+
+// starsToday is the mass of the stars that live and of the remnants of those
+// that do not, per object ever formed; brown dwarfs are left out.
+func starsToday(f imf.BrokenPowerLaw) (sum float64) {
+	const n = 200000
+	lifetimes := stars.NewLifetimes()
+	born := func(before float64) float64 { return -math.Expm1(-max(before-1e9, 0) / 7e9) }
+	for i := range n {
+		a, b := 1-float64(i)/n, 1-float64(i+1)/n
+		w, m := a*a*a-b*b*b, f.Quantile(1-(a*a*a+b*b*b)/2)
+		if m < 0.075 {
+			continue
+		}
+		dead := born(now - math.Pow(10, lifetimes.Life(m, 0.1)))
+		rest := CummingsMean(m)
+		if m >= Collapse {
+			rest = NeutronStarChance(m)*NeutronStarMean + (1-NeutronStarChance(m))*Hole(m, 0.9)
+		}
+		sum += w * (m*(born(now)-dead) + rest*dead)
+	}
+	return sum
 }
 
 // weigh sums a chance over the stars that collapse, between the ends of the
