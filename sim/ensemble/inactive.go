@@ -18,6 +18,9 @@ func inactive(outcomes []engine.Outcome, info *Info) []Inactive {
 		if why == "" && (process.Role != law.Stellar || counted(outcomes, l.Process)) {
 			why = generalReason(process.Role)
 		}
+		if l.Process == "dark-energy-decay" {
+			why += ", or it found no dark energy"
+		}
 		switch {
 		case slices.Contains(info.Idle, l.Process) || l.Name == "none":
 			out = append(out, Inactive{l.Process, l.Name, "it is switched off"})

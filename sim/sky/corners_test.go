@@ -34,7 +34,7 @@ func TestEveryCorner(t *testing.T) {
 			}
 		}
 		for _, values := range settings {
-			for _, decay := range []float64{inf, 10.2, 11, 12.5, 40, 1000} {
+			for _, decay := range []float64{inf, 10.2, 11, 12.5, 20, 40, 1000} {
 				uses := []*law.Use{in(t, e.law, values)}
 				if decay < inf {
 					uses = append(uses, decaysAt(t, decay))
@@ -113,6 +113,9 @@ func TestDecayOfNothing(t *testing.T) {
 		plain := drawn(t, expanding(t, c.name, c.values))
 		for _, decay := range c.dates {
 			s := drawn(t, expanding(t, c.name, c.values), decaysAt(t, decay))
+			if got := s.DarkEnergyDecays(); got < inf && decay > 14 {
+				t.Errorf("%s %v: dark energy decays at 10^%v yr, of which there is none left", c.name, c.values, got)
+			}
 			for _, more := range []float64{1e-9, 1e-3, 0.1, 1, 3, 10, 100} {
 				l := decay + more
 				for what, pair := range map[string][2]float64{
@@ -126,8 +129,11 @@ func TestDecayOfNothing(t *testing.T) {
 			}
 		}
 	}
-	s := drawn(t, expanding(t, "decaying-dark-energy", map[string]float64{"half_life": 16}), decaysAt(t, 40))
-	for _, l := range []float64{39, 40.5, 139} {
+	s := drawn(t, expanding(t, "decaying-dark-energy", map[string]float64{"half_life": 16}), decaysAt(t, 20))
+	if got := s.DarkEnergyDecays(); got != 20 {
+		t.Errorf("decays at 10^%v yr, want 10^20", got)
+	}
+	for _, l := range []float64{40, 139} {
 		if got, want := s.LogFourVolume(l), 4*l+math.Log10(math.Pi/3); math.Abs(got-want) > 1e-6 {
 			t.Errorf("at rest, 10^%v yr: four-volume 10^%v, want 10^%v", l, got, want)
 		}

@@ -122,13 +122,19 @@ func (p *Prepared) Draw(seed, realisation uint64) (*Sky, error) {
 }
 
 // decay replaces what follows date by the sky after dark energy begins to
-// decay.
+// decay; nothing, where none is left that could.
 func (p *Prepared) decay(s *Sky, date float64) error {
 	e, err := newExpansion(p.set.Of(expansionProcess))
 	if err != nil {
 		return err
 	}
 	old := p.sky.pieces[0]
+	if x := old.lnA(date); !math.IsInf(x, 0) {
+		var now [1]density
+		if err := e.at([]where{{x: x, date: date, since: zero}}, now[:]); err != nil || now[0].dark == 0 {
+			return err
+		}
+	}
 	unit := math.Min(-old.hubble(date), date) // space may be at rest already
 	st := start{origin: date, unit: unit, s: unit - 7, x: old.lnA(date), logEta: old.comoving(date)}
 	for j := range st.logK {
