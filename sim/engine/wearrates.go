@@ -94,15 +94,21 @@ func (w *Workspace) entered(i uint32) float64 {
 
 // rowsOf tabulates bound objects as they now are.
 func (w *Workspace) rowsOf(ids []uint32) *rows {
-	c := &w.c
 	r := newRows(len(ids))
+	w.fillRows(r, ids)
+	return r
+}
+
+// fillRows is rowsOf into a table of its own.
+func (w *Workspace) fillRows(r *rows, ids []uint32) {
+	c := &w.c
 	r.resize(len(ids))
 	for j, i := range ids {
 		r.id[j], r.gen[j] = i, w.generationOf(i)
 		r.kind[j], r.place[j], r.origin[j] = w.kindOf(i), law.Bound, w.originOf(i)
 		r.mass[j], r.metals[j] = w.massOf(i), c.metalsOf(int(i))
 		r.birthMass[j] = r.mass[j]
-		if len(w.wear.born) > 0 && w.wear.known[i] == w.stage[i] {
+		if len(w.wear.known) > 0 && w.wear.known[i] == w.stage[i] {
 			r.birthMass[j] = w.wear.born[i]
 		}
 		switch s := w.stageOf(i); {
@@ -114,7 +120,6 @@ func (w *Workspace) rowsOf(ids []uint32) *rows {
 			r.comp[j] = c.chain[i][s-3].comp
 		}
 	}
-	return r
 }
 
 // wearRates sums what the wearing laws take from each row, per unit of time;
