@@ -24,8 +24,8 @@ func (w *Workspace) conclude() (*Outcome, error) {
 		}
 		o.EvaporationStarts, o.HeavyStarts = w.evaporationStarts(10), w.evaporationStarts(1e9)
 		o.SkyFloor = w.skyFloor()
-		if s, ok := w.sky.(interface{ Decays() float64 }); ok {
-			o.DarkEnergyDecays = s.Decays()
+		if s, ok := w.sky.(interface{ DarkEnergyDecays() float64 }); ok {
+			o.DarkEnergyDecays = s.DarkEnergyDecays()
 		}
 	}
 	if err := w.endCentral(o.End); err != nil {
