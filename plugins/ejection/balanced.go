@@ -27,6 +27,7 @@ func (balanced) Describe() law.Card {
 			"C is the reading of the clock relaxation, which advances by 1 per relaxation time and hits nobody",
 			"radius stops shrinking at zeta = 2 xi; above zeta = 7 xi/3 there is no end in finite time and N ~ t^-nu, nu = xi/(1.5 zeta - 3.5 xi)",
 			"only what ejection and infall carry off contracts the galaxy, not the mass that stars blow off (assumption)",
+			"while bound objects wear away the formula contracts it too, although a galaxy that slowly loses mass expands (unresolved)",
 		},
 		Accepts: law.Accepts{},
 		Questions: []law.Question{

@@ -110,6 +110,7 @@ func TestClosedForms(t *testing.T) {
 		closed func(x float64) float64
 	}{
 		{ejection.Contracting(), map[string]float64{"n_stop": 1e-3}, func(x float64) float64 { return dynamics.ContractingTime(x, xi) }},
+		{ejection.FixedRadius(), nil, func(x float64) float64 { return dynamics.FixedRadiusTime(x, xi) }},
 		{ejection.Balanced(), nil, func(x float64) float64 { return dynamics.BalancedTime(x, xi, 0.1) }},
 		{ejection.Balanced(), map[string]float64{"zeta": 0.05}, func(x float64) float64 { return dynamics.BalancedTime(x, xi, 0.05) }},
 		{ejection.Balanced(), map[string]float64{"zeta": 0}, func(x float64) float64 { return dynamics.ContractingTime(x, xi) }},
@@ -123,6 +124,44 @@ func TestClosedForms(t *testing.T) {
 			}
 			return x < 0.02
 		})
+	}
+}
+
+// TestFixedHalo follows the default galaxy in its halo, whose time scale is
+// 3.76e16 yr, down the closed form.
+func TestFixedHalo(t *testing.T) {
+	const xi = 1. / 140
+	var relaxation float64
+	for _, row := range published.Rows(t, "dynamics.csv") {
+		if row.Inputs["quantity"] == "relaxation" && row.Number(t, "number") == 2e11 {
+			relaxation = row.Value
+		}
+	}
+	history{law: ejection.FixedHalo(), n: 2e11, m: 0.218, r: 1e4, fineness: 4000}.until(t, func(years, number float64, answer law.Batch) bool {
+		x := number / 2e11
+		// Three digits are published.
+		if got, want := years/relaxation, dynamics.FixedHaloTime(x, xi); math.Abs(got/want-1) > 2e-3 {
+			t.Errorf("%.4f left after %.6g relaxation times, closed form %.6g", x, got, want)
+			return true
+		}
+		if v := answer.Values("dispersion")[0]; v != 200 {
+			t.Errorf("dispersion %v km/s, want 200", v)
+		}
+		return x < 0.005
+	})
+}
+
+// TestNone: nothing is hit, and the galaxy is where it was.
+func TestNone(t *testing.T) {
+	u := law.NewUse(ejection.None())
+	out, err := u.Ask("rate", law.Batch{Rows: 1, Columns: []law.Column{
+		law.Numbers("mass_bound", []float64{4e10}), law.Numbers("founded_radius", []float64{1e4}),
+	}})
+	if err != nil {
+		t.Fatal(err)
+	}
+	if rate := out.Values("log10_rate_ejection")[0]; !math.IsInf(rate, -1) || out.Values("radius")[0] != 1e4 {
+		t.Errorf("rate 10^%v /yr, radius %v pc", rate, out.Values("radius")[0])
 	}
 }
 

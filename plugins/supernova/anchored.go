@@ -25,7 +25,7 @@ func (anchored) Describe() law.Card {
 		Domain:  "white dwarfs from 1.16 solMass on; only the two ends are published, the line between is a guess; the date of the first is uncertain by hundreds of decades",
 		Sources: []string{"Caplan, M. E. 2020, Mon. Not. R. Astron. Soc. 497, 4357 (the two ends; masses from memory)"},
 		Notes: []string{
-			"the line between the ends and beyond the upper one, to 10^451 yr at 1.40 solMass, is an assumption",
+			"the line between the ends and beyond the upper one, to 10^453 yr at 1.40 solMass, is an assumption",
 			"rates of fusion on a cold lattice do not reproduce 10^1100 yr: at the centre of 1.35 solMass they give some 10^285 (law zero-temperature-lattice). Unresolved",
 			"lighter dwarfs stay stable as iron; process iron speaks for them, and its 10^1500 yr would be earlier than most dates here. Unresolved",
 			remains,

@@ -91,6 +91,23 @@ func TestColumnsOfTable(t *testing.T) {
 	}
 }
 
+// The straight line of Mestel's law and the law itself are one, and the curve
+// through a date joins it.
+func TestMestelCurve(t *testing.T) {
+	for _, m := range []float64{0.1, 0.6, 1.2} {
+		c, ions := NewMestelCurve(m, CarbonOxygenIons()), CarbonOxygenIons()
+		for _, l := range []float64{1, 1e-2, 1e-4, 1e-9} {
+			age := math.Log10(MestelAge(l, m, ions.A, ions.A/ions.Z))
+			if got, want := c.Temperature(age), math.Log10(temperatureAt(l, m)); math.Abs(got-want) > 1e-12 {
+				t.Errorf("%v solar masses at %v solar luminosities: 10^%v K, want 10^%v", m, l, got, want)
+			}
+			if got := c.TemperatureThrough(age, 15); l >= 1e-4 && math.Abs(got-c.Temperature(age)) > 1e-12 {
+				t.Errorf("%v solar masses at %v solar luminosities: through a date 10^%v K, want 10^%v", m, l, got, c.Temperature(age))
+			}
+		}
+	}
+}
+
 // Curves only fall, start where they say, and follow T ~ t^-1/2 at the end,
 // to ages far beyond float64's range of years.
 func TestCurvesFall(t *testing.T) {

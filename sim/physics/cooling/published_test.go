@@ -44,6 +44,11 @@ func TestPublished(t *testing.T) {
 		case "latent-delay":
 			with, without := dwarf(DefaultEnvelope().Latent), dwarf(0)
 			row.Check(t, math.Log10(with.Age(in("T_K"))/without.Age(in("T_K"))))
+		case "mestel-log10-age":
+			row.Check(t, ageAt(math.Log10(in("T_K")), NewMestelCurve(in("mass_Msun"), ions()).Temperature))
+		case "barrow-tipler-log10-age":
+			curve := NewMestelCurve(in("mass_Msun"), ions())
+			row.Check(t, ageAt(math.Log10(in("T_K")), func(age float64) float64 { return curve.TemperatureThrough(age, 15) }))
 		case "neutron-star-log10-age":
 			row.Check(t, ageAt(math.Log10(in("T_K")), stars.Temperature))
 		case "brown-dwarf-temperature":

@@ -40,6 +40,8 @@ func TestPublished(t *testing.T) {
 			row.Check(t, BalancedExponent(number("xi"), number("zeta")))
 		case "influence":
 			row.Check(t, InfluenceRadius(number("mass_Msun"), number("speed_km_s")))
+		case "loss-cone-log10-rate":
+			row.Check(t, Log10LossConeRate(4.3e6, number("mass_Msun"), number("speed_km_s"), number("radius_pc"), 1e11))
 		case "swallow":
 			row.Check(t, SwallowMass(number("mass_Msun"), number("radius_pc")*constant.Parsec/1e3))
 		default:

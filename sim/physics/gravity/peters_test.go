@@ -19,6 +19,13 @@ func TestPublished(t *testing.T) {
 			row.Check(t, Shortening(number("eccentricity")))
 		case "merger":
 			row.Check(t, math.Pow(10, Log10MergerTime(number("mass_1_Msun"), number("mass_2_Msun"), number("separation_AU"), number("eccentricity"))))
+		case "fifth-power":
+			row.Check(t, math.Pow(10, Log10FifthPowerTime(number("mass_1_Msun"), number("mass_2_Msun"), number("separation_AU"))))
+		case "fifth-power-log10":
+			row.Check(t, Log10FifthPowerTime(number("mass_1_Msun"), number("mass_2_Msun"), number("separation_AU")))
+		case "log10-underestimate":
+			m1, m2, a := number("mass_1_Msun"), number("mass_2_Msun"), number("separation_AU")
+			row.Check(t, Log10CircularTime(m1, m2, a)-Log10FifthPowerTime(m1, m2, a))
 		case "power":
 			row.Check(t, Power(number("mass_1_Msun"), number("mass_2_Msun"), number("separation_AU")))
 		default:

@@ -27,6 +27,8 @@ func TestPublished(t *testing.T) {
 			m := in("mass_Msun")
 			x := math.Pow(1.459/m, 2.0/3)
 			row.Check(t, 0.01125*constant.SunR/1e3*math.Sqrt(x-1/x)/WhiteDwarfRadius(m)-1)
+		case "relativistic-peak":
+			row.Check(t, RelativisticPeak(in("mu_e")))
 		case "hole-radius":
 			row.Check(t, HoleRadius(in("mass_Msun")))
 		case "star-radius":
@@ -58,6 +60,25 @@ func TestAgainstStructureEquation(t *testing.T) {
 	}
 	if limit := reference.Python(t, "testdata/structure.py")[0][0]; math.Abs(LimitingMass(2)/limit-1) > 1e-7 {
 		t.Errorf("limiting mass is %.9g, SciPy says %.9g", LimitingMass(2), limit)
+	}
+}
+
+// The greatest mass in general relativity against SciPy, which integrates in
+// another variable.
+func TestRelativisticPeakAgainstSciPy(t *testing.T) {
+	mus := []float64{2, 56. / 26, 2.4}
+	var args []string
+	for _, mu := range mus {
+		args = append(args, fmt.Sprint(mu))
+	}
+	for i, want := range reference.Python(t, "testdata/relativistic.py", args...) {
+		got := RelativisticPeak(mus[i])
+		if math.Abs(got/want[0]-1) > 1e-5 {
+			t.Errorf("mu_e = %v: peak at %.8g, SciPy says %.8g", mus[i], got, want[0])
+		}
+		if limit := LimitingMass(mus[i]); !(got < limit) || got < 0.95*limit {
+			t.Errorf("mu_e = %v: peak at %v, Newton's limit is %v", mus[i], got, limit)
+		}
 	}
 }
 
