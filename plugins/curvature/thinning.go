@@ -47,6 +47,7 @@ func newThinning(card law.Card, shape func(pairs.Body) pairs.Body) law.Law {
 		"kappa follows from the statement that whatever is denser than 3e53 g/cm3 would be gone in 13.8e9 yr; the formula's own coefficient was not read",
 		"the published 1e78 yr of white dwarfs belongs to 2e8 g/cm3, the dense end; mean densities of real masses give 1e79 to 1e82 yr",
 		"a neutron star below its least mass becomes a relic, a ball of iron, which thins as white dwarfs do (assumption)",
+		"beside decaying nucleons the losses add up, and a body is gone at the larger of the two laws' masses for gone: change both together",
 		"nothing stays as heat (assumption)")
 	card.Questions = []law.Question{{Name: "wear", Inputs: reads}, {Name: "foretell", Inputs: reads}}
 	card.Parameters = []law.Parameter{

@@ -19,7 +19,7 @@ type asker struct {
 
 	sub, alone, rest   *rows // gathered rows
 	pick, pick2, pick3 []int32
-	nodes              rows
+	nodes              nodes
 	view               rows // of the galaxy's columns
 	constants          constantColumns
 	offers             []prospect

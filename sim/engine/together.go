@@ -17,7 +17,23 @@ const (
 	// dust: a threshold of zero is reached at this part of the starting mass.
 	// What is left would take a time smaller by its cube or more.
 	dust = 1e-25
+	// faint: log10 of a rate below which sums are taken in logarithms.
+	faint = -290
 )
+
+// nodes are those of one way from mass to mass, with room that is used again.
+type nodes struct {
+	rows          rows
+	weights, rate []float64
+}
+
+// lowEnd is the mass to which a way to mass to is followed.
+func lowEnd(from, to float64) float64 {
+	if to > 0 {
+		return to
+	}
+	return from * dust
+}
 
 // wornTogether takes the integral of dM over the summed rates for rows that
 // more than one wearing law speaks for.
@@ -90,6 +106,10 @@ func (a *asker) integrate(r *rows, row int, acting []int, since float64) (prospe
 		}
 		crossed.date = later(date, wait)
 		if crossed.date <= next {
+			if w, err = a.foremost(r, row, w, now, mass, target); err != nil {
+				return prospect{}, err
+			}
+			crossed.cause = a.m.thresholds[w][r.kind[row]].cause
 			return crossed, nil
 		}
 		if mass, err = a.massAfter(r, row, now, mass, target, num.Sub10(next, date)); err != nil {
@@ -115,42 +135,102 @@ func (a *asker) wearTime(r *rows, row int, acting []int, m0, m1 float64) (float6
 	if len(acting) == 0 {
 		return never, nil
 	}
-	floor := max(m1, m0*dust)
-	span := num.Log(m0 / floor)
+	t := &a.nodes
+	t.lay(r, row, m0, lowEnd(m0, m1))
+	clear(t.rate)
+	least := math.Inf(1)
+	for _, v := range acting {
+		out, err := a.ask(a.m.wearing[v], "wear", &t.rows, drawU)
+		if err != nil {
+			return 0, err
+		}
+		for i, l := range out.Columns[0].Values {
+			t.rate[i] += num.Exp10(l)
+			if l > -never {
+				least = min(least, l)
+			}
+		}
+	}
+	if least < faint {
+		return a.faintTime(acting)
+	}
+	sum := 0.0
+	for i, x := range t.rate {
+		if x == 0 {
+			return never, nil
+		}
+		sum += t.weights[i] * t.rows.mass[i] / x
+	}
+	return num.Log10(sum), nil
+}
+
+// lay puts the nodes between two masses of an object.
+func (t *nodes) lay(r *rows, row int, m0, m1 float64) {
+	span := num.Log(m0 / m1)
 	panels := max(1, int(math.Ceil(span/panelWidth)))
 	n := panels * nodesAPanel
-	t := &a.nodes
-	t.resize(n)
-	weights := make([]float64, n)
+	t.rows.resize(n)
+	t.weights, t.rate = grown(t.weights, n), grown(t.rate, n)
 	var x, w [nodesAPanel]float64
 	quad.Legendre{}.FixedLocations(x[:], w[:], 0, 1)
 	width := span / float64(panels)
 	for p := range panels {
 		for k := range nodesAPanel {
 			i := p*nodesAPanel + k
-			t.copyRow(i, r, row)
-			t.mass[i] = m0 * num.Exp(-width*(float64(p)+x[k]))
-			weights[i] = width * w[k]
+			t.rows.copyRow(i, r, row)
+			t.rows.mass[i] = m0 * num.Exp(-width*(float64(p)+x[k]))
+			t.weights[i] = width * w[k]
 		}
 	}
-	rate := make([]float64, n)
+}
+
+// faintTime is wearTime over the nodes as laid, for rates that may be too small
+// for a float64.
+func (a *asker) faintTime(acting []int) (float64, error) {
+	t := &a.nodes
+	fill(t.rate, -never)
 	for _, v := range acting {
-		out, err := a.ask(a.m.wearing[v], "wear", t, drawU)
+		out, err := a.ask(a.m.wearing[v], "wear", &t.rows, drawU)
 		if err != nil {
 			return 0, err
 		}
 		for i, l := range out.Columns[0].Values {
-			rate[i] += num.Exp10(l)
+			t.rate[i] = num.Add10(t.rate[i], l)
 		}
 	}
-	sum := math.Inf(-1)
-	for i := range n {
-		if rate[i] == 0 {
+	sum := -never
+	for i, l := range t.rate {
+		if l == -never {
 			return never, nil
 		}
-		sum = num.Add10(sum, num.Log10(weights[i]*t.mass[i])-num.Log10(rate[i]))
+		sum = num.Add10(sum, num.Log10(t.weights[i]*t.rows.mass[i])-l)
 	}
 	return sum, nil
+}
+
+// foremost is which of the acting laws is said to have taken an object over the
+// threshold of law w: of those with a threshold of that kind which makes the
+// same of it, the one that wears it fastest there.
+func (a *asker) foremost(r *rows, row, w int, acting []int, from, target float64) (int, error) {
+	kind := r.kind[row]
+	one := &a.nodes.rows
+	fastest := -never
+	for _, v := range acting {
+		if t := a.m.thresholds[v][kind]; !t.applies || t.kind != a.m.thresholds[w][kind].kind {
+			continue
+		}
+		one.resize(1)
+		one.copyRow(0, r, row)
+		one.mass[0] = lowEnd(from, target)
+		out, err := a.ask(a.m.wearing[v], "wear", one, drawU)
+		if err != nil {
+			return 0, err
+		}
+		if l := out.Columns[0].Values[0]; l > fastest {
+			fastest, w = l, v
+		}
+	}
+	return w, nil
 }
 
 // massAfter inverts wearTime: the mass left after 10^wait yr, between m1 and m0.
@@ -158,7 +238,7 @@ func (a *asker) massAfter(r *rows, row int, acting []int, m0, m1, wait float64) 
 	if len(acting) == 0 || wait == math.Inf(-1) {
 		return m0, nil
 	}
-	low, high := num.Log(max(m1, m0*dust)), num.Log(m0)
+	low, high := num.Log(lowEnd(m0, m1)), num.Log(m0)
 	for range 60 {
 		mid := 0.5 * (low + high)
 		t, err := a.wearTime(r, row, acting, m0, num.Exp(mid))

@@ -132,7 +132,8 @@ func (g *run) wornOut(r row, acting []*law.Use, since float64) (prospect, error)
 			return none, err
 		}
 		if p.date = later(date, wait); p.date <= change {
-			return p, nil
+			p.cause, err = g.foremost(r, now, t, p.cause, lowEnd(mass, target))
+			return p, err
 		}
 		if mass, err = g.massAfter(r, now, mass, target, num.Sub10(change, date)); err != nil {
 			return none, err
@@ -154,6 +155,28 @@ func (g *run) start(u *law.Use, r row) (float64, error) {
 	return g.sky.LogColderSince(out.Columns[0].Values[0]), nil
 }
 
+// foremost is the cause of crossing a threshold under several laws: of those
+// with a threshold of that kind which makes the same of the object, the one
+// that wears it fastest there.
+func (g *run) foremost(r row, acting []*law.Use, crossed law.Threshold, cause Cause, mass float64) (Cause, error) {
+	r.mass = mass
+	fastest := -never
+	for _, u := range acting {
+		t, _, ok := g.thresholdOf(u, r.kind)
+		if !ok || t.Becomes != crossed.Becomes {
+			continue
+		}
+		out, err := g.ask(u, "wear", r, drawU)
+		if err != nil {
+			return cause, err
+		}
+		if l := out.Columns[0].Values[0]; l > fastest {
+			fastest, cause = l, Cause{u.Card.Process, t.Outcome}
+		}
+	}
+	return cause, nil
+}
+
 // The nodes of the integral, which are part of the model: Gauss-Legendre in ln
 // M, twelve to a panel, panels of at most a factor of two, down to 1e-25 of
 // the starting mass where the threshold is zero.
@@ -162,11 +185,18 @@ const (
 	dust  = 1e-25
 )
 
+func lowEnd(from, to float64) float64 {
+	if to > 0 {
+		return to
+	}
+	return from * dust
+}
+
 func (g *run) wearTime(r row, acting []*law.Use, from, to float64) (float64, error) {
 	if len(acting) == 0 {
 		return never, nil
 	}
-	span := num.Log(from / max(to, from*dust))
+	span := num.Log(from / lowEnd(from, to))
 	panels := max(1, int(math.Ceil(span/math.Ln2)))
 	x, w := make([]float64, nodes), make([]float64, nodes)
 	quad.Legendre{}.FixedLocations(x, w, 0, 1)
@@ -179,24 +209,24 @@ func (g *run) wearTime(r row, acting []*law.Use, from, to float64) (float64, err
 			if err != nil {
 				return 0, err
 			}
-			if rate == 0 {
+			if rate == -never {
 				return never, nil
 			}
-			sum = num.Add10(sum, num.Log10(width*w[k]*r.mass/rate))
+			sum = num.Add10(sum, num.Log10(width*w[k]*r.mass)-rate)
 		}
 	}
 	return sum, nil
 }
 
-// wearRate is what the laws take from an object, solMass per yr.
+// wearRate is log10 of what the laws take from an object, solMass per yr.
 func (g *run) wearRate(r row, acting []*law.Use) (float64, error) {
-	rate := 0.0
+	rate := -never
 	for _, u := range acting {
 		out, err := g.ask(u, "wear", r, drawU)
 		if err != nil {
 			return 0, err
 		}
-		rate += num.Exp10(out.Columns[0].Values[0])
+		rate = num.Add10(rate, out.Columns[0].Values[0])
 	}
 	return rate, nil
 }
@@ -206,7 +236,7 @@ func (g *run) massAfter(r row, acting []*law.Use, from, to, wait float64) (float
 	if len(acting) == 0 || math.IsInf(wait, -1) {
 		return from, nil
 	}
-	low, high := num.Log(max(to, from*dust)), num.Log(from)
+	low, high := num.Log(lowEnd(from, to)), num.Log(from)
 	for range 60 {
 		mid := (low + high) / 2
 		t, err := g.wearTime(r, acting, from, num.Exp(mid))

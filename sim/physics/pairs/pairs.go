@@ -28,7 +28,10 @@ const Kappa = 3.5
 
 // PlanetLike is the mass, Msun, below which a body is as dense as its solid or
 // liquid matter, whatever its mass.
-const PlanetLike = 1e-3
+const (
+	PlanetLike      = 1e-3
+	log10PlanetLike = -3
+)
 
 // Log10Life is the time on which a body of some mean density loses mass.
 //
@@ -57,6 +60,8 @@ type Body struct {
 	Log10Life float64 // of the density at birth, log10 yr
 	Birth     float64 // solar masses
 	Power     float64 // 0 for a density that stays what it was
+
+	log10Birth float64
 }
 
 // How tau grows as mass falls: with rho as M^2 for matter that degenerate
@@ -70,7 +75,7 @@ const (
 // at PlanetLike, below which density does not change.
 func body(birth, kappa, power float64, radius func(float64) float64) Body {
 	birth = math.Max(birth, PlanetLike)
-	return Body{Log10Life(structure.MeanDensity(birth, radius(birth)), kappa), birth, power}
+	return Body{Log10Life(structure.MeanDensity(birth, radius(birth)), kappa), birth, power, num.Log10(birth)}
 }
 
 // WhiteDwarf is a cold white dwarf born with a mass.
@@ -102,7 +107,7 @@ func (b Body) swollen(m float64) float64 {
 	if b.Power == 0 {
 		return 0
 	}
-	return b.Power * (num.Log10(b.Birth) - num.Log10(math.Max(m, PlanetLike)))
+	return b.Power * (b.log10Birth - num.Log10(math.Max(m, PlanetLike)))
 }
 
 // Log10LossRate returns how fast the body loses mass when it has mass m.
@@ -115,7 +120,11 @@ func (b Body) Log10LossRate(m float64) float64 {
 	if !(m > 0) {
 		return math.Inf(-1)
 	}
-	return num.Log10(m) - b.Log10Life - b.swollen(m)
+	log10M := num.Log10(m)
+	if b.Power == 0 {
+		return log10M - b.Log10Life
+	}
+	return log10M - b.Log10Life - b.Power*(b.log10Birth-math.Max(log10M, log10PlanetLike))
 }
 
 // Log10Wait returns how long the body takes from mass m to mass end.
