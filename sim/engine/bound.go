@@ -42,7 +42,7 @@ func (w *Workspace) coded(t float64) float64 {
 // reach of others.
 func (w *Workspace) subtract(i uint32) {
 	w.count(i, -1)
-	w.meets.drop(w, i)
+	w.meets.tree.drop(i)
 }
 
 // count adds sign times object i to the galaxy values.

@@ -32,10 +32,10 @@ type columns struct {
 	// chain holds what follows a prospect that does not end the object.
 	chain map[uint32][]link
 
-	// origin, nil when nothing merges. generation is that of the thresholds.
+	// All three nil when nothing merges. generation is that of the thresholds.
 	origin     []uint8
-	generation map[uint32]uint32
-	continued  map[uint32]bool // its entry into the first stage is in the journal
+	generation []uint32
+	continued  []bool // its entry into the first stage is in the journal
 
 	// gas holds the mass that goes to gas when a turning law takes an object,
 	// by object and step; see noteGas.
@@ -81,13 +81,15 @@ func (c *columns) resize(m *Model, n int) {
 	for k := range m.Clocks {
 		c.reading[k] = grown(c.reading[k], n)
 	}
-	c.chain, c.generation, c.continued, c.gas = nil, nil, nil, nil
+	c.chain, c.gas = nil, nil
 	c.immortal = false
 	c.lastDeath, c.earliest, c.founded, c.wearAt, c.wearStep = 0, never, compensated{}, never, never
 	if m.encounter != nil {
 		c.origin = grown(c.origin, n)
 		clear(c.origin)
-		c.generation, c.continued = map[uint32]uint32{}, map[uint32]bool{}
+		c.generation, c.continued = grown(c.generation, n), grown(c.continued, n)
+		clear(c.generation)
+		clear(c.continued)
 	}
 }
 
@@ -125,7 +127,7 @@ func (c *columns) noteGas(i uint32, step int, p prospect) {
 
 // generationOf is the generation of object i's draws in its present stage.
 func (w *Workspace) generationOf(i uint32) uint32 {
-	g := w.c.generation[i]
+	g := w.thresholdGeneration(i)
 	s := w.stageOf(i)
 	if s >= 2 && w.c.died[i] != 0 {
 		g++
@@ -137,7 +139,12 @@ func (w *Workspace) generationOf(i uint32) uint32 {
 }
 
 // thresholdGeneration is the generation in which its thresholds were drawn.
-func (w *Workspace) thresholdGeneration(i uint32) uint32 { return w.c.generation[i] }
+func (w *Workspace) thresholdGeneration(i uint32) uint32 {
+	if w.c.generation == nil {
+		return 0
+	}
+	return w.c.generation[i]
+}
 
 func (w *Workspace) originOf(i uint32) uint8 {
 	if w.c.origin == nil {

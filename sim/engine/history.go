@@ -40,7 +40,7 @@ func (w *Workspace) each(i uint32, dates [3]float64, limit float64, f func(date 
 	if dates[0] > limit {
 		return stateGone
 	}
-	if !c.continued[i] {
+	if c.continued == nil || !c.continued[i] {
 		f(dates[0], stateGone, now, 0)
 	}
 	place := uint8(law.Bound)

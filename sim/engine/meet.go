@@ -11,10 +11,22 @@ import (
 // meetings are the encounters of one realisation.
 type meetings struct {
 	s       [2][][]float64 // what is sought of each object, by stage and clock
-	trees   []soughtTree   // by clock: of the bound objects as they are
+	tree    soughtTree     // of the bound objects as they are
+	clocks  []int          // of encounters, by column of the tree
+	column  [maxClocks]int // the other way round
 	pairs   []pair
 	journal []transition
 	stays   []stay // of lives that are in the journal
+
+	// Memory of resolve.
+	resolved  []pair
+	ids       [2][]uint32
+	both      [2]rows
+	columns   []law.Column
+	arena     law.Arena
+	back      []uint32
+	products  rows
+	prospects []prospect
 }
 
 // pair is two objects waiting for a refresh.
@@ -83,39 +95,36 @@ func (x *meetings) sought(w *Workspace, k int, i uint32) float64 {
 	}
 }
 
-// plant readies the trees before the first event: all are bound, and sought as
+// plant readies the tree before the first event: all are bound, and sought as
 // in their first stage. Who is not born when it is picked is passed over.
 func (x *meetings) plant(w *Workspace) {
-	if w.m.encounter == nil {
+	if w.m.encounter == nil || w.c.n == 0 {
 		return
 	}
-	if len(x.trees) == 0 {
-		x.trees = make([]soughtTree, len(w.m.Clocks))
-	}
-	for k := range x.trees {
-		if w.m.Clocks[k].Fate == law.FateMeet && w.c.n > 0 {
-			x.trees[k].resize(w.c.n)
-			copy(x.trees[k].levels[0], x.s[0][k])
-			x.trees[k].build()
+	x.clocks = x.clocks[:0]
+	for k := range w.m.Clocks {
+		if w.m.Clocks[k].Fate == law.FateMeet {
+			x.column[k] = len(x.clocks)
+			x.clocks = append(x.clocks, k)
 		}
 	}
+	n := len(x.clocks)
+	if n == 0 {
+		return
+	}
+	x.tree.resize(w.c.n, n)
+	for column, k := range x.clocks {
+		for i, v := range x.s[0][k] {
+			x.tree.levels[0][i*n+column] = v
+		}
+	}
+	x.tree.build()
 }
 
 // renew takes in that object i, which is bound, has changed.
 func (x *meetings) renew(w *Workspace, i uint32) {
-	for k := range x.trees {
-		if w.m.Clocks[k].Fate == law.FateMeet {
-			x.trees[k].set(i, x.sought(w, k, i))
-		}
-	}
-}
-
-// drop takes object i out of the trees.
-func (x *meetings) drop(w *Workspace, i uint32) {
-	for k := range x.trees {
-		if w.m.Clocks[k].Fate == law.FateMeet {
-			x.trees[k].set(i, 0)
-		}
+	for column, k := range x.clocks {
+		x.tree.set(i, column, x.sought(w, k, i))
 	}
 }
 
@@ -131,12 +140,12 @@ func (w *Workspace) bornBy(i uint32) bool {
 // meet lets object i, whose clock k has fired, find a partner.
 func (w *Workspace) meet(k int, i uint32, t float64) error {
 	x := &w.meets
-	tree := &x.trees[k]
+	column := x.column[k]
 	gen := w.generationOf(i)
-	if total := tree.total(); total > 0 && w.bound > 1 {
+	if total := x.tree.total(column); total > 0 && w.bound > 1 {
 		stream := w.ask.streams[w.m.Clocks[k].Process]
 		for try := range uint32(maxTries) {
-			j, ok := tree.pick(stream.Uniform(uint64(i), gen, drawSeek+try) * total)
+			j, ok := x.tree.pick(column, stream.Uniform(uint64(i), gen, drawSeek+try)*total)
 			if !ok || j == i || w.stage[j]&waiting != 0 || !w.bornBy(j) {
 				continue
 			}
@@ -175,14 +184,15 @@ func (w *Workspace) settleOne(j uint32) {
 
 // resolve asks meet about all waiting pairs and brings in what comes of them.
 func (w *Workspace) resolve(t float64) error {
-	pairs := append([]pair(nil), w.meets.pairs...)
-	w.meets.pairs, w.awaiting = w.meets.pairs[:0], 0
+	x := &w.meets
+	pairs := append(x.resolved[:0], x.pairs...)
+	x.resolved, x.pairs, w.awaiting = pairs, x.pairs[:0], 0
 	out, err := w.askMeet(pairs)
 	if err != nil {
 		return err
 	}
 	u := w.m.encounter
-	var back []uint32
+	back := x.back[:0]
 	for p, pr := range pairs {
 		word := u.Card.Outcomes[out.Columns[0].Words[p]].Word
 		cause := w.m.cause(u.Card.Process, word)
@@ -210,6 +220,7 @@ func (w *Workspace) resolve(t float64) error {
 			}
 		}
 	}
+	x.back = back
 	if len(back) == 0 {
 		return nil
 	}
@@ -224,12 +235,17 @@ func (w *Workspace) words(i uint32) string {
 // askMeet asks about pairs, one row each.
 func (w *Workspace) askMeet(pairs []pair) (law.Batch, error) {
 	u := w.m.encounter
-	var ids [2][]uint32
+	x := &w.meets
+	x.ids[0], x.ids[1] = x.ids[0][:0], x.ids[1][:0]
 	for _, p := range pairs {
-		ids[0], ids[1] = append(ids[0], p.seeker), append(ids[1], p.partner)
+		x.ids[0], x.ids[1] = append(x.ids[0], p.seeker), append(x.ids[1], p.partner)
 	}
-	both := [2]*rows{w.rowsOf(ids[0]), w.rowsOf(ids[1])}
-	in := law.Batch{Rows: len(pairs)}
+	for side := range x.both {
+		w.fillRows(&x.both[side], x.ids[side])
+	}
+	w.ask.arena.Reset()
+	x.arena.Reset()
+	x.columns = x.columns[:0]
 	for _, name := range inputsOf(u, "meet") {
 		base, side := name, 0
 		if s, ok := strings.CutSuffix(name, "_1"); ok {
@@ -237,9 +253,9 @@ func (w *Workspace) askMeet(pairs []pair) (law.Batch, error) {
 		} else if s, ok := strings.CutSuffix(name, "_2"); ok {
 			base, side = s, 1
 		}
-		in.Columns = append(in.Columns, w.ask.column(u, name, base, both[side], drawMeet))
+		x.columns = append(x.columns, w.ask.column(u, name, base, &x.both[side], drawMeet))
 	}
-	return u.Ask("meet", in)
+	return u.Ask("meet", law.Batch{Rows: len(pairs), Columns: x.columns}.With(&x.arena))
 }
 
 // meetOne ends the present life of an object that has met another, and begins
@@ -262,8 +278,10 @@ func (w *Workspace) meetOne(i uint32, date float64, cause, kind uint8, mass floa
 		c.origin[i] = law.Merged
 	}
 	delete(w.wear.worn, i)
-	for step := range uint32(longestChain + 2) {
-		delete(c.gas, [2]uint32{i, step})
+	if len(c.gas) > 0 {
+		for step := range uint32(longestChain + 2) {
+			delete(c.gas, [2]uint32{i, step})
+		}
 	}
 	c.generation[i] = (w.generationOf(i)/mergerGeneration + 1) * mergerGeneration
 	c.kind0[i], c.mass0[i] = kind, mass

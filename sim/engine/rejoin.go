@@ -8,7 +8,8 @@ import (
 // rejoin founds the lives of products and puts them on the clocks at date t.
 func (w *Workspace) rejoin(ids []uint32, t float64) error {
 	c, a := &w.c, w.ask
-	r := w.rowsOf(ids)
+	r := &w.meets.products
+	w.fillRows(r, ids)
 	for j, i := range ids {
 		r.kind[j], r.mass[j], r.comp[j], r.birthMass[j] = c.kind0[i], c.mass0[i], c.comp1[i], c.mass0[i]
 		r.gen[j] = c.generation[i]
@@ -189,7 +190,8 @@ func (w *Workspace) reprospect(ids []uint32, r *rows) error {
 	if err != nil {
 		return err
 	}
-	ps = append([]prospect(nil), ps...)
+	ps = append(w.meets.prospects[:0], ps...)
+	w.meets.prospects = ps
 	for j, p := range ps {
 		c.end[ids[j]], c.ended[ids[j]] = p.date, p.cause
 		c.noteGas(ids[j], 0, p)

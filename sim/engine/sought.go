@@ -3,21 +3,24 @@ package engine
 // groupSize is how many are summed up into one at each level.
 const groupSize = 64
 
-// soughtTree holds how much one clock seeks each bound object, with sums over
-// groups of objects, groups of groups and so on, so that one change and one pick
-// cost little however many objects there are.
+// soughtTree holds how much each clock of encounters seeks each bound object,
+// with sums over groups of objects, groups of groups and so on, so that one
+// change and one pick cost little however many objects there are. What belongs
+// to one object or group lies side by side, a column a clock.
 type soughtTree struct {
-	levels [][]float64 // the first by object
+	columns int
+	levels  [][]float64 // the first by object
 }
 
 // resize makes room for n objects. What the levels hold is arbitrary.
-func (x *soughtTree) resize(n int) {
+func (x *soughtTree) resize(n, columns int) {
+	x.columns = columns
 	at := 0
 	for {
 		if at == len(x.levels) {
 			x.levels = append(x.levels, nil)
 		}
-		x.levels[at] = grown(x.levels[at], n)
+		x.levels[at] = grown(x.levels[at], n*columns)
 		at++
 		if n <= groupSize {
 			break
@@ -30,50 +33,68 @@ func (x *soughtTree) resize(n int) {
 // build sums up what the first level holds.
 func (x *soughtTree) build() {
 	for l := 1; l < len(x.levels); l++ {
-		below := x.levels[l-1]
-		for g := range x.levels[l] {
-			sum := 0.0
-			for _, v := range below[g*groupSize : min((g+1)*groupSize, len(below))] {
-				sum += v
+		below, level := x.levels[l-1], x.levels[l]
+		clear(level)
+		group := groupSize * x.columns
+		for g := 0; g < len(level); g += x.columns {
+			sums := level[g : g+x.columns]
+			from := g * groupSize
+			for i, v := range below[from:min(from+group, len(below))] {
+				sums[i%x.columns] += v
 			}
-			x.levels[l][g] = sum
 		}
 	}
 }
 
-// set changes how much object i is sought.
-func (x *soughtTree) set(i uint32, weight float64) {
-	by := weight - x.levels[0][i]
+// set changes how much object i is sought by the clock of a column.
+func (x *soughtTree) set(i uint32, column int, weight float64) {
+	leaf := &x.levels[0][int(i)*x.columns+column]
+	by := weight - *leaf
 	if by == 0 {
 		return
 	}
-	x.levels[0][i] = weight
+	*leaf = weight
 	for _, level := range x.levels[1:] {
 		i /= groupSize
-		level[i] += by
+		level[int(i)*x.columns+column] += by
 	}
 }
 
-// of is how much object i is sought.
-func (x *soughtTree) of(i uint32) float64 { return x.levels[0][i] }
+// drop takes object i out.
+func (x *soughtTree) drop(i uint32) {
+	if len(x.levels) == 0 {
+		return
+	}
+	n := x.columns
+	leaf := x.levels[0][int(i)*n : int(i)*n+n]
+	for _, level := range x.levels[1:] {
+		i /= groupSize
+		sums := level[int(i)*n : int(i)*n+n]
+		for c, v := range leaf {
+			sums[c] -= v
+		}
+	}
+	clear(leaf)
+}
 
-// total is how much all are sought together.
-func (x *soughtTree) total() float64 {
+// total is how much all are sought together by the clock of a column.
+func (x *soughtTree) total(column int) float64 {
 	sum := 0.0
-	for _, v := range x.levels[len(x.levels)-1] {
-		sum += v
+	top := x.levels[len(x.levels)-1]
+	for i := column; i < len(top); i += x.columns {
+		sum += top[i]
 	}
 	return sum
 }
 
-// pick finds the object at which the running total reaches a part of it. ok is
-// false where rounding leads to none.
-func (x *soughtTree) pick(part float64) (i uint32, ok bool) {
-	at, to := 0, len(x.levels[len(x.levels)-1])
+// pick finds the object at which the running total of a column reaches a part of
+// it. ok is false where rounding leads to none.
+func (x *soughtTree) pick(column int, part float64) (i uint32, ok bool) {
+	at, to := 0, len(x.levels[len(x.levels)-1])/x.columns
 	for l := len(x.levels) - 1; l >= 0; l-- {
 		level := x.levels[l]
-		for at < to && level[at] < part {
-			part -= level[at]
+		for at < to && level[at*x.columns+column] < part {
+			part -= level[at*x.columns+column]
 			at++
 		}
 		if at == to {
@@ -81,8 +102,8 @@ func (x *soughtTree) pick(part float64) (i uint32, ok bool) {
 		}
 		if l > 0 {
 			at *= groupSize
-			to = min(at+groupSize, len(x.levels[l-1]))
+			to = min(at+groupSize, len(x.levels[l-1])/x.columns)
 		}
 	}
-	return uint32(at), x.levels[0][at] > 0
+	return uint32(at), x.levels[0][at*x.columns+column] > 0
 }

@@ -146,7 +146,7 @@ func (w *Workspace) staysOf(out []stay, pop *population, i uint32, dates [3]floa
 		out = append(out, stay{i: i, stage: stage, state: s, entered: began, enter: date, leave: never, follows: follows, mass: mass, comp: comp})
 		last = len(out) - 1
 	}
-	if c := &w.c; c.continued[i] {
+	if c := &w.c; c.continued != nil && c.continued[i] {
 		// It has been there since the meeting, which is in the journal.
 		if s := stateOf(c.kind0[i], law.Bound, w.originOf(i)); pop.in[s] {
 			enter(s, dates[0], false)
