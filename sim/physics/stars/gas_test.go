@@ -94,7 +94,7 @@ func TestInfallLinear(t *testing.T) {
 // no use of what is conserved.
 func TestInfallAgainstRungeKutta(t *testing.T) {
 	us := []float64{1e-3, 0.05, 0.3, 0.6, 0.9, 0.97}
-	for _, c := range [][3]float64{{0.59, 1.4, 0.5}, {0.59, 2, 0.5}, {5, 1.1, 2}, {0.1, 1.4, 0.1}, {14, 2, 3}, {1, 1, 0.5}} {
+	for _, c := range [][3]float64{{0.59, 1.4, 0.5}, {5, 1.1, 2}, {14, 2, 3}} {
 		k, n, share := c[0], c[1], c[2]
 		b := births(t, Gas{9, 9.7 - math.Log10(k), 0, n, share, 9.7, endless})
 		args := []string{fmt.Sprint(k), fmt.Sprint(n), fmt.Sprint(share)}
