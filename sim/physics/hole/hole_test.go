@@ -131,6 +131,8 @@ func TestPublished(t *testing.T) {
 			row.Check(t, AbsorbedPower(mass(), today)/(constant.C*constant.C))
 		case "absorbed-part":
 			row.Check(t, AbsorbedPower(mass(), today)*absorbingSeconds()/(mass()*constant.Sun*constant.C*constant.C))
+		case "largest-mass":
+			row.Check(t, LargestMass(h0*math.Sqrt(1-matter)))
 		case "absorbed-over-emitted":
 			emitted := math.Pow(10, Log10LossRate(mass(), alpha("photons-gravitons"))) * constant.Sun * constant.C * constant.C / constant.Year
 			row.Check(t, AbsorbedPower(mass(), Temperature(mass()))/emitted)
@@ -143,12 +145,15 @@ func TestPublished(t *testing.T) {
 // today is the temperature of the relic sky, K (Fixsen 2009).
 const today = 2.7255
 
+// The expansion rate today, 1/s, and the share of matter (Planck Collaboration
+// 2018).
+const h0, matter = 67.66e3 / 3.0856775814913673e22, 0.3111
+
 // absorbingSeconds is for how long the sky of today would have to last to give
 // a hole what it takes in from now on: the integral of (T/today)^4 dt = a^-4
-// da/(a H), with H0 = 67.66 km/s/Mpc and a share of matter of 0.3111 (Planck
-// Collaboration 2018), in steps of ln a.
+// da/(a H), in steps of ln a.
 func absorbingSeconds() float64 {
-	const h0, matter, steps, most = 67.66e3 / 3.0856775814913673e22, 0.3111, 4000, 12.0
+	const steps, most = 4000, 12.0
 	sum := 0.0
 	for i := range steps {
 		x := (float64(i) + 0.5) * most / steps // ln a
