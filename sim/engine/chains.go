@@ -39,7 +39,7 @@ func (a *asker) chains(r *rows, ps []prospect, id func(int) uint32, c *columns) 
 		owner, dates = append(owner, id(i)), append(dates, p.date)
 	}
 	if c.chain == nil {
-		c.chain = map[uint32][]link{}
+		c.chain = make(map[uint32][]link, n)
 	}
 	for depth := 0; len(owner) > 0; depth++ {
 		if depth == longestChain {
@@ -89,9 +89,15 @@ func (a *asker) linkUp(r *rows, owner *[]uint32, dates *[]float64, c *columns) e
 				l.sought[k] = a.soughts[k][i]
 			}
 		}
-		c.chain[(*owner)[i]] = append(c.chain[(*owner)[i]], l)
-		c.noteGas((*owner)[i], len(c.chain[(*owner)[i]]), p)
-		if p.cause == 0 || p.kind == law.NoWord {
+		last := p.cause == 0 || p.kind == law.NoWord
+		links := c.chain[(*owner)[i]]
+		if links == nil && !last {
+			links = make([]link, 0, 2)
+		}
+		links = append(links, l)
+		c.chain[(*owner)[i]] = links
+		c.noteGas((*owner)[i], len(links), p)
+		if last {
 			continue
 		}
 		r.copyRow(kept, r, i)
@@ -170,14 +176,24 @@ func (m *Model) compositionOf(kind, before uint8) uint8 {
 	case law.BlackHole, law.CentralHole:
 		return law.Pure
 	}
+	if c := m.made[kind]; c != law.NoWord {
+		return c
+	}
+	return before
+}
+
+// compileMade lists what objects of the kinds that laws add are made of.
+func (m *Model) compileMade() {
+	for k := range m.made {
+		m.made[k] = law.NoWord
+	}
 	for _, u := range m.Set.All() {
 		for _, k := range u.Card.Kinds {
-			if m.Set.Kind(k.Name) == kind {
-				return k.Composition
+			if code := m.Set.Kind(k.Name); m.made[code] == law.NoWord {
+				m.made[code] = k.Composition
 			}
 		}
 	}
-	return before
 }
 
 // radiusOf is the radius of an object in km.

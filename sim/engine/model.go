@@ -67,7 +67,8 @@ type Model struct {
 	batch, rounds                   int       // rows to ask about at a time; where questions come in rounds
 	coolsByMetals                   bool
 	voices                          map[*law.Use]*voice
-	deathsMatter                    bool // a declared value changes when a star dies
+	made                            [256]uint8 // by kind: composition of those that laws add, law.NoWord of others
+	deathsMatter                    bool       // a declared value changes when a star dies
 	stopFate                        law.Fate
 	stopCause, allAdrift            uint8
 	oneFate                         bool // a cause of leaving sends objects one way only
@@ -141,6 +142,7 @@ func Compile(s Setup) (*Model, error) {
 	m.compileCauses()
 	m.compileSimple()
 	m.compileTurning()
+	m.compileMade()
 	m.compileVoices()
 	return m, errors.Join(m.compileClocks(), m.compileThresholds(), m.compilePopulations())
 }

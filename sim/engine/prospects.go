@@ -122,8 +122,18 @@ func (a *asker) starts(u *law.Use, s *rows, pick []int32, since func(int) float6
 		return nil, err
 	}
 	a.start = grown(a.start, s.n)
+	// The sky is colder than the coldest last of all: where that is before any
+	// of them began, none has to wait.
+	coldest, earliest := never, never
 	for i, t := range out.Columns[0].Values {
-		a.start[i] = max(since(at(pick, i)), a.sky.LogColderSince(t))
+		a.start[i] = since(at(pick, i))
+		coldest, earliest = min(coldest, t), min(earliest, a.start[i])
+	}
+	if s.n > 0 && a.sky.LogColderSince(coldest) <= earliest {
+		return a.start, nil
+	}
+	for i, t := range out.Columns[0].Values {
+		a.start[i] = max(a.start[i], a.sky.LogColderSince(t))
 	}
 	return a.start, nil
 }
