@@ -14,7 +14,10 @@ import (
 
 // remnants are the masses that the default laws leave of quantiles of the mass
 // function, once every star is dead.
-type remnants struct{ mass, weight []float64 }
+type remnants struct {
+	kind         []uint8
+	mass, weight []float64
+}
 
 // ask asks a default law one question about objects of one kind.
 func ask(t *testing.T, uses map[string]*law.Use, process, question string, kind uint8, columns map[string][]float64) law.Batch {
@@ -77,10 +80,12 @@ func remnantsOf(t *testing.T, uses map[string]*law.Use, n int) remnants {
 	mass := ask(t, uses, "mass-function", "mass", law.Star, map[string][]float64{"u": u}).Values("mass")
 	sort := ask(t, uses, "substellar-limit", "sort", law.Star, map[string][]float64{"mass": mass, "metals": metals}).Words("kind")
 	var out remnants
-	add := func(m, w float64) { out.mass, out.weight = append(out.mass, m), append(out.weight, w) }
+	add := func(k uint8, m, w float64) {
+		out.kind, out.mass, out.weight = append(out.kind, k), append(out.mass, m), append(out.weight, w)
+	}
 	for i, m := range mass {
 		if sort[i] == law.BrownDwarf {
-			add(m, weight[i])
+			add(law.BrownDwarf, m, weight[i])
 			continue
 		}
 		process := "remnant"
@@ -91,7 +96,7 @@ func remnantsOf(t *testing.T, uses map[string]*law.Use, n int) remnants {
 		for _, c := range ask(t, uses, process, "die", law.Star, star).Columns {
 			kind := uint8(slices.IndexFunc(law.KindWords, func(w string) bool { return law.ChanceColumn(w) == c.Name }))
 			if chance := c.Values[0]; chance > 0 {
-				add(ask(t, uses, process, "remain", kind, star).Values("mass")[0], weight[i]*chance)
+				add(kind, ask(t, uses, process, "remain", kind, star).Values("mass")[0], weight[i]*chance)
 			}
 		}
 	}

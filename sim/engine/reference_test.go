@@ -110,7 +110,7 @@ func populations() []galaxy.Population {
 		return &galaxy.Warmth{Quantity: quantity, Above: above, Value: value, Unit: unit}
 	}
 	return append(galaxy.Default(),
-		galaxy.Population{Name: "merged-stars", Condition: galaxy.Condition{Kinds: []string{"star"}, Origins: []string{"merged"}}},
+		galaxy.Population{Name: "merged-dwarfs", Condition: galaxy.Condition{Kinds: []string{"white-dwarf", "brown-dwarf"}, Origins: []string{"merged"}}},
 		galaxy.Population{Name: "relics", Condition: galaxy.Condition{Kinds: []string{"relic"}}},
 		galaxy.Population{Name: "bound-remnants", Condition: galaxy.Condition{Kinds: []string{"white-dwarf", "neutron-star"}, Places: []string{"bound"}}},
 		galaxy.Population{Name: "warm-bound", Condition: galaxy.Condition{Places: []string{"bound"}, Warmth: warm("temperature", true, 3000, "K")}},

@@ -28,6 +28,8 @@ type Warmth struct {
 func Default() []Population {
 	return []Population{
 		{"stars", Condition{Kinds: []string{"star"}, Origins: []string{"founded"}}},
+		{"merged-stars", Condition{Kinds: []string{"star"}, Origins: []string{"merged"}}},
+		{"all-stars", Condition{Kinds: []string{"star"}}},
 		{"brown-dwarfs", Condition{Kinds: []string{"brown-dwarf"}}},
 		{"white-dwarfs", Condition{Kinds: []string{"white-dwarf"}}},
 		{"glowing-white-dwarfs", Condition{Kinds: []string{"white-dwarf"},

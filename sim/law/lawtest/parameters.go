@@ -82,7 +82,11 @@ func (k *kit) probe(before []probe) []probe {
 	out := before
 	if before == nil {
 		for _, q := range k.card.Questions {
-			out = append(out, probe{question: q.Name, in: lay(q, append(k.entries(q, 500), k.corners(q)...))})
+			rows := 500
+			if q.Name == "meet" { // the two are seldom of the kinds that a parameter is about
+				rows = 8000
+			}
+			out = append(out, probe{question: q.Name, in: lay(q, append(k.entries(q, rows), k.corners(q)...))})
 		}
 	}
 	out = append([]probe(nil), out...)
