@@ -155,13 +155,17 @@ func TestFixedHalo(t *testing.T) {
 func TestNone(t *testing.T) {
 	u := law.NewUse(ejection.None())
 	out, err := u.Ask("rate", law.Batch{Rows: 1, Columns: []law.Column{
-		law.Numbers("mass_bound", []float64{4e10}), law.Numbers("founded_radius", []float64{1e4}),
+		law.Numbers("mass_bound", []float64{4.36e10}), law.Numbers("founded_mass", []float64{4 * 4.36e10}),
+		law.Numbers("founded_radius", []float64{1e4}), law.Numbers("founded_dispersion", []float64{2 * 86.6}),
 	}})
 	if err != nil {
 		t.Fatal(err)
 	}
 	if rate := out.Values("log10_rate_ejection")[0]; !math.IsInf(rate, -1) || out.Values("radius")[0] != 1e4 {
 		t.Errorf("rate 10^%v /yr, radius %v pc", rate, out.Values("radius")[0])
+	}
+	if got, want := out.Values("dispersion")[0], dynamics.Dispersion(4.36e10, 1e4); math.Abs(got/want-1) > 1e-3 {
+		t.Errorf("dispersion %v km/s, want %v of virial balance", got, want)
 	}
 }
 

@@ -11,7 +11,9 @@
 //
 // Prospects. An object that enters a kind at a date is asked for the wait of
 // every wearing and turning law that speaks for it; the earliest wins, a tie
-// goes to the process that comes first in [law.Processes]. Where one wearing
+// goes to the process that comes first in [law.Processes]. A turning law that
+// says how soon it may act at all ([law.Distant]) need not be asked about what
+// is gone before. Where one wearing
 // law acts alone its foretell counts; where several act the wait is the
 // integral of dM over the sum of their rates to the next threshold. A law that
 // answers heat acts only once the sky is colder: its wait starts then. What
