@@ -13,12 +13,11 @@
 // every wearing and turning law that speaks for it; the earliest wins, a tie
 // goes to the process that comes first in [law.Processes]. A turning law that
 // says how soon it may act at all ([law.Distant]) need not be asked about what
-// is gone before. Where one wearing
-// law acts alone its foretell counts; where several act the wait is the
-// integral of dM over the sum of their rates to the next threshold. A law that
-// answers heat acts only once the sky is colder: its wait starts then. What
-// follows a prospect (a neutron star that becomes a relic) is founded with it,
-// so that no law is asked per event.
+// is gone before. Where one wearing law acts alone its foretell counts; where
+// several act the wait is the integral of dM over the sum of their rates to the
+// next threshold. A law that answers heat acts only once the sky is colder: its
+// wait starts then. What follows a prospect (a neutron star that becomes a
+// relic) is founded with it, so that no law is asked per event.
 //
 // Clocks. The reading of clock k is the integral of its rate. A bound object
 // that is born at date b is hit when the reading has advanced from there by
