@@ -33,8 +33,8 @@
 // where objects meet. Values that move with time alone are followed to 10^300 yr.
 //
 // Encounters. The object whose clock fires seeks a partner, picked in
-// proportion to what is sought among those bound at the last refresh (a pick
-// that has left since, or is not born yet, is drawn again). Both wait, bound
+// proportion to what is sought among those bound as they are then (a pick of
+// itself, of one that waits or is not born yet is drawn again). Both wait, bound
 // and out of reach, for the next refresh, where all pairs are asked meet in one
 // batch. A refresh comes too when waiting objects make up 1 % of those bound. A
 // product keeps the id of the seeker and counts from the date of the meeting.
