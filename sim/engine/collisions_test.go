@@ -21,6 +21,7 @@ func TestCollidingGalaxies(t *testing.T) {
 		{"until everything is one", builtin(t, 400, 400, 3, 0, map[string]string{"ejection": "none", "nucleon-decay": "stable", "infall": "none"}), 200, false},
 		{"contracting", builtin(t, 2500, 2e9, 1, 30, nil), 300, false},
 		{"balanced", builtin(t, 1000, 2e9, 1, 30, map[string]string{"ejection": "balanced"}), 100, false},
+		{"seven clocks", builtin(t, 500, 2e9, 1, 30, map[string]string{"ejection": "balanced", "infall": "loss-cone"}), 30, false},
 	} {
 		t.Run(x.name, func(t *testing.T) {
 			for realisation := range uint64(2) {

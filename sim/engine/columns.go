@@ -61,7 +61,8 @@ type link struct {
 	sought [maxClocks]float64
 }
 
-const maxClocks = 6
+// maxClocks is how many clocks a run may have.
+const maxClocks = 8
 
 func (c *columns) resize(m *Model, n int) {
 	c.n = n

@@ -50,6 +50,9 @@ func (m *Model) compileClocks() error {
 			}
 		}
 	}
+	if len(m.Clocks) > maxClocks {
+		return fmt.Errorf("engine: the laws of this run have %d clocks: at most %d", len(m.Clocks), maxClocks)
+	}
 	m.allAdrift = m.cause("dark-energy-decay", "all-adrift")
 	first := 0
 	for _, u := range dynamics {
