@@ -78,6 +78,7 @@ var notes = []string{
 	"a black hole swallows a white dwarf or neutron star whole; two holes are one, less what is radiated (assumptions)",
 	"kinds that other laws add, such as relics, meet as white dwarfs do (assumption)",
 	"a speed well below that at which white dwarfs let go of matter, 1e3 km/s and more, is taken for granted",
+	"what comes out of a collision counts as new from then on: a white dwarf that tore a star apart, heated by it, cools from its start again (assumption)",
 	"binaries are left out: nearly all are soft and dissolve within 1e17 yr",
 	"the central hole takes no part: what falls in is the business of infall",
 	"an object counts among those it may meet: with N bound the rate is too high by a share 1/N",

@@ -55,15 +55,17 @@ func (w *Workspace) count(i uint32, sign float64) {
 	if !m.deathsMatter {
 		return
 	}
-	kind := int(w.kindOf(i))
-	e.add(m.slotNumberKind(kind), x)
-	e.add(m.slotMassKind(kind), x*mass)
+	if m.kindsCount {
+		kind := int(w.kindOf(i))
+		e.add(m.slotNumberKind(kind), x)
+		e.add(m.slotMassKind(kind), x*mass)
+	}
 	for k := range m.Clocks {
 		if m.sums[k] {
 			e.add(m.slotSum(k), x*w.sus(k, i))
-			if m.Clocks[k].Fate == law.FateMeet {
-				e.add(m.slotSought(k), x*w.meets.sought(w, k, i))
-			}
+		}
+		if m.soughts[k] {
+			e.add(m.slotSought(k), x*w.meets.counted(w, k, i, sign))
 		}
 	}
 }

@@ -115,7 +115,7 @@ func (m *Model) compileDiverts(u *law.Use) error {
 
 func (m *Model) compileRates(dynamics []*law.Use) error {
 	first := 0
-	m.sums = make([]bool, len(m.Clocks))
+	m.sums, m.soughts = make([]bool, len(m.Clocks)), make([]bool, len(m.Clocks))
 	declare := func(slot int) {
 		for _, d := range m.declared {
 			if d == slot {
@@ -132,10 +132,10 @@ func (m *Model) compileRates(dynamics []*law.Use) error {
 			m.deathsMatter = true
 		}
 		for k := range m.Clocks {
-			if slot == m.slotSum(k) || slot == m.slotSought(k) {
-				m.sums[k] = true
-			}
+			m.sums[k] = m.sums[k] || slot == m.slotSum(k)
+			m.soughts[k] = m.soughts[k] || slot == m.slotSought(k) && m.Clocks[k].Fate == law.FateMeet
 		}
+		m.kindsCount = m.kindsCount || slot >= slotKinds && slot < m.slotSum(0)
 	}
 	// The frame's law is asked first: the others may read its radius.
 	for pass := range 2 {

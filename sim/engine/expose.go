@@ -1,7 +1,5 @@
 package engine
 
-import "wane/sim/law"
-
 // exposeAll asks the susceptibilities of both stages of every object and
 // fills the sums. In a compact run nothing is held: see enterQuiet.
 func (w *Workspace) exposeAll() error {
@@ -31,12 +29,12 @@ func (w *Workspace) exposeAll() error {
 	}
 	w.meets.plant(w)
 	for k := range m.Clocks {
-		if m.sums[k] {
-			for i := range c.n {
+		for i := range c.n {
+			if m.sums[k] {
 				w.env.add(m.slotSum(k), m.Weight*w.s[0][k][i])
-				if m.Clocks[k].Fate == law.FateMeet {
-					w.env.add(m.slotSought(k), m.Weight*w.meets.sought(w, k, uint32(i)))
-				}
+			}
+			if m.soughts[k] {
+				w.env.add(m.slotSought(k), m.Weight*w.meets.sought(w, k, uint32(i)))
 			}
 		}
 	}

@@ -117,7 +117,7 @@ const (
 func (w *Workspace) setBounds() {
 	n := len(w.m.Clocks)
 	slack := boundSlack
-	if w.anyBroken {
+	if w.anyBroken || w.m.encounter != nil {
 		slack = moreSlack
 	}
 	for j := range n {

@@ -95,6 +95,15 @@ func (x *meetings) sought(w *Workspace, k int, i uint32) float64 {
 	}
 }
 
+// counted is sought for an object that is about to change or leave (sign -1), or
+// has changed: the tree still holds what it was.
+func (x *meetings) counted(w *Workspace, k int, i uint32, sign float64) float64 {
+	if sign < 0 {
+		return x.tree.of(i, x.column[k])
+	}
+	return x.sought(w, k, i)
+}
+
 // plant readies the tree before the first event: all are bound, and sought as
 // in their first stage. Who is not born when it is picked is passed over.
 func (x *meetings) plant(w *Workspace) {

@@ -59,7 +59,8 @@ type Model struct {
 	declared                        []int  // slots the rates depend on
 	timed                           []bool // per declared: moves with time alone
 	timedSlots                      []int
-	sums                            []bool // per clock: its sum is declared
+	sums, soughts                   []bool // per clock: the sum of that is declared
+	kindsCount                      bool   // a value of one kind is declared
 	simple                          bool
 	wornBy                          [256]int8 // by kind: the wearing law, -1: none; good in a simple run
 	wornInPart                      bool      // a law speaks for part of a kind only

@@ -47,7 +47,7 @@ func (x *past) in(i, k int, t float64) float64 {
 }
 
 // index prepares find for many look-ups: where the pieces begin that start in
-// each of some thousand intervals of date.
+// each of some intervals of date, more than there are pieces.
 func (x *past) index() {
 	x.from = x.from[:0]
 	if len(x.t) < 64 {
@@ -55,7 +55,7 @@ func (x *past) index() {
 	}
 	x.low = math.Float64bits(x.t[0])
 	span := math.Float64bits(x.t[len(x.t)-1]) - x.low
-	x.shift = uint(max(0, bits.Len64(span)-14))
+	x.shift = uint(max(0, bits.Len64(span)-min(16, bits.Len(uint(len(x.t)))+1)))
 	at := 0
 	for i := range span>>x.shift + 1 {
 		for at+1 < len(x.t) && (math.Float64bits(x.t[at+1])-x.low)>>x.shift < i {

@@ -18,7 +18,7 @@ type reach struct {
 func (a *asker) newReach(metal float64) *reach {
 	m := a.m
 	x := &reach{lots: make([]lot, len(m.Set.Kinds))}
-	if !m.simple || m.encounter != nil || readsAny(m.live, "live", "u", "e") {
+	if !m.simple || readsAny(m.live, "live", "u", "e") {
 		return x
 	}
 	for _, u := range m.wearing {

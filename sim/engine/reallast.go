@@ -32,7 +32,8 @@ import (
 //
 // NaN where the last was taken by a clock, by the end of the galaxy, of the run
 // or of the sky; where a law draws the wait itself, several laws wear one kind,
-// objects meet, or a law does not answer at the edge; for populations with a
+// or a law does not answer at the edge; where objects meet, but for stars as they
+// were founded, since what merges has no such date; for populations with a
 // condition on warmth; where the last might be of a kind of which the sample
 // holds none that came to its end, or follows from a change (a relic); and where
 // no member of the real number is to be expected.
@@ -56,7 +57,13 @@ func (w *Workspace) realLasts(o *Outcome) {
 		if !w.reach.ok || w.c.metals != nil {
 			return
 		}
-		if seen.total == nil {
+		switch {
+		case w.m.encounter != nil:
+			if !w.m.populations[p].foundedStars() {
+				continue
+			}
+			seen = w.waysOfStars(p)
+		case seen.total == nil:
 			seen = w.waysOfEnding()
 		}
 		if t := w.realLast(&w.m.populations[p], &seen, orderstat.Target(0.5)); t <= o.End {
@@ -145,6 +152,34 @@ func (w *Workspace) waysOfEnding() ways {
 			}
 			x.made[l.kind] = x.made[l.kind] || w.books.turns[cause]
 			cause = l.ended
+		}
+	}
+	return x
+}
+
+// foundedStars tells whether a population is one of stars as they were founded,
+// and of nothing else.
+func (p *population) foundedStars() bool {
+	for s, in := range p.in {
+		if in && (state(s).kind() != law.Star || state(s)%2 != law.Founded) {
+			return false
+		}
+	}
+	return true
+}
+
+// waysOfStars is waysOfEnding for a population of founded stars: those that
+// have met others are not in the columns any more, but they were counted.
+func (w *Workspace) waysOfStars(p int) ways {
+	kinds := len(w.m.Set.Kinds)
+	x := ways{total: make([]int64, kinds), links: -never}
+	for place := range x.ended {
+		x.ended[place] = make([]int64, kinds)
+	}
+	x.total[law.Star] = int64(w.counts.entered[p])
+	for cause, count := range w.counts.left[p] {
+		if count > 0 && w.m.isBecoming(uint8(cause)) {
+			x.ended[0][law.Star] += count
 		}
 	}
 	return x

@@ -88,7 +88,17 @@ func plainSetup(t *testing.T, objects int, real float64) Setup {
 	if len(faults) > 0 {
 		t.Fatal(faults)
 	}
-	return Setup{Set: set, Objects: objects, Real: real, Radius: 1e4, Until: math.Inf(1), Seed: 1, Populations: galaxy.Default()[:3]}
+	return Setup{Set: set, Objects: objects, Real: real, Radius: 1e4, Until: math.Inf(1), Seed: 1, Populations: []galaxy.Population{byName("stars"), byName("brown-dwarfs"), byName("white-dwarfs")}}
+}
+
+// byName is one of the populations that every run counts.
+func byName(name string) galaxy.Population {
+	for _, p := range galaxy.Default() {
+		if p.Name == name {
+			return p
+		}
+	}
+	panic("no population " + name)
 }
 
 // TestRealLastClosedForm: the last of N births that fall exponentially is
@@ -128,8 +138,8 @@ func (s builtinSkies) Draw(seed, realisation uint64) (Sky, error) {
 	return s.prepared.Draw(seed, realisation)
 }
 
-// builtin is a galaxy under the default laws.
-func builtin(t testing.TB, objects int, real float64, seed uint64) *Model {
+// builtin is a galaxy under the default laws, but for that of encounters.
+func builtin(t testing.TB, objects int, real float64, seed uint64, encounter string) *Model {
 	t.Helper()
 	r, err := plugins.Builtin()
 	if err != nil {
@@ -138,6 +148,9 @@ func builtin(t testing.TB, objects int, real float64, seed uint64) *Model {
 	var uses []*law.Use
 	for _, p := range law.Processes {
 		if name, ok := plugins.Defaults()[p.Name]; ok {
+			if p.Name == "encounter" {
+				name = encounter
+			}
 			l, _ := r.Find(p.Name, name)
 			uses = append(uses, law.NewUse(l))
 		}
@@ -163,8 +176,8 @@ func builtin(t testing.TB, objects int, real float64, seed uint64) *Model {
 // expects between 9.2 and 1e-4 objects left, which it misses once in 5000 times.
 func TestRealLastOfWhole(t *testing.T) {
 	const real = 3e5
-	whole := builtin(t, real, real, 2).NewWorkspace()
-	sample := builtin(t, 1e4, real, 1).NewWorkspace()
+	whole := builtin(t, real, real, 2, "none").NewWorkspace()
+	sample := builtin(t, 1e4, real, 1, "none").NewWorkspace()
 	told := 0
 	for r := range uint64(4) {
 		truth, said := runOne(t, whole, r), runOne(t, sample, r)
@@ -194,12 +207,35 @@ func TestRealLastOfWhole(t *testing.T) {
 	}
 }
 
+// TestRealLastWhereObjectsMeet: what merges has no date that was settled when it
+// was founded, so only stars as they were founded are told of; collisions come
+// after they are dead, and the date is the one without.
+func TestRealLastWhereObjectsMeet(t *testing.T) {
+	alone, meeting := builtin(t, 5000, 2e11, 1, "none"), builtin(t, 5000, 2e11, 1, "collisions")
+	a, b := runOne(t, alone.NewWorkspace(), 0), runOne(t, meeting.NewWorkspace(), 0)
+	if b.Fired["encounter"] == 0 {
+		t.Fatal("nobody met")
+	}
+	for p, pop := range galaxy.Default() {
+		got := b.Populations[p].RealLast
+		if pop.Name != "stars" {
+			if !math.IsNaN(got) {
+				t.Errorf("%s: the last of all at 10^%v yr", pop.Name, got)
+			}
+			continue
+		}
+		if want := a.Populations[p].RealLast; got != want || math.IsNaN(want) {
+			t.Errorf("stars: the last of all at 10^%v yr, without encounters at 10^%v yr", got, want)
+		}
+	}
+}
+
 // TestRealLastForgetsOthers: it is a function of the realisation alone, not of
 // what the workspace ran before.
 func TestRealLastForgetsOthers(t *testing.T) {
-	used := builtin(t, 2000, 2e11, 1).NewWorkspace()
+	used := builtin(t, 2000, 2e11, 1, "none").NewWorkspace()
 	runOne(t, used, 5)
-	again, fresh := runOne(t, used, 3), runOne(t, builtin(t, 2000, 2e11, 1).NewWorkspace(), 3)
+	again, fresh := runOne(t, used, 3), runOne(t, builtin(t, 2000, 2e11, 1, "none").NewWorkspace(), 3)
 	for p := range again.Populations {
 		a, b := again.Populations[p].RealLast, fresh.Populations[p].RealLast
 		if a != b && !(math.IsNaN(a) && math.IsNaN(b)) {
@@ -210,7 +246,7 @@ func TestRealLastForgetsOthers(t *testing.T) {
 
 // BenchmarkRealLast is what the estimate adds to a realisation of a sample.
 func BenchmarkRealLast(b *testing.B) {
-	w := builtin(b, 1e5, 2e11, 1).NewWorkspace()
+	w := builtin(b, 1e5, 2e11, 1, "none").NewWorkspace()
 	o, err := w.Run(context.Background(), 0)
 	if err != nil {
 		b.Fatal(err)

@@ -104,7 +104,7 @@ func (w *Workspace) begin() {
 	e.add(slotNumber, m.Real)
 	e.add(slotMass, m.Weight*c.founded.value())
 	e.add(slotCentral, m.CentralMass)
-	if m.deathsMatter {
+	if m.kindsCount {
 		for i := range c.n {
 			e.add(m.slotNumberKind(int(c.kind0[i])), m.Weight)
 			e.add(m.slotMassKind(int(c.kind0[i])), m.Weight*c.mass0[i])

@@ -60,6 +60,9 @@ func (x *soughtTree) set(i uint32, column int, weight float64) {
 	}
 }
 
+// of is how much object i is sought by the clock of a column.
+func (x *soughtTree) of(i uint32, column int) float64 { return x.levels[0][int(i)*x.columns+column] }
+
 // drop takes object i out.
 func (x *soughtTree) drop(i uint32) {
 	if len(x.levels) == 0 {
