@@ -47,9 +47,15 @@ func (w *Workspace) subtract(i uint32) {
 
 // count adds sign times object i to the galaxy values.
 func (w *Workspace) count(i uint32, sign float64) {
+	w.env.add(slotNumber, sign*w.m.Weight)
+	w.countStuff(i, sign)
+}
+
+// countStuff is count but for the number of objects, which a change of an object
+// leaves as it is.
+func (w *Workspace) countStuff(i uint32, sign float64) {
 	m, e := w.m, w.env
 	x := sign * m.Weight
-	e.add(slotNumber, x)
 	mass := w.massOf(i)
 	e.add(slotMass, x*mass)
 	if !m.deathsMatter {

@@ -49,6 +49,8 @@ type Environment struct {
 
 	base   []float64 // y_j0
 	offset []float64 // a_j
+	seen   []float64 // y_j at the last update, NaN after a refresh
+	lny    []float64 // of that
 	slope  [][]float64
 	rate0  []float64
 	Rates  []float64 // now, per yr times 10^unit
@@ -162,6 +164,7 @@ func (m *Model) NewEnvironment() *Environment {
 	n, k, j := m.slots(), len(m.Clocks), len(m.declared)
 	e.value, e.lost = make([]float64, n), make([]float64, n)
 	e.base, e.offset = make([]float64, j), make([]float64, j)
+	e.seen, e.lny = make([]float64, j), make([]float64, j)
 	e.rate0, e.Rates = make([]float64, k), make([]float64, k)
 	e.step = make([]float64, j+1)
 	e.slope = make([][]float64, k)
@@ -242,13 +245,12 @@ func (e *Environment) moved() bool {
 
 // Update sets Rates from the present values by the local power law.
 func (e *Environment) update() {
-	var lny [16]float64
-	n := len(e.m.declared)
+	n, lny := len(e.m.declared), e.lny
 	for j, slot := range e.m.declared {
-		lny[j] = 0
 		if !e.m.timed[j] && e.base[j] > 0 {
-			y := e.get(slot) + e.offset[j]
-			lny[j] = lnNear((y - e.base[j]) / e.base[j])
+			if y := e.get(slot) + e.offset[j]; y != e.seen[j] {
+				e.seen[j], lny[j] = y, lnNear((y-e.base[j])/e.base[j])
+			}
 		}
 	}
 	for k, s := range e.slope {

@@ -86,11 +86,11 @@ func (w *Workspace) enterStage(i uint32, stage int, t float64) error {
 	}
 	matters := w.m.deathsMatter
 	if matters {
-		w.count(i, -1)
+		w.countStuff(i, -1)
 	}
 	w.stage[i] = uint8(stage)
 	if matters {
-		w.count(i, +1)
+		w.countStuff(i, +1)
 	}
 	w.meets.renew(w, i)
 	if !left {

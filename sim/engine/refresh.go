@@ -79,7 +79,7 @@ func (e *Environment) askRates() error {
 	step := e.step[:rows]
 	step[0] = 0
 	for j, slot := range m.declared {
-		e.offset[j] = 0
+		e.offset[j], e.seen[j], e.lny[j] = 0, math.NaN(), 0
 		v := e.get(slot)
 		h := -probeStep
 		switch {

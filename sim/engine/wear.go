@@ -153,10 +153,10 @@ func (w *Workspace) wearStep() error {
 			continue
 		}
 		w.keepUnspent(i, t)
-		w.count(i, -1)
+		w.countStuff(i, -1)
 		w.lighten(i, before[j]-r.mass[j])
 		w.setSusceptibilities(i, s, w.ask.soughts, j)
-		w.count(i, +1)
+		w.countStuff(i, +1)
 		w.meets.renew(w, i)
 		for k := range w.m.Clocks {
 			w.respend(k, i, t)
