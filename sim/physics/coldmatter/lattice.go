@@ -9,9 +9,13 @@ import (
 // factor at zero energy, MeV barn (orders of magnitude, from memory).
 type Nuclei struct{ Z, A, Log10S float64 }
 
-// Carbon, oxygen and silicon.
-func Carbon() Nuclei  { return Nuclei{6, 12, 16} }
-func Oxygen() Nuclei  { return Nuclei{8, 16, 24} }
+// Carbon is carbon-12.
+func Carbon() Nuclei { return Nuclei{6, 12, 16} }
+
+// Oxygen is oxygen-16.
+func Oxygen() Nuclei { return Nuclei{8, 16, 24} }
+
+// Silicon is silicon-28.
 func Silicon() Nuclei { return Nuclei{14, 28, 40} }
 
 // Log10LatticeTime returns how long nuclei on a lattice at zero temperature
