@@ -220,7 +220,7 @@ func wantNote(t *testing.T, s Summary, part string) {
 
 func TestConditionsInWords(t *testing.T) {
 	want := map[string]string{
-		"stars": "founded stars", "brown-dwarfs": "brown dwarfs", "white-dwarfs": "white dwarfs",
+		"stars": "founded stars", "merged-stars": "merged stars", "all-stars": "stars", "brown-dwarfs": "brown dwarfs", "white-dwarfs": "white dwarfs",
 		"glowing-white-dwarfs": "white dwarfs hotter than 798 K", "neutron-stars": "neutron stars", "black-holes": "black holes",
 		"central-hole": "the central hole", "bound-objects": "objects bound to the galaxy", "adrift-objects": "objects adrift",
 	}
