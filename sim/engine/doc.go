@@ -41,7 +41,8 @@
 //
 // Wearing while bound. From the date at which a bound object has lost 1 % of
 // its mass, masses and susceptibilities of bound objects are brought up to
-// date in steps (see wear.go).
+// date in steps by the rate in the middle of each, or half the rate at its
+// start where that is more (see wear.go).
 //
 // Draws are keyed (seed, realisation, process, object, generation, number);
 // the numbers are the constants in draws.go.

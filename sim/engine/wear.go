@@ -138,7 +138,10 @@ func (w *Workspace) wearStep() error {
 		return err
 	}
 	for j, i := range x.ids {
-		r.mass[j] = before[j] - mid[j]*(t-x.since[i])
+		// Where the rate drops within the step, as that of a hole whose memory begins
+		// to hold it back, the object has got as far as the drop, which is no further
+		// off than the middle. Else it would never pass it.
+		r.mass[j] = before[j] - max(mid[j], 0.5*x.rate[i])*(t-x.since[i])
 		if !(r.mass[j] > w.leastWorn(i)) {
 			r.mass[j], x.rate[i] = before[j], 0 // its prospect is about to end it
 		}

@@ -88,7 +88,7 @@ func (g *run) wearStep() error {
 		if mass > least {
 			r := o.row()
 			r.mass = s.mass - 0.5*o.wearRate*dt
-			mass = s.mass - g.wearOf(r)*dt
+			mass = s.mass - max(g.wearOf(r), 0.5*o.wearRate)*dt
 			stepped = true
 		}
 		if !(mass > least) {
