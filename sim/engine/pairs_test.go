@@ -83,7 +83,7 @@ func TestEveryLaw(t *testing.T) {
 			}
 			t.Run(fmt.Sprintf("%s=%s,%s=%s", b[0], b[1], a[0], a[1]), func(t *testing.T) {
 				t.Parallel()
-				throughGalaxy(t, r, 60, map[string]string{a[0]: a[1], b[0]: b[1]})
+				throughGalaxy(t, r, 120, map[string]string{a[0]: a[1], b[0]: b[1]})
 			})
 		}
 	}
