@@ -40,6 +40,10 @@ func (a *asker) newReach(metal float64) *reach {
 	slices.Sort(mass)
 	mass = slices.Compact(mass)
 	for kind := range x.lots {
+		if m.encounter != nil && kind != law.Star { // whatever merges may be the last
+			x.lots[kind] = lot{untold: true, expected: never, latest: never}
+			continue
+		}
 		x.lots[kind] = a.lotOf(uint8(kind), mass, decades, metal, &x.born)
 	}
 	return x

@@ -48,7 +48,8 @@ func (w *Workspace) realLasts(o *Outcome) {
 	var seen ways
 	for p := range o.Populations {
 		out := &o.Populations[p]
-		if w.m.populations[p].Warmth != nil || out.Peak == 0 || out.CutLast || !w.m.settled(w.counts.lastWhy[p]) {
+		if w.m.populations[p].Warmth != nil || out.Peak == 0 || out.CutLast || !w.m.settled(w.counts.lastWhy[p]) ||
+			w.m.encounter != nil && !w.m.populations[p].foundedStars() {
 			continue
 		}
 		if w.reach == nil {
@@ -59,9 +60,6 @@ func (w *Workspace) realLasts(o *Outcome) {
 		}
 		switch {
 		case w.m.encounter != nil:
-			if !w.m.populations[p].foundedStars() {
-				continue
-			}
 			seen = w.waysOfStars(p)
 		case seen.total == nil:
 			seen = w.waysOfEnding()
