@@ -69,10 +69,14 @@ func TestEveryLaw(t *testing.T) {
 	if len(all) < 3 {
 		t.Fatalf("only the alternatives %v", all)
 	}
+	objects := 400
+	if testing.Short() {
+		objects = 120
+	}
 	for i, a := range all {
 		t.Run(a[0]+"="+a[1], func(t *testing.T) {
 			t.Parallel()
-			throughGalaxy(t, r, 400, map[string]string{a[0]: a[1]})
+			throughGalaxy(t, r, objects, map[string]string{a[0]: a[1]})
 		})
 		if testing.Short() {
 			continue
